@@ -1,0 +1,38 @@
+import knex, { Knex } from 'knex'
+import { knexSnakeCaseMappers } from 'objection'
+import pg from 'pg'
+import { MarramPgClient } from './client'
+
+const INT8 = 20
+const NUMERIC = 1700
+const DATE = 1082
+const DATE_ARRAY = 1182
+
+// Counts and minor units fit in a double exactly; one that does not must stop us, not round.
+pg.types.setTypeParser(INT8, (text) => {
+  const value = Number(text)
+  if (!Number.isSafeInteger(value)) throw new RangeError(`${text} is beyond a safe integer`)
+  return value
+})
+pg.types.setTypeParser(NUMERIC, Number)
+// A calendar day has no zone: it stays text.
+pg.types.setTypeParser(DATE, (text) => text)
+// The array's number is missing from the driver's list of types.
+pg.types.setTypeParser(DATE_ARRAY as never, (text: string) => text.slice(1, -1).split(',').filter(Boolean))
+
+/** Opens a pool. Rows come back in camelCase, and identifiers go out in snake_case. */
+export function connect(options: { url: string; poolSize: number; name: string }): Knex {
+  return knex({
+    // Typed as Knex's own class, whose constructor it shares.
+    client: MarramPgClient as unknown as typeof Knex.Client,
+    connection: {
+      connectionString: options.url,
+      application_name: options.name,
+      statement_timeout: 15_000,
+      idle_in_transaction_session_timeout: 30_000,
+    },
+    pool: { min: 0, max: options.poolSize },
+    acquireConnectionTimeout: 15_000,
+    ...knexSnakeCaseMappers(),
+  })
+}

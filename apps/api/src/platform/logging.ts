@@ -1,0 +1,59 @@
+import pino, { type DestinationStream, type Logger } from 'pino'
+
+/** What a log line may carry beside its message. Everything else is dropped, names and mail first. */
+const ALLOWED = new Set([
+  'requestId',
+  'method',
+  'route',
+  'status',
+  'ms',
+  'code',
+  'queue',
+  'event',
+  'academyId',
+  'accountId',
+  'sessionId',
+  'enrolmentId',
+  'orderId',
+  'refundId',
+  'port',
+  'mode',
+  'count',
+  'err',
+])
+
+const KEPT_OF_ERRORS = ['type', 'message', 'stack', 'code', 'constraint', 'table'] as const
+
+/**
+ * The process's logger. Fields that are not on the allow-list never reach the output, so that a
+ * careless line cannot leak what a golfer typed.
+ */
+export function makeLogger(options: { level: string; destination?: DestinationStream }): Logger {
+  return pino(
+    {
+      level: options.level,
+      base: null,
+      timestamp: pino.stdTimeFunctions.isoTime,
+      formatters: {
+        level: (label) => ({ level: label }),
+        log: (fields) =>
+          Object.fromEntries(Object.entries(fields).filter(([name]) => ALLOWED.has(name))),
+      },
+      serializers: { err: describeError },
+    },
+    options.destination ?? pino.destination({ dest: 1, sync: false }),
+  )
+}
+
+function describeError(error: unknown): Record<string, unknown> {
+  if (!(error instanceof Error)) return { type: typeof error }
+  const source = error as Error & Record<string, unknown>
+  const all: Record<string, unknown> = { ...source, type: error.name, stack: error.stack }
+  // A database error's message can repeat a row's values; its code and constraint say enough.
+  const isDatabase = typeof source['severity'] === 'string'
+  all['message'] = isDatabase ? 'database error' : error.message
+  if (isDatabase) all['stack'] = undefined
+  return Object.fromEntries(KEPT_OF_ERRORS.map((name) => [name, all[name]]))
+}
+
+export type { Logger }

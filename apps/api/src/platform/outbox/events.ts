@@ -1,0 +1,51 @@
+/**
+ * What features tell each other after the fact. An event is written in the transaction that caused
+ * it, and carries ids only: whoever hears it reads the truth again.
+ */
+export interface OutboxEvents {
+  'account.link-wanted': { accountId: string; purpose: 'verify' | 'reset' }
+  'invitation.made': { academyId: string; invitationId: string }
+  'enrolment.confirmed': { academyId: string; enrolmentId: string }
+  'enrolment.offered': { academyId: string; enrolmentId: string }
+  'enrolment.given-up': { academyId: string; enrolmentId: string; refundMinor: number }
+  'session.called-off': { academyId: string; sessionId: string }
+  'session.changed': { academyId: string; sessionId: string }
+  'register.closed': { academyId: string; sessionId: string; revision: number }
+  'register.reopened': { academyId: string; sessionId: string; revision: number }
+  'hold.lapsed': { academyId: string; enrolmentId: string }
+  'choice.due': { academyId: string; placeId: string }
+  'refund.asked': { academyId: string; refundId: string }
+  'payments.told': { eventId: string; account: string | null; type: string; objectId: string }
+  'mail.told': { eventId: string; type: string; email: string }
+}
+
+export type EventName = keyof OutboxEvents
+
+/** Who listens. Each listener has a queue of its own, so that one's trouble holds up no other. */
+export const LISTENERS = {
+  'account.link-wanted': ['messaging'],
+  'invitation.made': ['messaging'],
+  'enrolment.confirmed': ['messaging'],
+  'enrolment.offered': ['messaging'],
+  'enrolment.given-up': ['messaging'],
+  'session.called-off': ['checkout', 'messaging'],
+  'session.changed': ['checkout', 'messaging'],
+  'register.closed': ['checkout'],
+  'register.reopened': ['checkout'],
+  'hold.lapsed': ['checkout'],
+  'choice.due': ['checkout'],
+  'refund.asked': ['checkout'],
+  'payments.told': ['checkout'],
+  'mail.told': ['messaging'],
+} as const satisfies Record<EventName, readonly string[]>
+
+export type Listener = 'checkout' | 'messaging'
+
+/** The handlers of one listener, by event. */
+export type Handlers = { [E in EventName]?: (payload: OutboxEvents[E]) => Promise<void> }
+
+export const queueOf = (event: EventName, listener: string): string => `${listener}.${event}`
+
+export const ALL_QUEUES: readonly string[] = Object.entries(LISTENERS).flatMap(
+  ([event, listeners]) => listeners.map((listener) => `${listener}.${event}`),
+)

@@ -1,0 +1,70 @@
+import type { Knex } from 'knex'
+import type { BeginOptions } from '../db/client'
+import { invariant } from '../invariant'
+
+declare const inside: unique symbol
+
+/** A transaction inside one academy: its rows, and no others, can be seen and written. */
+export type AcademyTrx = Knex.Transaction & { readonly [inside]: 'academy' }
+
+/** A transaction outside any academy: accounts, sign-in sessions and other reference tables. */
+export type PlainTrx = Knex.Transaction & { readonly [inside]: 'nothing' }
+
+const academies = new WeakMap<object, string>()
+const UUID = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/
+const SLUG = /^[a-z0-9]+(-[a-z0-9]+)*$/
+
+/** The academy that a transaction is inside of. Throws for one that is inside none. */
+export function academyOf(trx: object | undefined): string {
+  const academyId = trx && academies.get(trx)
+  invariant(academyId, 'a query on academy rows ran outside an academy')
+  return academyId
+}
+
+/**
+ * Runs `work` in one transaction inside an academy. The setting that row-level security reads is
+ * made with BEGIN, in the same message, and lasts as long as the transaction.
+ */
+export function inAcademy<T>(
+  db: Knex,
+  academyId: string,
+  work: (trx: AcademyTrx) => Promise<T>,
+  options: { readOnly?: boolean } = {},
+): Promise<T> {
+  invariant(UUID.test(academyId), 'an academy is known by its id')
+  const withBegin = `SELECT set_config('app.academy_id', '${academyId}', true)`
+  return begin(db, { ...options, withBegin }, (trx) => {
+    academies.set(trx, academyId)
+    return work(trx as AcademyTrx)
+  })
+}
+
+/**
+ * Runs raw, read-only SQL inside the academy of this address, finding it in the same message as
+ * BEGIN. An unknown address sees no rows at all. The model layer does not work in here.
+ */
+export function readPageOf<T>(
+  db: Knex,
+  slug: string,
+  work: (trx: Knex.Transaction) => Promise<T>,
+): Promise<T> {
+  const wanted = SLUG.test(slug) ? slug : ''
+  const withBegin =
+    `SELECT set_config('app.academy_id', ` +
+    `coalesce(find_academy_by_slug('${wanted}')::text, ''), true)`
+  return begin(db, { readOnly: true, withBegin }, work)
+}
+
+/** Runs `work` in one transaction outside any academy: tenant tables look empty there. */
+export function inPlain<T>(db: Knex, work: (trx: PlainTrx) => Promise<T>): Promise<T> {
+  return begin(db, {}, (trx) => work(trx as PlainTrx))
+}
+
+function begin<T>(
+  db: Knex,
+  options: BeginOptions & { readOnly?: boolean },
+  work: (trx: Knex.Transaction) => Promise<T>,
+): Promise<T> {
+  // Knex hands unknown options on to the transaction class, where BEGIN reads them.
+  return db.transaction(work, options as Knex.TransactionConfig)
+}
