@@ -83,22 +83,54 @@ export function instantReader(span: {
   fromLocalMs: number
   toLocalMs: number
 }): (localMs: number) => number {
-  // No zone is as much as a day from UTC, so a day on either side holds all that can matter.
-  const from = new Date(span.fromLocalMs - DAY_MILLISECONDS)
-  const to = new Date(span.toLocalMs + DAY_MILLISECONDS)
-  const transitions = transitionsBetween({ zone: span.zone, from, to })
-  const firstOffset =
-    transitions[0]?.offsetBeforeMinutes ?? offsetMinutes(zonedAt(+from, span.zone))
-  const periods = transitions.map(({ at, offsetBeforeMinutes, offsetAfterMinutes }) => ({
-    // Both a time in a gap and the first of two equal ones belong to the offset before.
-    fromLocalMs:
-      at.valueOf() + Math.max(offsetBeforeMinutes, offsetAfterMinutes) * MINUTE_MILLISECONDS,
-    offsetMinutes: offsetAfterMinutes,
-  }))
+  const { firstOffsetMs, changes } = offsetsBetween(
+    span.zone,
+    new Date(span.fromLocalMs).getUTCFullYear(),
+    new Date(span.toLocalMs).getUTCFullYear(),
+  )
   return (localMs) => {
-    const period = periods.findLast(({ fromLocalMs }) => localMs >= fromLocalMs)
-    return localMs - (period?.offsetMinutes ?? firstOffset) * MINUTE_MILLISECONDS
+    const last = changes.findLast((change) => localMs >= change.fromLocalMs)
+    return localMs - (last?.offsetMs ?? firstOffsetMs)
   }
+}
+
+interface Offsets {
+  firstOffsetMs: number
+  /** From which local time on an offset holds. */
+  changes: readonly { fromLocalMs: number; offsetMs: number }[]
+}
+
+/**
+ * What was asked of zones before. To ask takes as long as to expand a run of eight sessions, and
+ * an academy asks for the same season of the same zone all day.
+ */
+const offsetsAsked = new Map<string, Offsets>()
+const MOST_OFFSETS_ASKED = 500
+
+function offsetsBetween(zone: string, firstYear: number, lastYear: number): Offsets {
+  const key = `${zone} ${firstYear} ${lastYear}`
+  const known = offsetsAsked.get(key)
+  if (known) return known
+  if (offsetsAsked.size >= MOST_OFFSETS_ASKED) offsetsAsked.clear()
+  const asked = askOffsets(zone, firstYear, lastYear)
+  offsetsAsked.set(key, asked)
+  return asked
+}
+
+function askOffsets(zone: string, firstYear: number, lastYear: number): Offsets {
+  // No zone is as much as a day from UTC, so a day on either side holds all that can matter.
+  const from = new Date(Date.UTC(firstYear, 0, 1) - DAY_MILLISECONDS)
+  const to = new Date(Date.UTC(lastYear + 1, 0, 1) + DAY_MILLISECONDS)
+  const changes = transitionsBetween({ zone, from, to }).map(
+    ({ at, offsetBeforeMinutes, offsetAfterMinutes }) => ({
+      // Both a time in a gap and the first of two equal ones belong to the offset before.
+      fromLocalMs:
+        at.valueOf() + Math.max(offsetBeforeMinutes, offsetAfterMinutes) * MINUTE_MILLISECONDS,
+      offsetMs: offsetAfterMinutes * MINUTE_MILLISECONDS,
+    }),
+  )
+  const firstOffsetMs = offsetMinutes(zonedAt(from.valueOf(), zone)) * MINUTE_MILLISECONDS
+  return { firstOffsetMs, changes }
 }
 
 /**
