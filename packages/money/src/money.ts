@@ -16,6 +16,7 @@ export {
   type MoneyFormat,
 } from './format'
 export { parseMoney, type MoneyRefusal, type ParsedMoney, type ParseMoneyOptions } from './parse'
+export { earnedOfPass } from './passes'
 export { divideRefund, refundByPolicy, type RefundTier } from './refunds'
 export { divideHalfUp } from './rounding'
 export { taxAdded, taxIncluded, type TaxedAmount } from './tax'

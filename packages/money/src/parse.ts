@@ -20,6 +20,9 @@ export interface ParseMoneyOptions {
   maxMinor?: number
 }
 
+/** No amount is as long as this; what is longer is not searched. */
+const LONGEST_TEXT = 60
+
 /**
  * Reads an amount as people type it: with or without the sign or code of a currency, with spaces,
  * commas or points between thousands, with a comma or a point before the minor units, with either
@@ -30,38 +33,45 @@ export function parseMoney(
   currency: CurrencyCode,
   { allowsNegative = false, maxMinor = Number.MAX_SAFE_INTEGER }: ParseMoneyOptions = {},
 ): ParsedMoney {
-  const digits = minorDigitsOf(currency)
-  const bare = bareFigures(text, currency)
   if (text.trim() === '') return refuse('empty', currency)
-
-  const written = bare.marks.filter((mark) => mark !== '').map((mark) => mark.toUpperCase())
-  if (written.length > 0) {
-    if (!/\d/.test(bare.figures) || written.length > 1) return refuse('not-an-amount', currency)
-    if (!written.every((mark) => marksOf(currency).has(mark))) {
-      return refuse(written.some(looksLikeCurrency) ? 'other-currency' : 'not-an-amount', currency)
+  if (text.length > LONGEST_TEXT) return refuse('not-an-amount', currency)
+  const { sign, marks, figures } = takeApart(text)
+  if (!/\d/.test(figures) || sign === null) return refuse('not-an-amount', currency)
+  if (marks.length > 0) {
+    const own = marksOf(currency)
+    const strange = marks.find((mark) => !own.has(mark))
+    if (strange !== undefined) {
+      return refuse(looksLikeCurrency(strange) ? 'other-currency' : 'not-an-amount', currency)
     }
   }
-  const read = readFigures(bare.figures, digits)
+
+  const digits = minorDigitsOf(currency)
+  const read = readFigures(figures, digits)
   if (typeof read === 'string') return refuse(read, currency)
   const size = BigInt(read.whole + read.fraction.padEnd(digits, '0'))
-  if (bare.isNegative && size > 0n && !allowsNegative) return refuse('negative', currency)
+  const isBelowZero = sign === '-' && size > 0n
+  if (isBelowZero && !allowsNegative) return refuse('negative', currency)
   if (size > BigInt(maxMinor)) return refuse('too-large', currency)
-  const sizeMinor = Number(size)
-  return { ok: true, amountMinor: bare.isNegative && size > 0n ? -sizeMinor : sizeMinor, currency }
+  return { ok: true, amountMinor: isBelowZero ? -Number(size) : Number(size), currency }
 }
 
-/** Takes off spaces, this currency's sign or code on one side, and a minus on either side of it. */
-function bareFigures(text: string, currency: CurrencyCode) {
-  const rest = text
+/** Takes off spaces, signs or codes of a currency on either side, and a minus beside the first. */
+function takeApart(text: string): { sign: '' | '-' | null; marks: string[]; figures: string } {
+  const bare = text
     .normalize('NFKC')
     .replaceAll(/[\p{Zs}\t'’_]/gu, '')
     .replaceAll('−', '-')
-  const hasParentheses = /^\(.*\)$/.test(rest)
-  const [, before = '', left = '', after = '', figures = '', right = ''] =
-    /^(-?)([\p{L}\p{Sc}]*)(-?)(.*?)([\p{L}\p{Sc}]*)$/u.exec(
-      hasParentheses ? rest.slice(1, -1) : rest,
-    ) ?? []
-  return { figures, marks: [left, right], isNegative: hasParentheses || before + after === '-' }
+    .toUpperCase()
+  // Bookkeepers write what is owed in parentheses.
+  const owed = /^\((.*)\)$/.exec(bare)?.[1]
+  const [, outer = '', left = '', inner = '', figures = '', right = ''] =
+    /^(-?)([\p{L}\p{Sc}]*)(-?)(.*?)([\p{L}\p{Sc}]*)$/u.exec(owed ?? bare) ?? []
+  const signs = (owed === undefined ? '' : '-') + outer + inner
+  return {
+    sign: signs === '' || signs === '-' ? signs : null,
+    marks: [left, right].filter(Boolean),
+    figures,
+  }
 }
 
 /** The ways to write a currency: its code, and its sign with or without letters of its country. */
@@ -72,15 +82,20 @@ function marksOf(currency: CurrencyCode): ReadonlySet<string> {
         .formatToParts(0)
         .find(({ type }) => type === 'currency')?.value,
   )
-  const countrySign = signs[1] === '$' ? `${currency.slice(0, 2)}$` : undefined
-  return new Set([currency, ...signs, countrySign].flatMap((mark) => mark?.toUpperCase() ?? []))
+  const isDollar = signs[1] === '$'
+  const ofCountry = isDollar ? [`${currency.slice(0, 2)}$`, `${currency.slice(0, 1)}$`] : []
+  const marks = [currency, ...signs, ...ofCountry]
+  return new Set(marks.flatMap((mark) => mark?.toUpperCase() ?? []))
 }
 
 function looksLikeCurrency(mark: string): boolean {
   return /\p{Sc}/u.test(mark) || isCurrencyCode(mark)
 }
 
-type Figures = { whole: string; fraction: string }
+interface Figures {
+  whole: string
+  fraction: string
+}
 
 function readFigures(figures: string, digits: number): Figures | MoneyRefusal {
   if (!/^\d*(?:[.,]\d+)*[.,]?$/.test(figures) || !/\d/.test(figures)) return 'not-an-amount'
