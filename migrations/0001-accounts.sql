@@ -75,3 +75,11 @@ CREATE TABLE provider_events (
   received_at timestamptz NOT NULL,
   PRIMARY KEY (provider, event_id)
 );
+
+-- Attempts from one address or at one account, by window. Losing them in a crash costs nothing.
+CREATE UNLOGGED TABLE attempts (
+  subject text NOT NULL,
+  window_starts_at timestamptz NOT NULL,
+  count integer NOT NULL,
+  PRIMARY KEY (subject, window_starts_at)
+);

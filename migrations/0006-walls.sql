@@ -25,7 +25,7 @@ SELECT protect_tenant_table(name::regclass) FROM unnest(ARRAY[
 GRANT USAGE ON SCHEMA public TO marram_app, marram_dispatch, marram_sees_all;
 
 GRANT SELECT, INSERT, UPDATE, DELETE ON
-  accounts, account_identities, account_links, sign_in_sessions,
+  accounts, account_identities, account_links, sign_in_sessions, attempts,
   memberships, venues, areas, coaches, invitations, golfers,
   clinics, clinic_coaches, clinic_areas, sessions, session_coaches, session_areas,
   enrolments, places, waitlist_entries, marks
@@ -49,6 +49,7 @@ GRANT SELECT (academy_id, id, state, held_until) ON enrolments TO marram_dispatc
 GRANT SELECT (academy_id, place_id, choice, choose_by) ON owed_places TO marram_dispatch;
 GRANT SELECT (academy_id, id, state, created_at) ON refunds TO marram_dispatch;
 GRANT SELECT (id_hash, expires_at), DELETE ON sign_in_sessions TO marram_dispatch;
+GRANT SELECT, DELETE ON attempts TO marram_dispatch;
 CREATE POLICY due ON enrolments FOR SELECT TO marram_dispatch USING (true);
 CREATE POLICY due ON owed_places FOR SELECT TO marram_dispatch USING (true);
 CREATE POLICY due ON refunds FOR SELECT TO marram_dispatch USING (true);

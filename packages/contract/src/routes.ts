@@ -26,7 +26,7 @@ export const ROUTES = {
     path: '/api/verification-mails',
     access: 'account',
   },
-  'accounts.verify': { method: 'POST', path: '/api/verifications', access: 'public' },
+  'accounts.verify': { method: 'POST', path: '/api/verifications', access: 'account' },
   'accounts.ask-reset': { method: 'POST', path: '/api/password-reset-mails', access: 'public' },
   'accounts.reset': { method: 'POST', path: '/api/password-resets', access: 'public' },
   'demo.people': { method: 'GET', path: '/api/demo-people', access: 'public' },

@@ -13,6 +13,8 @@ const shape = z.object({
   MARRAM_DISPATCH_DATABASE_URL: databaseUrl,
   MARRAM_DATABASE_POOL: z.coerce.number().int().min(1).max(100).default(10),
   MARRAM_WEB_FOLDER: z.string().default('dist/web'),
+  /** Sign-ins, sign-ups and resets from one address in ten minutes. */
+  MARRAM_ATTEMPTS_PER_ADDRESS: z.coerce.number().int().min(1).default(60),
   MARRAM_LOG_LEVEL: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('info'),
   MARRAM_PAYMENTS_SECRET_KEY: z.string().min(8),
   MARRAM_PAYMENTS_WEBHOOK_SECRET: z.string().min(8),
@@ -35,6 +37,7 @@ export interface Config {
   secret: string
   logLevel: string
   webFolder: string
+  attemptsPerAddress: number
   database: { url: string; dispatchUrl: string; poolSize: number }
   payments: {
     secretKey: string
@@ -69,6 +72,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     secret: value.MARRAM_SECRET,
     logLevel: value.MARRAM_LOG_LEVEL,
     webFolder: value.MARRAM_WEB_FOLDER,
+    attemptsPerAddress: value.MARRAM_ATTEMPTS_PER_ADDRESS,
     database: {
       url: value.MARRAM_DATABASE_URL,
       dispatchUrl: value.MARRAM_DISPATCH_DATABASE_URL,
@@ -100,7 +104,9 @@ function refuseMixing({ mode, payments, mail, google, publicUrl }: Config): void
   const isLive = payments.secretKey.startsWith('sk_live_')
   if (mode === 'production') {
     if (payments.url || mail.url || google.url) {
-      throw new Error('Production refuses local stand-ins: remove every MARRAM_*_URL of a provider.')
+      throw new Error(
+        'Production refuses local stand-ins: remove every MARRAM_*_URL of a provider.',
+      )
     }
     if (!isLive) throw new Error('Production needs a live payments key.')
     if (!publicUrl.startsWith('https://')) throw new Error('Production needs an https public URL.')

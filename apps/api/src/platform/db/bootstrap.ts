@@ -29,10 +29,9 @@ export async function makeRoles(superuser: Knex, passwords: RolePasswords): Prom
 }
 
 async function makeRole(trx: Knex, name: string, attributes: string): Promise<void> {
-  const { rows } = await trx.raw<{ rows: unknown[] }>(
-    'SELECT 1 FROM pg_roles WHERE rolname = ?',
-    [name],
-  )
+  const { rows } = await trx.raw<{ rows: unknown[] }>('SELECT 1 FROM pg_roles WHERE rolname = ?', [
+    name,
+  ])
   const isThere = rows.length > 0
   await trx.raw(`${isThere ? 'ALTER' : 'CREATE'} ROLE ${name} NOSUPERUSER ${attributes}`)
 }
@@ -48,7 +47,9 @@ export async function makeDatabase(superuser: Knex, name: string): Promise<{ isN
     [name],
   )
   if (rows.length > 0) return { isNew: false }
-  await superuser.raw(`CREATE DATABASE "${name}" OWNER marram_owner ENCODING 'UTF8' TEMPLATE template0`)
+  await superuser.raw(
+    `CREATE DATABASE "${name}" OWNER marram_owner ENCODING 'UTF8' TEMPLATE template0`,
+  )
   return { isNew: true }
 }
 

@@ -15,7 +15,9 @@ interface KnexTransaction {
 // Knex has no hook for the statement that opens a transaction; these two classes are its
 // internals, which is why its version is pinned and the tenancy tests watch over this file.
 const require = createRequire(import.meta.url)
-const PgClient = require('knex/lib/dialects/postgres/index.js') as new (config: Knex.Config) => Knex.Client
+const PgClient = require('knex/lib/dialects/postgres/index.js') as new (
+  config: Knex.Config,
+) => Knex.Client
 const PgTransaction = require('knex/lib/dialects/postgres/execution/pg-transaction.js') as new (
   ...args: unknown[]
 ) => KnexTransaction

@@ -18,7 +18,9 @@ pg.types.setTypeParser(NUMERIC, Number)
 // A calendar day has no zone: it stays text.
 pg.types.setTypeParser(DATE, (text) => text)
 // The array's number is missing from the driver's list of types.
-pg.types.setTypeParser(DATE_ARRAY as never, (text: string) => text.slice(1, -1).split(',').filter(Boolean))
+pg.types.setTypeParser(DATE_ARRAY as never, (text: string) =>
+  text.slice(1, -1).split(',').filter(Boolean),
+)
 
 /** Opens a pool. Rows come back in camelCase, and identifiers go out in snake_case. */
 export function connect(options: { url: string; poolSize: number; name: string }): Knex {

@@ -1,4 +1,5 @@
-import type { Parsed, Role, RouteKey, Answer, Scope } from '@marram/contract'
+import type { Answer, Parsed, Role, RouteKey, Scope } from '@marram/contract'
+import type { Request, Response } from 'express'
 
 export interface SignedInAccount {
   id: string
@@ -18,6 +19,8 @@ export interface RequestContext {
   roles: readonly Role[]
   scope: Scope | null
   remoteAddress: string
+  /** For the few handlers that must speak HTTP themselves (sign-in strategies). */
+  http: { request: Request; response: Response }
   signIn(accountId: string): Promise<void>
   signOut(): Promise<void>
   token(): string

@@ -61,7 +61,7 @@ export function makeDispatcher(options: {
     async drain() {
       await open()
       let handled = 0
-      for (let before = -1; before !== handled; ) {
+      for (let before = -1; before !== handled;) {
         before = handled
         for (const queue of ALL_QUEUES) handled += await drainQueue(boss, queue, handle)
       }

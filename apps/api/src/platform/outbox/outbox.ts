@@ -5,7 +5,11 @@ import { ALL_QUEUES, LISTENERS, queueOf, type EventName, type OutboxEvents } fro
 
 export interface Outbox {
   /** Writes an event in the caller's transaction; it is heard only if that commits. */
-  emit<E extends EventName>(trx: Knex.Transaction, event: E, payload: OutboxEvents[E]): Promise<void>
+  emit<E extends EventName>(
+    trx: Knex.Transaction,
+    event: E,
+    payload: OutboxEvents[E],
+  ): Promise<void>
 }
 
 const SCHEMA = 'pgboss'
@@ -38,7 +42,9 @@ async function runOn(
   const text = sql.replaceAll('?', '\\?').replace(/\$(\d+)/g, (_, position: string) => {
     const value = values[Number(position) - 1]
     // Objects are jsonb parameters; Knex would send an array or object in its own way.
-    bindings.push(value !== null && typeof value === 'object' ? JSON.stringify(value) : value ?? null)
+    bindings.push(
+      value !== null && typeof value === 'object' ? JSON.stringify(value) : (value ?? null),
+    )
     return '?'
   })
   return trx.raw(text, bindings as Knex.RawBinding[])

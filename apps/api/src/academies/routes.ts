@@ -1,0 +1,38 @@
+import type { Handlers } from '../platform/http/context'
+import { asAcademy, asPerson, asStaff } from '../platform/http/narrow'
+import type { Services } from '../platform/services'
+import { listPublishedAcademies } from '../platform/tenancy/look-ups'
+import { inAcademy } from '../platform/tenancy/transaction'
+import { changeSettings, checkSlug, openAcademy, publishAcademy, readSettings } from './academies'
+import { invite, readInvitation, readStaff, removeStaff } from './staff'
+
+export function academyHandlers(services: Services): Handlers {
+  return {
+    'academies.open': ({ body }, context) =>
+      openAcademy(services, { accountId: asPerson(context).account.id, wanted: body }),
+    'academies.check-slug': ({ params }) => checkSlug(services, params.slug),
+    'academies.published': async () => ({
+      academies: await listPublishedAcademies(services.db),
+    }),
+    'academies.read': (_input, context) => readSettings(services, asAcademy(context).academyId),
+    'academies.change': ({ body }, context) =>
+      changeSettings(services, { academyId: asAcademy(context).academyId, change: body }),
+    'academies.publish': ({ body }, context) =>
+      publishAcademy(services, {
+        academyId: asAcademy(context).academyId,
+        isPublished: body.isPublished,
+      }),
+    'staff.list': (_input, context) => readStaff(services, asAcademy(context).academyId),
+    'staff.remove': async ({ params }, context) => {
+      await removeStaff(services, { academyId: asAcademy(context).academyId, ...params })
+      return null
+    },
+    'invitations.send': ({ body }, context) => {
+      const { academyId, account } = asStaff(context)
+      return inAcademy(services.db, academyId, (trx) =>
+        invite(services, trx, { ...body, academyId, invitedBy: account.id }),
+      )
+    },
+    'invitations.read': ({ body }) => readInvitation(services, body.token),
+  }
+}

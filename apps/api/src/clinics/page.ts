@@ -1,0 +1,107 @@
+import type { Answer } from '@marram/contract'
+import { priceOfRemaining } from '@marram/money'
+import { notFound } from '../platform/errors'
+import type { Services } from '../platform/services'
+import { readPageOf } from '../platform/tenancy/transaction'
+import { darkMinutesIn } from './light'
+import {
+  readClinicPage,
+  readPage,
+  type ClinicDetailRow,
+  type FaceRow,
+  type PageClinicRow,
+} from './page-queries'
+import { describeRule } from './rules'
+
+type PageClinic = Answer<'page.read'>['clinics'][number]
+
+export interface PageReader {
+  slug: string
+  /** Staff may look at a page before it is put up. */
+  maySeeUnpublished: boolean
+}
+
+/** The academy's public page: everything on it, true at this moment. */
+export async function readAcademyPage(
+  { db, clock }: Services,
+  reader: PageReader,
+): Promise<Answer<'page.read'>> {
+  const page = await readPageOf(db, reader.slug, (trx) => readPage(trx, clock.now()))
+  const academy = checkFace(page.academy, reader)
+  return { ...page, academy, clinics: page.clinics.map(toPageClinic) }
+}
+
+function checkFace(academy: FaceRow | null, reader: PageReader): FaceRow {
+  if (!academy || !(academy.isPublished || reader.maySeeUnpublished)) throw notFound('academy')
+  return academy
+}
+
+function toPageClinic(row: PageClinicRow): PageClinic {
+  const { id: _, fullestTaken, nextTaken, ...shown } = row
+  return {
+    ...shown,
+    taken: row.saleMode === 'drop-in' ? nextTaken : fullestTaken,
+    runPriceMinor: priceNow(row),
+  }
+}
+
+/** What a golfer who joins a run now pays: the share of the sessions still to come. */
+function priceNow(row: {
+  runPriceMinor: number | null
+  sessionsAhead: number
+  sessionsTotal: number
+}): number | null {
+  const { runPriceMinor, sessionsAhead, sessionsTotal } = row
+  if (runPriceMinor === null || sessionsAhead === sessionsTotal) return runPriceMinor
+  const run = { runPriceMinor, sessionCount: sessionsTotal, remainingCount: sessionsAhead }
+  return priceOfRemaining(run).priceMinor
+}
+
+export async function readClinicOnPage(
+  { db, clock }: Services,
+  reader: PageReader & { clinic: string },
+): Promise<Answer<'page.clinic'>> {
+  const now = clock.now()
+  const row = await readPageOf(db, reader.slug, (trx) => readClinicPage(trx, reader.clinic))
+  const academy = checkFace(row.academy, reader)
+  if (!row.clinic) throw notFound('clinic')
+  return { academy, clinic: toDetail(row.clinic, now) }
+}
+
+function toDetail(row: ClinicDetailRow, now: Date): Answer<'page.clinic'>['clinic'] {
+  const { rrule, startsOnLocal, sessions, ...clinic } = row
+  const ahead = sessions.filter(
+    ({ state, startsAt }) => state === 'planned' && new Date(startsAt) > now,
+  )
+  const next = ahead[0] ?? sessions.at(-1)
+  const fullest = ahead.reduce(
+    (a, b) => (b.taken > a.taken ? b : a),
+    ahead[0] ?? { taken: 0, capacity: row.capacity },
+  )
+  const measured = row.saleMode === 'drop-in' ? (ahead[0] ?? fullest) : fullest
+  const counts = { sessionsAhead: ahead.length, sessionsTotal: sessions.length }
+  return {
+    ...clinic,
+    ...counts,
+    startsAt: next?.startsAt ?? '',
+    endsAt: next?.endsAt ?? '',
+    recurrence: describeRule({ rrule, zone: row.zone, startsOnLocal }),
+    areas: (next?.areas ?? []).map(({ name }) => name),
+    coaches: row.coachDetails.map(({ name }) => name),
+    capacity: measured.capacity,
+    taken: measured.taken,
+    runPriceMinor: priceNow({ ...row, ...counts }),
+    sessions: sessions.map((session) => ({
+      ...session,
+      darkMinutes: darkMinutesIn(
+        {
+          startsAt: new Date(session.startsAt),
+          endsAt: new Date(session.endsAt),
+          duskAt: session.duskAt ? new Date(session.duskAt) : null,
+        },
+        session.areas,
+      ),
+      isPast: new Date(session.startsAt) <= now,
+    })),
+  }
+}

@@ -1,0 +1,59 @@
+import { rolesIn } from '../academies/academies'
+import type { Handlers, RequestContext } from '../platform/http/context'
+import { asAcademy, asStaff } from '../platform/http/narrow'
+import type { Services } from '../platform/services'
+import {
+  changeClinic,
+  draftClinic,
+  publishClinic,
+  readClinic,
+  readClinics,
+  throwClinicAway,
+} from './clinics'
+import { readAcademyPage, readClinicOnPage, type PageReader } from './page'
+import { previewClinic } from './preview'
+import { callOffSession, changeSession, readBoard, type SessionReach } from './sessions'
+
+/** What a member of staff may reach of the sessions, from the route's permission. */
+export function sessionReach(context: RequestContext): SessionReach {
+  const { academyId, account, scope } = asStaff(context)
+  return { academyId, accountId: account.id, scope: scope ?? 'own' }
+}
+
+export function clinicHandlers(services: Services): Handlers {
+  const academyIdOf = (context: RequestContext) => asAcademy(context).academyId
+
+  const readerOf = async (context: RequestContext): Promise<PageReader> => {
+    const { academyId, academySlug: slug, account } = asAcademy(context)
+    if (!account) return { slug, maySeeUnpublished: false }
+    const roles = await rolesIn(services, { academyId, accountId: account.id })
+    return { slug, maySeeUnpublished: roles.some((role) => role !== 'golfer') }
+  }
+
+  return {
+    'page.read': async (_input, context) => readAcademyPage(services, await readerOf(context)),
+    'page.clinic': async ({ params }, context) =>
+      readClinicOnPage(services, { ...(await readerOf(context)), clinic: params.clinic }),
+    'clinics.preview': ({ body }, context) =>
+      previewClinic(services, { academyId: academyIdOf(context), wanted: body }),
+    'clinics.list': (_input, context) => readClinics(services, academyIdOf(context)),
+    'clinics.draft': ({ body }, context) =>
+      draftClinic(services, { academyId: academyIdOf(context), wanted: body }),
+    'clinics.read': ({ params }, context) =>
+      readClinic(services, { academyId: academyIdOf(context), ...params }),
+    'clinics.change': ({ params, body }, context) =>
+      changeClinic(services, { academyId: academyIdOf(context), ...params, wanted: body }),
+    'clinics.publish': ({ params, body }, context) =>
+      publishClinic(services, { academyId: academyIdOf(context), ...params, ...body }),
+    'clinics.throw-away': async ({ params }, context) => {
+      await throwClinicAway(services, { academyId: academyIdOf(context), ...params })
+      return null
+    },
+    'sessions.list': ({ query }, context) =>
+      readBoard(services, { reach: sessionReach(context), ...query }),
+    'sessions.change': ({ params, body }, context) =>
+      changeSession(services, { reach: sessionReach(context), ...params, change: body }),
+    'sessions.call-off': ({ params, body }, context) =>
+      callOffSession(services, { reach: sessionReach(context), ...params, ...body }),
+  }
+}

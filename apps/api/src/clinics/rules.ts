@@ -1,0 +1,68 @@
+import { describeRecurrence, parseRecurrence } from '@marram/schedule'
+import { Problem } from '../platform/errors'
+import type { AreaUse } from './queries'
+
+interface Priced {
+  saleMode: 'run' | 'drop-in' | 'both'
+  payMode: 'card' | 'desk' | 'free'
+  runPriceMinor: number | null
+  dropInPriceMinor: number | null
+}
+
+/** A clinic has a price for each way it is sold, unless it is free. Throws `invalid-fields`. */
+export function checkPrices({ saleMode, payMode, runPriceMinor, dropInPriceMinor }: Priced): void {
+  if (payMode === 'free') return
+  if (saleMode !== 'drop-in' && !runPriceMinor) {
+    const sentence = 'Please give a price for the run, or make the clinic free.'
+    throw new Problem('invalid-fields', sentence, { runPriceMinor: sentence })
+  }
+  if (saleMode !== 'run' && !dropInPriceMinor) {
+    const sentence = 'Please give a price for one session, or make the clinic free.'
+    throw new Problem('invalid-fields', sentence, { dropInPriceMinor: sentence })
+  }
+}
+
+interface Schedule {
+  venueId: string
+  startsOnLocal: string
+  startsAtLocal: string
+  durationMinutes: number
+  rrule: string
+  skipDates: readonly string[]
+  coachIds: readonly string[]
+  areas: readonly AreaUse[]
+}
+
+/** Says whether two descriptions give the same dates, coaches and bays. */
+export function isSameSchedule(a: Schedule, b: Schedule): boolean {
+  return asText(a) === asText(b)
+}
+
+function asText(schedule: Schedule): string {
+  const { venueId, startsOnLocal, startsAtLocal, durationMinutes, rrule } = schedule
+  const areas = schedule.areas.map(({ areaId, fromUnit, toUnit }) => [areaId, fromUnit, toUnit])
+  return JSON.stringify([
+    venueId,
+    startsOnLocal,
+    startsAtLocal.slice(0, 5),
+    durationMinutes,
+    rrule,
+    [...schedule.skipDates].sort(),
+    schedule.coachIds,
+    areas,
+  ])
+}
+
+/** A stored rule in plain words: "Every Tuesday". */
+export function describeRule({
+  rrule,
+  zone,
+  startsOnLocal,
+}: {
+  rrule: string
+  zone: string
+  startsOnLocal: string
+}): string {
+  const parsed = parseRecurrence(rrule, { zone })
+  return parsed.ok ? describeRecurrence(parsed.rule, { startsOnLocal }) : ''
+}

@@ -1,0 +1,102 @@
+import type { Answer, Parsed } from '@marram/contract'
+import { findAccountById } from '../accounts/accounts'
+import { addRole } from '../academies/academies'
+import { invite, takeUpInvitation } from '../academies/staff'
+import { notFound } from '../platform/errors'
+import { newId } from '../platform/ids'
+import type { Services } from '../platform/services'
+import { inAcademy } from '../platform/tenancy/transaction'
+import type { Coach } from './models'
+import { findCoachOf, findCoaches, insertCoach, listCoaches, updateCoach } from './queries'
+
+type CoachView = Answer<'coaches.add'>
+
+export async function readCoaches(
+  { db }: Services,
+  academyId: string,
+): Promise<Answer<'coaches.list'>> {
+  return inAcademy(db, academyId, async (trx) => ({
+    coaches: (await listCoaches(trx)).map(viewCoach),
+  }))
+}
+
+/**
+ * Adds a coach, with an invitation by mail when an address is given. An owner who adds their own
+ * address becomes that coach at once.
+ */
+export async function addCoach(
+  services: Services,
+  wanted: { academyId: string; addedBy: string; coach: Parsed<'coaches.add', 'body'> },
+): Promise<CoachView> {
+  const { name, initials = initialsOf(name), about = '', invite: email } = wanted.coach
+  return inAcademy(services.db, wanted.academyId, async (trx) => {
+    const now = services.clock.now()
+    const id = newId(now)
+    const me = await findAccountById(services.db, wanted.addedBy)
+    const isMe = email !== undefined && me?.email === email
+    const isFree = isMe && !(await findCoachOf(trx, wanted.addedBy))
+    const accountId = isFree ? wanted.addedBy : null
+    await insertCoach(trx, { id, name, initials, about, accountId, createdAt: now })
+    if (accountId) await addRole(trx, { accountId, role: 'coach', createdAt: now })
+    else if (email) {
+      const { academyId, addedBy: invitedBy } = wanted
+      await invite(services, trx, { academyId, invitedBy, email, role: 'coach', coachId: id })
+    }
+    return { id, name, initials, about, accountId }
+  })
+}
+
+export async function changeCoach(
+  { db }: Services,
+  wanted: { academyId: string; coachId: string; change: Parsed<'coaches.change', 'body'> },
+): Promise<CoachView> {
+  return inAcademy(db, wanted.academyId, async (trx) => {
+    if (Object.keys(wanted.change).length > 0) {
+      await updateCoach(trx, wanted.coachId, wanted.change as Partial<Coach>)
+    }
+    const [coach] = await findCoaches(trx, [wanted.coachId])
+    if (!coach) throw notFound('coach')
+    return viewCoach(coach)
+  })
+}
+
+/** Takes an invitation up, and ties the person to the coach that they were invited as. */
+export async function acceptInvitation(
+  services: Services,
+  { secret, accountId }: { secret: string; accountId: string },
+): Promise<Answer<'invitations.accept'>> {
+  const { slug, role } = await takeUpInvitation(
+    services,
+    { secret, accountId },
+    async (trx, { role, coachId }) => {
+      if (role !== 'coach' || (await findCoachOf(trx, accountId))) return
+      if (coachId) {
+        await updateCoach(trx, coachId, { accountId })
+        return
+      }
+      const account = await findAccountById(services.db, accountId)
+      const name = account?.name ?? 'Coach'
+      const now = services.clock.now()
+      const own = { id: newId(now), name, initials: initialsOf(name), accountId, createdAt: now }
+      await insertCoach(trx, own)
+    },
+  )
+  return { slug, role }
+}
+
+/** "Aoife Kerrane" is AK; "Sorcha Ní Bhraonáin" is SB. */
+export function initialsOf(name: string): string {
+  const words = name.split(/\s+/).filter(Boolean)
+  const letters = [words[0], words.length > 1 ? words.at(-1) : undefined]
+    .map((word) => word?.normalize('NFC').match(/\p{L}/u)?.[0] ?? '')
+    .join('')
+    .toLocaleUpperCase('en')
+  return letters || 'C'
+}
+
+function viewCoach({ id, name, initials, about, accountId }: Coach): CoachView {
+  return { id, name, initials, about, accountId }
+}
+
+export { findCoachOf, findCoaches, listCoaches } from './queries'
+export type { Coach } from './models'

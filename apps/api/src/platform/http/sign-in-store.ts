@@ -1,0 +1,85 @@
+import { createHash } from 'node:crypto'
+import { Store, type SessionData } from 'express-session'
+import type { Services } from '../services'
+
+declare module 'express-session' {
+  interface SessionData {
+    accountId?: string
+    sessionVersion?: number
+    /** A checked path of ours to go back to after an identity provider. */
+    returnTo?: string
+  }
+}
+
+type Done<T> = (error: unknown, value?: T) => void
+
+/**
+ * Keeps sign-in sessions in PostgreSQL, under the hash of their id. A session that was ended stays
+ * ended: saving one that is gone changes nothing, since only a new id may insert.
+ */
+export class SignInStore extends Store {
+  readonly #services: Pick<Services, 'db' | 'clock'>
+  readonly #fresh = new Set<string>()
+
+  constructor(services: Pick<Services, 'db' | 'clock'>) {
+    super()
+    this.#services = services
+  }
+
+  /** Called for ids that this process has just generated, which may be inserted. */
+  expectNew(id: string): void {
+    this.#fresh.add(id)
+  }
+
+  override get(id: string, done: Done<SessionData | null>): void {
+    const { db, clock } = this.#services
+    db('sign_in_sessions')
+      .where({ idHash: hashOf(id) })
+      .andWhere('expiresAt', '>', clock.now())
+      .first<{ data: SessionData } | undefined>('data')
+      .then(
+        (row) => done(null, row?.data ?? null),
+        (error: unknown) => done(error),
+      )
+  }
+
+  override set(id: string, session: SessionData, done: Done<void> = () => {}): void {
+    this.#save(id, session).then(
+      () => done(null),
+      (error: unknown) => done(error),
+    )
+  }
+
+  override destroy(id: string, done: Done<void> = () => {}): void {
+    this.#services
+      .db('sign_in_sessions')
+      .where({ idHash: hashOf(id) })
+      .delete()
+      .then(
+        () => done(null),
+        (error: unknown) => done(error),
+      )
+  }
+
+  async #save(id: string, session: SessionData): Promise<void> {
+    const { db, clock } = this.#services
+    const row = {
+      accountId: session.accountId ?? null,
+      sessionVersion: session.sessionVersion ?? null,
+      data: JSON.stringify(session),
+      expiresAt: new Date(clock.now().getTime() + (session.cookie.originalMaxAge ?? 0)),
+    }
+    if (this.#fresh.delete(id)) {
+      const key = { idHash: hashOf(id), createdAt: clock.now() }
+      await db('sign_in_sessions').insert({ ...key, ...row })
+      return
+    }
+    await db('sign_in_sessions')
+      .where({ idHash: hashOf(id) })
+      .update(row)
+  }
+}
+
+function hashOf(id: string): Buffer {
+  return createHash('sha256').update(id).digest()
+}
