@@ -1,12 +1,8 @@
-import { getTimes } from 'suncalc'
 import { toInstant, type LocalDate } from './local-time'
+import { findCrossing, findTransit, sunAltitudeDeg, type Place } from './sun'
 
 /** A place on the ground and a day of its calendar. */
-export interface PlaceAndDay {
-  /** North +, -90 to 90. */
-  latitudeDeg: number
-  /** East +, -180 to 180. */
-  longitudeDeg: number
+export interface PlaceAndDay extends Place {
   dayLocal: LocalDate
   /** The venue's IANA zone, which decides when that day is. */
   zone: string
@@ -21,6 +17,10 @@ export interface SunTimes {
   allDay: 'up' | 'down' | null
 }
 
+/** The sun's centre when its upper edge is seen on the horizon: its radius and refraction. */
+const SUNSET_DEG = -0.833
+const CIVIL_DUSK_DEG = -6
+
 /**
  * Sunrise, sunset (the sun's centre 0.833° under the horizon: its radius and the usual refraction)
  * and the end of civil twilight (6°), for a level horizon at sea level, to within a minute.
@@ -29,41 +29,64 @@ export interface SunTimes {
  * and is still that evening's.
  * @throws RangeError for a place off the globe, or a day or zone that does not exist.
  */
-export function sunTimes({ latitudeDeg, longitudeDeg, dayLocal, zone }: PlaceAndDay): SunTimes {
-  if (!(Math.abs(latitudeDeg) <= 90) || !(Math.abs(longitudeDeg) <= 180)) {
-    throw new RangeError(`${latitudeDeg}, ${longitudeDeg} is no place`)
-  }
-  const noonAt = toInstant({ startsOnLocal: dayLocal, startsAtLocal: '12:00', zone })
-  const times = getTimes(noonAt, latitudeDeg, longitudeDeg)
+export function sunTimes(place: PlaceAndDay): SunTimes {
+  const day = new SolarDay(place)
+  const sunriseAt = day.find('morning', SUNSET_DEG)
+  const sunsetAt = day.find('evening', SUNSET_DEG)
+  const allDay = day.isUpAtNoon() ? 'up' : 'down'
   return {
-    sunriseAt: times.sunrise,
-    sunsetAt: times.sunset,
-    civilDuskAt: times.dusk,
-    allDay: times.alwaysUp ? 'up' : times.alwaysDown ? 'down' : null,
+    sunriseAt,
+    sunsetAt,
+    civilDuskAt: day.find('evening', CIVIL_DUSK_DEG),
+    allDay: sunriseAt === null && sunsetAt === null ? allDay : null,
   }
 }
 
 /** When the sun goes down that evening; null where it does not set, or does not rise. */
 export function sunsetAt(place: PlaceAndDay): Date | null {
-  return sunTimes(place).sunsetAt
+  return new SolarDay(place).find('evening', SUNSET_DEG)
 }
 
 /** When the sun comes up that morning; null where it does not rise, or does not set. */
 export function sunriseAt(place: PlaceAndDay): Date | null {
-  return sunTimes(place).sunriseAt
+  return new SolarDay(place).find('morning', SUNSET_DEG)
 }
 
 /** When civil twilight ends that evening; null where the sun does not get so low, or so high. */
 export function civilDuskAt(place: PlaceAndDay): Date | null {
-  return sunTimes(place).civilDuskAt
+  return new SolarDay(place).find('evening', CIVIL_DUSK_DEG)
+}
+
+/** The half days before and after one noon of a place. */
+class SolarDay {
+  readonly #place: Place
+  readonly #transitMs: number
+
+  constructor({ dayLocal, zone, ...place }: PlaceAndDay) {
+    if (!(Math.abs(place.latitudeDeg) <= 90) || !(Math.abs(place.longitudeDeg) <= 180)) {
+      throw new RangeError(`${place.latitudeDeg}, ${place.longitudeDeg} is no place`)
+    }
+    const noonAt = toInstant({ startsOnLocal: dayLocal, startsAtLocal: '12:00', zone })
+    this.#place = place
+    this.#transitMs = findTransit(noonAt.valueOf(), place)
+  }
+
+  find(half: 'morning' | 'evening', altitudeDeg: number): Date | null {
+    const crossing = { transitMs: this.#transitMs, half, altitudeDeg }
+    const crossingMs = findCrossing(crossing, this.#place)
+    return crossingMs === null ? null : new Date(crossingMs)
+  }
+
+  isUpAtNoon(): boolean {
+    return sunAltitudeDeg(this.#transitMs, this.#place) > SUNSET_DEG
+  }
 }
 
 export type DuskRule = 'sunset' | 'civil-twilight'
 
 /** The dusk an academy goes by: sunset, or the end of civil twilight where it chose that. */
 export function duskAt(place: PlaceAndDay, rule: DuskRule = 'sunset'): Date | null {
-  const times = sunTimes(place)
-  return rule === 'sunset' ? times.sunsetAt : times.civilDuskAt
+  return rule === 'sunset' ? sunsetAt(place) : civilDuskAt(place)
 }
 
 export type SessionLight =
