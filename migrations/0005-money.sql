@@ -51,11 +51,10 @@ CREATE TABLE orders (
   account_id uuid REFERENCES accounts (id) ON DELETE SET NULL,
   -- open: may be paid. paid: money is in, or promised at the desk. void: nothing will come.
   state text NOT NULL CHECK (state IN ('open', 'paid', 'void')),
-  method text NOT NULL CHECK (method IN ('card', 'desk', 'credit')),
+  method text NOT NULL CHECK (method IN ('card', 'desk')),
   currency char(3) NOT NULL,
   net_minor bigint NOT NULL CHECK (net_minor >= 0),
   tax_minor bigint NOT NULL CHECK (tax_minor >= 0),
-  credit_minor bigint NOT NULL DEFAULT 0 CHECK (credit_minor >= 0),
   checkout_id text,
   checkout_url text,
   attempt integer NOT NULL DEFAULT 0,

@@ -1,0 +1,266 @@
+import type { Parsed } from '@marram/contract'
+import { joinAsGolfer } from '../academies/academies'
+import {
+  addDependant,
+  ensureOwnGolfer,
+  findGolfer,
+  findOwnGolfer,
+  recordConsent,
+  type Golfer,
+  type Person,
+} from '../golfers/golfers'
+import { Problem, notFound } from '../platform/errors'
+import type { Services } from '../platform/services'
+import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { checkFit, findOnSale, takePlaces } from './hold'
+import type { EndedBecause, Enrolment, Place } from './models'
+import {
+  confirmSeats,
+  findActiveEnrolment,
+  listPlaces,
+  lockEnrolment,
+  returnSeats,
+  setPlacesState,
+  settleOffer,
+  takeSeats,
+  updateEnrolment,
+} from './queries'
+import { offerFreedPlaces } from './waitlist'
+
+/**
+ * Holds places for the person, somebody they look after, or a new dependant, while payment is made.
+ * Pressing twice gives the same hold. Resolves to the enrolment's id.
+ */
+export async function holdPlaces(
+  services: Services,
+  given: { academyId: string; person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
+): Promise<string> {
+  const outcome = await tryHold(services, given).then(
+    (id) => ({ id, outcome: 'held' }),
+    (error: unknown) => {
+      const code = error instanceof Problem ? error.code : 'unexpected'
+      services.metrics.holds.inc({ outcome: code })
+      throw error
+    },
+  )
+  services.metrics.holds.inc({ outcome: outcome.outcome })
+  return outcome.id
+}
+
+async function tryHold(
+  services: Services,
+  given: { academyId: string; person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
+): Promise<string> {
+  const { person, wanted } = given
+  return inAcademy(services.db, given.academyId, async (trx) => {
+    const now = services.clock.now()
+    const onSale = await findOnSale(trx, wanted, now)
+    await joinAsGolfer(trx, { accountId: person.id, now })
+    const golfer = await golferFor(services, trx, given)
+    checkFit(golfer, onSale)
+    const sessionIds = onSale.taken.map(({ id }) => id)
+    const had = await findActiveEnrolment(trx, { golferId: golfer.id, sessionIds })
+    if (had?.state === 'held' && had.takenBy === person.id && had.kind === onSale.kind) {
+      return had.id
+    }
+    if (had) throw new Problem('already-has-place', `${golfer.name} has a place there already.`)
+    const { waiver, holdMinutes } = onSale.academy
+    const consent = { golferId: golfer.id, kind: 'waiver', wording: waiver } as const
+    await recordConsent(trx, { ...consent, givenBy: person.id, now })
+    return takePlaces(services, trx, {
+      onSale,
+      golferId: golfer.id,
+      takenBy: person.id,
+      heldUntil: new Date(now.getTime() + holdMinutes * 60_000),
+      isOffer: false,
+    })
+  })
+}
+
+async function golferFor(
+  services: Services,
+  trx: AcademyTrx,
+  { person, wanted }: { person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
+): Promise<Golfer> {
+  const { for: whom } = wanted
+  switch (whom.kind) {
+    case 'me': {
+      const handicap = whom.handicap
+      return ensureOwnGolfer(services, trx, {
+        person,
+        ...(handicap === undefined ? {} : { handicap }),
+      })
+    }
+    case 'golfer':
+      return findOwnGolfer(trx, { golferId: whom.golferId, accountId: person.id })
+    case 'new':
+      return addDependant(services, trx, { guardianId: person.id, dependant: whom.dependant })
+  }
+}
+
+/** A place given by staff, to be paid at the desk: held long enough to be paid in person. */
+export async function givePlaces(
+  services: Services,
+  given: { academyId: string; wanted: Parsed<'enrolments.give', 'body'> },
+  alsoDo: (trx: AcademyTrx, enrolmentId: string) => Promise<void>,
+): Promise<string> {
+  const { wanted } = given
+  return inAcademy(services.db, given.academyId, async (trx) => {
+    const now = services.clock.now()
+    const onSale = await findOnSale(trx, wanted, now)
+    const golfer = await findGolfer(trx, wanted.golferId)
+    if (!golfer) throw notFound('golfer')
+    if (!wanted.isException) checkFit(golfer, onSale)
+    const id = await takePlaces(services, trx, {
+      onSale,
+      golferId: golfer.id,
+      takenBy: golfer.accountId ?? golfer.guardianAccountId,
+      heldUntil: new Date(now.getTime() + onSale.academy.holdMinutes * 60_000),
+      isOffer: false,
+    })
+    await alsoDo(trx, id)
+    return id
+  })
+}
+
+/** Locks an enrolment that the person may act for: their own golfer's or a dependant's. */
+export async function lockOwnEnrolment(
+  trx: AcademyTrx,
+  { enrolmentId, accountId }: { enrolmentId: string; accountId: string },
+): Promise<Enrolment> {
+  const enrolment = await lockEnrolment(trx, enrolmentId)
+  if (!enrolment) throw notFound('place')
+  await findOwnGolfer(trx, { golferId: enrolment.golferId, accountId })
+  return enrolment
+}
+
+/** Turns a hold into confirmed places. A second call finds them confirmed and changes nothing. */
+export async function confirmHold(
+  services: Services,
+  trx: AcademyTrx,
+  { academyId, enrolmentId }: { academyId: string; enrolmentId: string },
+): Promise<'confirmed' | 'already-confirmed' | 'gone'> {
+  const enrolment = await lockEnrolment(trx, enrolmentId)
+  if (!enrolment) throw notFound('place')
+  if (enrolment.state === 'confirmed') return 'already-confirmed'
+  if (enrolment.state === 'cancelled') return 'gone'
+  const held = (await listPlaces(trx, enrolmentId)).filter(({ state }) => state === 'held')
+  await updateEnrolment(trx, enrolmentId, { state: 'confirmed', heldUntil: null })
+  await setPlacesState(trx, idsOf(held), { state: 'confirmed' })
+  await confirmSeats(
+    trx,
+    held.map(({ sessionId }) => sessionId),
+  )
+  await settleOffer(trx, { enrolmentId, state: 'taken' })
+  await services.outbox.emit(trx, 'enrolment.confirmed', { academyId, enrolmentId })
+  return 'confirmed'
+}
+
+/**
+ * Takes the places of a lapsed hold again, for a payment that came late. All of them or none:
+ * resolves to false when any is gone.
+ */
+export async function retakeLapsed(
+  services: Services,
+  trx: AcademyTrx,
+  { academyId, enrolmentId }: { academyId: string; enrolmentId: string },
+): Promise<boolean> {
+  const enrolment = await lockEnrolment(trx, enrolmentId)
+  if (enrolment?.state !== 'cancelled') return false
+  const places = await listPlaces(trx, enrolmentId)
+  const sessionIds = places.map(({ sessionId }) => sessionId)
+  if (await findActiveEnrolment(trx, { golferId: enrolment.golferId, sessionIds })) return false
+  const seats = await takeSeats(trx, { sessionIds, as: 'confirmed' })
+  if (seats.length < sessionIds.length) {
+    await returnSeats(trx, { sessionIds: seats, from: 'confirmed' })
+    return false
+  }
+  const revived = { state: 'confirmed', endedBecause: null, endedAt: null } as const
+  await updateEnrolment(trx, enrolmentId, revived)
+  await setPlacesState(trx, idsOf(places), { state: 'confirmed' })
+  await services.outbox.emit(trx, 'enrolment.confirmed', { academyId, enrolmentId })
+  return true
+}
+
+/** Lets a hold go, and offers its places to those who wait. False when it was no hold any more. */
+export async function releaseHold(
+  services: Services,
+  trx: AcademyTrx,
+  given: { academyId: string; enrolmentId: string; because: 'lapsed' | 'let-go' },
+): Promise<boolean> {
+  const { academyId, enrolmentId, because } = given
+  const enrolment = await lockEnrolment(trx, enrolmentId)
+  if (enrolment?.state !== 'held') return false
+  const held = (await listPlaces(trx, enrolmentId)).filter(({ state }) => state === 'held')
+  await end(services, trx, { enrolment, places: held, because, from: 'held' })
+  await settleOffer(trx, { enrolmentId, state: 'passed' })
+  await offerFreedPlaces(services, trx, { academyId, clinicId: enrolment.clinicId })
+  return true
+}
+
+/** Gives confirmed places up; when no place is left ahead, the enrolment ends with them. */
+export async function giveUpPlaces(
+  services: Services,
+  trx: AcademyTrx,
+  given: { academyId: string; enrolment: Enrolment; places: readonly Place[] },
+): Promise<void> {
+  const { academyId, enrolment, places } = given
+  await end(services, trx, { enrolment, places, because: 'given-up', from: 'confirmed' })
+  await offerFreedPlaces(services, trx, { academyId, clinicId: enrolment.clinicId })
+}
+
+async function end(
+  services: Services,
+  trx: AcademyTrx,
+  given: {
+    enrolment: Enrolment
+    places: readonly Place[]
+    because: EndedBecause
+    from: 'held' | 'confirmed'
+  },
+): Promise<void> {
+  const { enrolment, places, because, from } = given
+  await updateEnrolment(trx, enrolment.id, {
+    state: 'cancelled',
+    endedBecause: because,
+    heldUntil: null,
+    endedAt: services.clock.now(),
+  })
+  await setPlacesState(trx, idsOf(places), { state: 'cancelled', endedBecause: because })
+  await returnSeats(trx, { sessionIds: places.map(({ sessionId }) => sessionId), from })
+}
+
+/** Ends places whose session was called off. The enrolment ends with its last place. */
+export async function endCalledOffPlaces(
+  services: Services,
+  trx: AcademyTrx,
+  { enrolment, places }: { enrolment: Enrolment; places: readonly Place[] },
+): Promise<void> {
+  await setPlacesState(trx, idsOf(places), { state: 'cancelled', endedBecause: 'called-off' })
+  await returnSeats(trx, {
+    sessionIds: places.map(({ sessionId }) => sessionId),
+    from: 'confirmed',
+  })
+  const left = await listPlaces(trx, enrolment.id)
+  if (left.every(({ state }) => state === 'cancelled')) {
+    const ended = { state: 'cancelled', endedBecause: 'called-off' } as const
+    await updateEnrolment(trx, enrolment.id, { ...ended, endedAt: services.clock.now() })
+  }
+}
+
+const idsOf = (places: readonly Place[]): string[] => places.map(({ id }) => id)
+
+export {
+  findEnrolment,
+  findPlace,
+  listEnrolments,
+  listPlaceRows,
+  listPlaces,
+  listWaitlist,
+  lockConfirmedPlaces,
+  lockEnrolment,
+  type EnrolmentRow,
+  type PlaceRow,
+} from './queries'
+export { isLapsed } from './rules'
+export type { Enrolment, Place } from './models'

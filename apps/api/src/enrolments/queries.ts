@@ -1,0 +1,321 @@
+import type { AcademyTrx } from '../platform/tenancy/transaction'
+import { Enrolment, Place, WaitlistEntry, type EndedBecause } from './models'
+
+export async function findEnrolment(trx: AcademyTrx, id: string): Promise<Enrolment | undefined> {
+  return Enrolment.query(trx).where({ id }).first()
+}
+
+export async function lockEnrolment(trx: AcademyTrx, id: string): Promise<Enrolment | undefined> {
+  return Enrolment.query(trx).where({ id }).forUpdate().first()
+}
+
+export async function updateEnrolment(
+  trx: AcademyTrx,
+  id: string,
+  change: Partial<Enrolment>,
+): Promise<void> {
+  await Enrolment.query(trx).patch(change).where({ id })
+}
+
+export async function listPlaces(trx: AcademyTrx, enrolmentId: string): Promise<Place[]> {
+  return Place.query(trx).where({ enrolmentId }).orderBy('id')
+}
+
+export async function findPlace(trx: AcademyTrx, id: string): Promise<Place | undefined> {
+  return Place.query(trx).where({ id }).first()
+}
+
+export interface NewEnrolment {
+  id: string
+  clinicId: string
+  golferId: string
+  takenBy: string | null
+  kind: 'run' | 'session'
+  state: 'held' | 'confirmed'
+  isOffer: boolean
+  heldUntil: Date | null
+  currency: string
+  netMinor: number
+  taxMinor: number
+  payMode: 'card' | 'desk' | 'free'
+  createdAt: Date
+}
+
+export interface NewPlace {
+  id: string
+  sessionId: string
+  netMinor: number
+  taxMinor: number
+}
+
+/** Writes an enrolment and its places in one statement. */
+export async function insertEnrolment(
+  trx: AcademyTrx,
+  enrolment: NewEnrolment,
+  places: readonly NewPlace[],
+): Promise<void> {
+  await trx.raw(
+    `WITH enrolment AS (
+       INSERT INTO enrolments (academy_id, id, clinic_id, golfer_id, taken_by, kind, state,
+         is_offer, held_until, currency, net_minor, tax_minor, pay_mode, created_at)
+       VALUES (current_setting('app.academy_id')::uuid, :id, :clinicId, :golferId, :takenBy, :kind,
+         :state, :isOffer, :heldUntil, :currency, :netMinor, :taxMinor, :payMode, :createdAt)
+       RETURNING academy_id)
+     INSERT INTO places (academy_id, id, enrolment_id, session_id, golfer_id, state, net_minor,
+       tax_minor)
+     SELECT e.academy_id, p.id, :id, p.session_id, :golferId, :state, p.net_minor, p.tax_minor
+     FROM enrolment e, unnest(:placeIds::uuid[], :sessionIds::uuid[], :nets::bigint[],
+       :taxes::bigint[]) AS p (id, session_id, net_minor, tax_minor)`,
+    {
+      ...enrolment,
+      placeIds: places.map(({ id }) => id),
+      sessionIds: places.map(({ sessionId }) => sessionId),
+      nets: places.map(({ netMinor }) => netMinor),
+      taxes: places.map(({ taxMinor }) => taxMinor),
+    },
+  )
+}
+
+/**
+ * Takes one place in each session, where there is one: the whole guard against overselling is this
+ * condition. Rows are locked in id order, so that two runs cannot wait for each other.
+ * Resolves to the sessions that had a place.
+ */
+export async function takeSeats(
+  trx: AcademyTrx,
+  { sessionIds, as }: { sessionIds: readonly string[]; as: 'held' | 'confirmed' },
+): Promise<string[]> {
+  const { rows } = await trx.raw<{ rows: { id: string }[] }>(
+    sessionIds.length === 1
+      ? `UPDATE sessions SET ${as} = ${as} + 1
+         WHERE id = ANY(?) AND state = 'planned' AND held + confirmed < capacity RETURNING id`
+      : `WITH in_order AS (
+           SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+         UPDATE sessions s SET ${as} = ${as} + 1 FROM in_order
+         WHERE s.id = in_order.id AND s.state = 'planned' AND s.held + s.confirmed < s.capacity
+         RETURNING s.id`,
+    [[...sessionIds]],
+  )
+  return rows.map(({ id }) => id)
+}
+
+/** Gives seats back, in id order. */
+export async function returnSeats(
+  trx: AcademyTrx,
+  { sessionIds, from }: { sessionIds: readonly string[]; from: 'held' | 'confirmed' },
+): Promise<void> {
+  if (sessionIds.length === 0) return
+  await trx.raw(
+    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+     UPDATE sessions s SET ${from} = ${from} - 1 FROM in_order WHERE s.id = in_order.id`,
+    [[...sessionIds]],
+  )
+}
+
+/** Turns held seats into confirmed ones. */
+export async function confirmSeats(trx: AcademyTrx, sessionIds: readonly string[]): Promise<void> {
+  await trx.raw(
+    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+     UPDATE sessions s SET held = held - 1, confirmed = confirmed + 1
+     FROM in_order WHERE s.id = in_order.id`,
+    [[...sessionIds]],
+  )
+}
+
+export async function setPlacesState(
+  trx: AcademyTrx,
+  placeIds: readonly string[],
+  change: { state: 'confirmed' } | { state: 'cancelled'; endedBecause: EndedBecause },
+): Promise<void> {
+  const endedBecause = change.state === 'cancelled' ? change.endedBecause : null
+  await Place.query(trx)
+    .patch({ state: change.state, endedBecause })
+    .whereIn('id', [...placeIds])
+}
+
+/** Active enrolments of a golfer in any of these sessions. */
+export async function findActiveEnrolment(
+  trx: AcademyTrx,
+  { golferId, sessionIds }: { golferId: string; sessionIds: readonly string[] },
+): Promise<Enrolment | undefined> {
+  return Enrolment.query(trx)
+    .whereIn(
+      'id',
+      Place.query(trx)
+        .select('enrolmentId')
+        .where({ golferId })
+        .whereIn('sessionId', [...sessionIds])
+        .whereNot('state', 'cancelled'),
+    )
+    .orderBy('createdAt', 'desc')
+    .first()
+}
+
+export async function insertWaitlistEntry(
+  trx: AcademyTrx,
+  row: Partial<WaitlistEntry>,
+): Promise<void> {
+  await WaitlistEntry.query(trx).insert(row)
+}
+
+export async function findWaitlistEntry(
+  trx: AcademyTrx,
+  id: string,
+): Promise<WaitlistEntry | undefined> {
+  return WaitlistEntry.query(trx).where({ id }).first()
+}
+
+/** Everybody who waits for a clinic, first come first, locked. */
+export async function lockQueue(trx: AcademyTrx, clinicId: string): Promise<WaitlistEntry[]> {
+  return WaitlistEntry.query(trx)
+    .where({ clinicId, state: 'waiting' })
+    .orderBy(['joinedAt', 'id'])
+    .forUpdate()
+}
+
+export async function updateWaitlistEntry(
+  trx: AcademyTrx,
+  id: string,
+  change: Partial<WaitlistEntry>,
+): Promise<void> {
+  await WaitlistEntry.query(trx).patch(change).where({ id })
+}
+
+/** What became of an offer: its entry follows the enrolment. */
+export async function settleOffer(
+  trx: AcademyTrx,
+  { enrolmentId, state }: { enrolmentId: string; state: 'taken' | 'passed' },
+): Promise<void> {
+  await WaitlistEntry.query(trx).patch({ state }).where({ enrolmentId, state: 'offered' })
+}
+
+/** A golfer who has a place no longer waits for it. */
+export async function endWaitingOf(
+  trx: AcademyTrx,
+  { golferId, clinicId, sessionId }: { golferId: string; clinicId: string; sessionId?: string },
+): Promise<void> {
+  const query = WaitlistEntry.query(trx)
+    .patch({ state: 'taken' })
+    .where({ golferId, clinicId, state: 'waiting' })
+  if (sessionId) query.where({ sessionId })
+  await query
+}
+
+export interface WaitlistRow extends WaitlistEntry {
+  clinicSlug: string
+  clinicTitle: string
+  sessionStartsAt: Date | null
+  golferName: string
+  position: number
+  offeredUntil: Date | null
+}
+
+/** Waiting and offered entries, each with its place in the queue. */
+export async function listWaitlist(
+  trx: AcademyTrx,
+  by: { accountId: string } | { clinicId: string } | { id: string },
+): Promise<WaitlistRow[]> {
+  const [column, value] = Object.entries(by)[0] as ['accountId' | 'clinicId' | 'id', string]
+  const names = { accountId: 'w.account_id', clinicId: 'w.clinic_id', id: 'w.id' }
+  const { rows } = await trx.raw<{ rows: WaitlistRow[] }>(
+    `SELECT w.*, c.slug AS clinic_slug, c.title AS clinic_title, s.starts_at AS session_starts_at,
+       g.name AS golfer_name, e.held_until AS offered_until,
+       (SELECT count(*) FROM waitlist_entries q WHERE q.clinic_id = w.clinic_id
+          AND q.session_id IS NOT DISTINCT FROM w.session_id AND q.state = 'waiting'
+          AND (q.joined_at, q.id) <= (w.joined_at, w.id)) AS position
+     FROM waitlist_entries w
+     JOIN clinics c ON c.academy_id = w.academy_id AND c.id = w.clinic_id
+     JOIN golfers g ON g.academy_id = w.academy_id AND g.id = w.golfer_id
+     LEFT JOIN sessions s ON s.academy_id = w.academy_id AND s.id = w.session_id
+     LEFT JOIN enrolments e ON e.academy_id = w.academy_id AND e.id = w.enrolment_id
+     WHERE ${names[column]} = ? AND w.state IN ('waiting', 'offered')
+     ORDER BY w.joined_at, w.id`,
+    [value],
+  )
+  return rows
+}
+
+export interface EnrolmentRow extends Enrolment {
+  clinicSlug: string
+  clinicTitle: string
+  clinicBring: string
+  zone: string
+  venueName: string
+  golferName: string
+  golferAccountId: string | null
+}
+
+/** Enrolments with what a view says of their clinic and golfer, the newest first. */
+export async function listEnrolments(
+  trx: AcademyTrx,
+  by:
+    | { ids: readonly string[] }
+    | { accountId: string }
+    | { clinicId: string }
+    | { golferId: string },
+): Promise<EnrolmentRow[]> {
+  const query = Enrolment.query(trx)
+    .join('clinics', (join) =>
+      join.on('clinics.academyId', 'enrolments.academyId').on('clinics.id', 'enrolments.clinicId'),
+    )
+    .join('golfers', (join) =>
+      join.on('golfers.academyId', 'enrolments.academyId').on('golfers.id', 'enrolments.golferId'),
+    )
+    .join('venues', (join) =>
+      join.on('venues.academyId', 'clinics.academyId').on('venues.id', 'clinics.venueId'),
+    )
+    .select(
+      'enrolments.*',
+      'clinics.slug as clinicSlug',
+      'clinics.title as clinicTitle',
+      'clinics.bring as clinicBring',
+      'clinics.zone as zone',
+      'venues.name as venueName',
+      'golfers.name as golferName',
+      'golfers.accountId as golferAccountId',
+    )
+    .orderBy('enrolments.createdAt', 'desc')
+  if ('ids' in by) query.whereIn('enrolments.id', [...by.ids])
+  if ('clinicId' in by) query.where('enrolments.clinicId', by.clinicId)
+  if ('golferId' in by) query.where('enrolments.golferId', by.golferId)
+  if ('accountId' in by) {
+    query.where((either) =>
+      either
+        .where('golfers.accountId', by.accountId)
+        .orWhere('golfers.guardianAccountId', by.accountId),
+    )
+  }
+  return query.castTo<EnrolmentRow[]>()
+}
+
+export interface PlaceRow extends Place {
+  number: number
+  startsAt: Date
+  endsAt: Date
+  sessionState: 'planned' | 'called-off'
+  mark: 'present' | 'late' | 'absent' | 'excused' | null
+  areas: string[]
+}
+
+export async function listPlaceRows(
+  trx: AcademyTrx,
+  enrolmentIds: readonly string[],
+): Promise<PlaceRow[]> {
+  const { rows } = await trx.raw<{ rows: PlaceRow[] }>(
+    `SELECT p.*, s.number, s.starts_at, s.ends_at, s.state AS session_state, m.mark,
+       (SELECT coalesce(json_agg(a.name ORDER BY sa.position), '[]') FROM session_areas sa
+          JOIN areas a ON a.academy_id = sa.academy_id AND a.id = sa.area_id
+          WHERE sa.academy_id = p.academy_id AND sa.session_id = p.session_id) AS areas
+     FROM places p
+     JOIN sessions s ON s.academy_id = p.academy_id AND s.id = p.session_id
+     LEFT JOIN marks m ON m.academy_id = p.academy_id AND m.place_id = p.id
+     WHERE p.enrolment_id = ANY(?) ORDER BY s.number`,
+    [[...enrolmentIds]],
+  )
+  return rows
+}
+
+/** Confirmed places of a session, locked. */
+export async function lockConfirmedPlaces(trx: AcademyTrx, sessionId: string): Promise<Place[]> {
+  return Place.query(trx).where({ sessionId, state: 'confirmed' }).orderBy('id').forUpdate()
+}

@@ -1,0 +1,67 @@
+import type { Answer } from '@marram/contract'
+import type { Handlers } from '../platform/http/context'
+import { asStaff } from '../platform/http/narrow'
+import { invariant } from '../platform/invariant'
+import type { Services } from '../platform/services'
+import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { holdPlaces, listWaitlist, lockOwnEnrolment } from './enrolments'
+import { joinWaitlist, leaveWaitlist, viewEntry } from './waitlist'
+
+type EnrolmentView = Answer<'enrolments.read'>
+
+/**
+ * Shows enrolments. How their payment stands is known further up, so whoever composes the app
+ * brings this along.
+ */
+export type ShowEnrolments = (
+  trx: AcademyTrx,
+  by: { ids: readonly string[] } | { accountId: string } | { clinicId: string },
+) => Promise<EnrolmentView[]>
+
+export type ReadCredit = (trx: AcademyTrx, accountId: string) => Promise<number>
+
+export function enrolmentHandlers(
+  services: Services,
+  { show, readCredit }: { show: ShowEnrolments; readCredit: ReadCredit },
+): Handlers {
+  const showOne = (academyId: string, id: string) =>
+    inAcademy(services.db, academyId, async (trx) => {
+      const [view] = await show(trx, { ids: [id] })
+      invariant(view, 'the enrolment to be shown exists')
+      return view
+    })
+
+  return {
+    'enrolments.mine': (_input, context) => {
+      const { academyId, account } = asStaff(context)
+      return inAcademy(services.db, academyId, async (trx) => ({
+        enrolments: await show(trx, { accountId: account.id }),
+        waitlist: (await listWaitlist(trx, { accountId: account.id })).map(viewEntry),
+        creditMinor: await readCredit(trx, account.id),
+      }))
+    },
+    'enrolments.hold': async ({ body }, context) => {
+      const { academyId, account: person } = asStaff(context)
+      const id = await holdPlaces(services, { academyId, person, wanted: body })
+      return showOne(academyId, id)
+    },
+    'enrolments.read': ({ params }, context) => {
+      const { academyId, account } = asStaff(context)
+      return inAcademy(services.db, academyId, async (trx) => {
+        await lockOwnEnrolment(trx, { ...params, accountId: account.id })
+        const [view] = await show(trx, { ids: [params.enrolmentId] })
+        invariant(view, 'the enrolment was just found')
+        return view
+      })
+    },
+    'waitlist.join': ({ body }, context) => {
+      const { academyId, account } = asStaff(context)
+      return joinWaitlist(services, { academyId, accountId: account.id, wanted: body })
+    },
+    'waitlist.leave': async ({ params }, context) => {
+      const { academyId, account } = asStaff(context)
+      await leaveWaitlist(services, { academyId, accountId: account.id, ...params })
+      return null
+    },
+  }
+}

@@ -1,0 +1,80 @@
+import { allocateByLargestRemainder, splitRunPrice, taxAdded, taxIncluded } from '@marram/money'
+
+export interface PricedSession {
+  id: string
+  number: number
+  startsAt: Date
+  state: 'planned' | 'called-off'
+}
+
+export interface PriceOfPlace {
+  sessionId: string
+  netMinor: number
+  taxMinor: number
+}
+
+export interface AgreedPrice {
+  netMinor: number
+  taxMinor: number
+  places: PriceOfPlace[]
+}
+
+/** The sessions that somebody who joins now can still take, in order of number. */
+export function sessionsAhead<S extends PricedSession>(sessions: readonly S[], now: Date): S[] {
+  return sessions
+    .filter(({ state, startsAt }) => state === 'planned' && startsAt.getTime() > now.getTime())
+    .sort((a, b) => a.number - b.number)
+}
+
+/**
+ * Agrees a price for places, net and tax apart, and allocates it to each session once. A run is
+ * split over all its sessions and a late joiner pays the shares of those that remain; the tax is
+ * worked out on what is paid, and then laid on the sessions by largest remainder.
+ */
+export function agreePrice(given: {
+  wanted:
+    { kind: 'run'; sessions: readonly PricedSession[] } | { kind: 'session'; sessionId: string }
+  taken: readonly { id: string }[]
+  runPriceMinor: number | null
+  dropInPriceMinor: number | null
+  isFree: boolean
+  tax: { mode: 'included' | 'added'; basisPoints: number }
+}): AgreedPrice {
+  const { taken, tax } = given
+  const shares = given.isFree ? taken.map(() => 0) : sharesOf(given)
+  const amountMinor = shares.reduce((sum, share) => sum + share, 0)
+  const rate = { amountMinor, rateBasisPoints: tax.basisPoints }
+  const { netMinor, taxMinor } = tax.mode === 'included' ? taxIncluded(rate) : taxAdded(rate)
+  const weights = shares.some((share) => share > 0) ? shares : taken.map(() => 1)
+  const nets = allocateByLargestRemainder(netMinor, weights)
+  const taxes = allocateByLargestRemainder(taxMinor, weights)
+  return {
+    netMinor,
+    taxMinor,
+    places: taken.map(({ id }, index) => ({
+      sessionId: id,
+      netMinor: nets[index] ?? 0,
+      taxMinor: taxes[index] ?? 0,
+    })),
+  }
+}
+
+function sharesOf(given: Parameters<typeof agreePrice>[0]): number[] {
+  const { wanted, taken, runPriceMinor, dropInPriceMinor } = given
+  if (wanted.kind === 'session') return taken.map(() => dropInPriceMinor ?? 0)
+  const ordered = [...wanted.sessions].sort((a, b) => a.number - b.number)
+  const split = splitRunPrice({ runPriceMinor: runPriceMinor ?? 0, sessionCount: ordered.length })
+  const shareOf = new Map(ordered.map(({ id }, index) => [id, split[index] ?? 0]))
+  return taken.map(({ id }) => shareOf.get(id) ?? 0)
+}
+
+/** A hold is over once its last millisecond has passed. */
+export function isLapsed(heldUntil: Date, now: Date): boolean {
+  return now.getTime() > heldUntil.getTime()
+}
+
+/** Until when an offer stands: some hours, but never past the start of what is offered. */
+export function offerUntil(given: { now: Date; offerHours: number; firstStartsAt: Date }): Date {
+  const byClock = given.now.getTime() + given.offerHours * 3_600_000
+  return new Date(Math.min(byClock, given.firstStartsAt.getTime()))
+}

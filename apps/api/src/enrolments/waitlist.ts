@@ -1,0 +1,136 @@
+import type { Answer } from '@marram/contract'
+import { listSessionsOf } from '../clinics/clinics'
+import { findOwnGolfer } from '../golfers/golfers'
+import { Problem, notFound } from '../platform/errors'
+import { newId } from '../platform/ids'
+import { invariant } from '../platform/invariant'
+import type { Services } from '../platform/services'
+import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { checkFit, findOnSale, takePlaces, type WantedPlaces } from './hold'
+import type { WaitlistEntry } from './models'
+import {
+  findActiveEnrolment,
+  findWaitlistEntry,
+  insertWaitlistEntry,
+  listWaitlist,
+  lockQueue,
+  updateWaitlistEntry,
+  type WaitlistRow,
+} from './queries'
+import { offerUntil, sessionsAhead } from './rules'
+
+type WaitlistView = Answer<'waitlist.join'>
+
+/** Joins the waitlist of a full run or session. Joining twice keeps the first place in it. */
+export async function joinWaitlist(
+  services: Services,
+  given: { academyId: string; accountId: string; wanted: WantedPlaces & { golferId: string } },
+): Promise<WaitlistView> {
+  const { accountId, wanted } = given
+  return inAcademy(services.db, given.academyId, async (trx) => {
+    const now = services.clock.now()
+    const { golferId, clinicId, sessionId = null } = wanted
+    const golfer = await findOwnGolfer(trx, { golferId, accountId })
+    const onSale = await findOnSale(trx, wanted, now)
+    checkFit(golfer, onSale)
+    const sessionIds = onSale.taken.map(({ id }) => id)
+    if (await findActiveEnrolment(trx, { golferId, sessionIds })) {
+      throw new Problem('already-has-place', 'This golfer has a place there already.')
+    }
+    const isFull = onSale.taken.some((s) => s.held + s.confirmed >= s.capacity)
+    if (!isFull) throw new Problem('not-on-sale', 'There is a place: take it instead of waiting.')
+    const mine = await listWaitlist(trx, { accountId })
+    const had = mine.find(
+      (row) =>
+        row.golferId === golferId && row.clinicId === clinicId && row.sessionId === sessionId,
+    )
+    if (had) return viewEntry(had)
+    const id = newId(now)
+    const entry = { id, clinicId, sessionId, golferId, accountId, joinedAt: now }
+    await insertWaitlistEntry(trx, { ...entry, state: 'waiting' })
+    const [row] = await listWaitlist(trx, { id })
+    invariant(row, 'the entry was just written')
+    return viewEntry(row)
+  })
+}
+
+export async function leaveWaitlist(
+  { db }: Services,
+  { academyId, accountId, entryId }: { academyId: string; accountId: string; entryId: string },
+): Promise<void> {
+  await inAcademy(db, academyId, async (trx) => {
+    const entry = await findWaitlistEntry(trx, entryId)
+    if (entry?.accountId !== accountId) throw notFound('waitlist entry')
+    if (entry.state === 'waiting') await updateWaitlistEntry(trx, entryId, { state: 'left' })
+  })
+}
+
+/**
+ * Offers freed places to those who wait, in the transaction that freed them, so that nobody can
+ * snipe them in between. Somebody who waits for a whole run is offered it only when every session
+ * still to come has a place.
+ */
+export async function offerFreedPlaces(
+  services: Services,
+  trx: AcademyTrx,
+  { academyId, clinicId }: { academyId: string; clinicId: string },
+): Promise<void> {
+  const queue = await lockQueue(trx, clinicId)
+  if (queue.length === 0) return
+  const now = services.clock.now()
+  const free = new Map(
+    sessionsAhead(await listSessionsOf(trx, clinicId), now).map((session) => [
+      session.id,
+      session.capacity - session.held - session.confirmed,
+    ]),
+  )
+  for (const entry of queue) {
+    const needed = entry.sessionId ? [entry.sessionId] : [...free.keys()]
+    const hasAll = needed.length > 0 && needed.every((id) => (free.get(id) ?? 0) > 0)
+    if (!hasAll) continue
+    if (!(await offer(services, trx, { academyId, entry, needed, now }))) continue
+    for (const id of needed) free.set(id, (free.get(id) ?? 0) - 1)
+  }
+}
+
+async function offer(
+  services: Services,
+  trx: AcademyTrx,
+  given: { academyId: string; entry: WaitlistEntry; needed: readonly string[]; now: Date },
+): Promise<boolean> {
+  const { academyId, entry, needed, now } = given
+  const { golferId, clinicId, sessionId, accountId } = entry
+  // Somebody who got in another way has no more use for the offer.
+  if (await findActiveEnrolment(trx, { golferId, sessionIds: needed })) {
+    await updateWaitlistEntry(trx, entry.id, { state: 'left' })
+    return false
+  }
+  const onSale = await findOnSale(trx, { clinicId, sessionId: sessionId ?? undefined }, now)
+  const [first] = onSale.taken
+  invariant(first, 'what is on sale has a first session')
+  const { offerHours } = onSale.academy
+  const enrolmentId = await takePlaces(services, trx, {
+    onSale,
+    golferId,
+    takenBy: accountId,
+    heldUntil: offerUntil({ now, offerHours, firstStartsAt: first.startsAt }),
+    isOffer: true,
+  })
+  const isFree = onSale.price.netMinor + onSale.price.taxMinor === 0
+  await updateWaitlistEntry(trx, entry.id, { state: isFree ? 'taken' : 'offered', enrolmentId })
+  if (!isFree) await services.outbox.emit(trx, 'enrolment.offered', { academyId, enrolmentId })
+  return true
+}
+
+export function viewEntry(row: WaitlistRow): WaitlistView {
+  return {
+    id: row.id,
+    clinic: { slug: row.clinicSlug, title: row.clinicTitle },
+    sessionStartsAt: row.sessionStartsAt?.toISOString() ?? null,
+    golferName: row.golferName,
+    position: row.position,
+    state: row.state === 'offered' ? 'offered' : 'waiting',
+    enrolmentId: row.enrolmentId,
+    offeredUntil: row.offeredUntil?.toISOString() ?? null,
+  }
+}
