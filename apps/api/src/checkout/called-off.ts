@@ -1,0 +1,226 @@
+import { readAcademy, type Academy } from '../academies/academies'
+import { findSession } from '../clinics/clinics'
+import {
+  endCalledOffPlaces,
+  findEnrolment,
+  findPlace,
+  listPlaces,
+  lockConfirmedPlaces,
+  lockEnrolment,
+  lockOwnEnrolment,
+  type Place,
+} from '../enrolments/enrolments'
+import { post, type PlaceAmount } from '../ledger/ledger'
+import { calledOffCredit, calledOffMoney } from '../ledger/postings'
+import { Problem, notFound } from '../platform/errors'
+import { newId } from '../platform/ids'
+import { localDayOf } from '../platform/local-day'
+import type { Services } from '../platform/services'
+import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import type { Order } from './models'
+import {
+  insertCredit,
+  insertOwedPlace,
+  insertRefund,
+  listPaymentsOf,
+  lockLiveOrder,
+  lockOwedPlace,
+  updateOwedPlace,
+} from './queries'
+
+/** How long a golfer may choose between money and credit. */
+const CHOICE_DAYS = 7
+
+/** A session was called off: every confirmed place in it ends, and what was paid for it is owed. */
+export async function owePlacesOfSession(
+  services: Services,
+  { academyId, sessionId }: { academyId: string; sessionId: string },
+): Promise<void> {
+  await inAcademy(services.db, academyId, async (trx) => {
+    const session = await findSession(trx, sessionId)
+    if (session?.state !== 'called-off') return
+    const academy = await readAcademy(trx)
+    for (const place of await lockConfirmedPlaces(trx, sessionId)) {
+      await owe(services, trx, { academy, place })
+    }
+  })
+}
+
+/** Places of an enrolment that was only just confirmed, in sessions called off while it was held. */
+export async function oweForCalledOff(
+  services: Services,
+  trx: AcademyTrx,
+  { academy, enrolmentId }: { academy: Academy; enrolmentId: string },
+): Promise<void> {
+  for (const place of await listPlaces(trx, enrolmentId)) {
+    if (place.state !== 'confirmed') continue
+    const session = await findSession(trx, place.sessionId)
+    if (session?.state === 'called-off') await owe(services, trx, { academy, place })
+  }
+}
+
+async function owe(
+  services: Services,
+  trx: AcademyTrx,
+  { academy, place }: { academy: Academy; place: Place },
+): Promise<void> {
+  const enrolment = await lockEnrolment(trx, place.enrolmentId)
+  if (!enrolment) return
+  await endCalledOffPlaces(services, trx, { enrolment, places: [place] })
+  const amountMinor = place.netMinor + place.taxMinor
+  if (amountMinor === 0) return
+  const now = services.clock.now()
+  await insertOwedPlace(trx, {
+    placeId: place.id,
+    amountMinor,
+    choice: null,
+    chosenBy: null,
+    chooseBy: new Date(now.getTime() + CHOICE_DAYS * 86_400_000),
+    settledAt: null,
+  })
+  // What was never paid is simply no longer owed, and leaves nothing to choose.
+  const source = await sourceOf(trx, enrolment.id)
+  if (source.from !== 'receivable') return
+  const chosen = { choice: 'money', chosenBy: 'default', settledAt: now } as const
+  await updateOwedPlace(trx, place.id, chosen)
+  await postMoneyBack(services, trx, { academy, place, source })
+}
+
+/** The golfer's choice for a place called off: money back or credit, once. */
+export async function chooseForOwedPlace(
+  services: Services,
+  given: {
+    academyId: string
+    accountId: string
+    placeId: string
+    choice: 'credit' | 'money'
+  },
+): Promise<void> {
+  const { accountId, placeId, choice } = given
+  await inAcademy(services.db, given.academyId, async (trx) => {
+    const place = await findPlace(trx, placeId)
+    if (!place) throw notFound('place')
+    await lockOwnEnrolment(trx, { enrolmentId: place.enrolmentId, accountId })
+    const owed = await lockOwedPlace(trx, placeId)
+    if (!owed) throw notFound('place that is owed')
+    if (owed.choice === choice) return
+    if (owed.choice) {
+      throw new Problem('already-decided', `This was settled as ${owed.choice} already.`)
+    }
+    await settle(services, trx, { place, choice, chosenBy: 'golfer' })
+  })
+}
+
+/** Seven days went by without a choice: the academy's default is taken. */
+export async function chooseByDefault(
+  services: Services,
+  { academyId, placeId }: { academyId: string; placeId: string },
+): Promise<void> {
+  await inAcademy(services.db, academyId, async (trx) => {
+    const place = await findPlace(trx, placeId)
+    if (!place) return
+    await lockEnrolment(trx, place.enrolmentId)
+    const owed = await lockOwedPlace(trx, placeId)
+    if (!owed || owed.choice || services.clock.now() <= owed.chooseBy) return
+    const { owedDefault } = await readAcademy(trx)
+    await settle(services, trx, { place, choice: owedDefault, chosenBy: 'default' })
+  })
+}
+
+async function settle(
+  services: Services,
+  trx: AcademyTrx,
+  given: { place: Place; choice: 'credit' | 'money'; chosenBy: 'golfer' | 'default' },
+): Promise<void> {
+  const { place, choice, chosenBy } = given
+  const academy = await readAcademy(trx)
+  const now = services.clock.now()
+  await updateOwedPlace(trx, place.id, { choice, chosenBy, settledAt: now })
+  if (choice === 'money') {
+    const source = await sourceOf(trx, place.enrolmentId)
+    await postMoneyBack(services, trx, { academy, place, source })
+    return
+  }
+  const amount = await amountOf(trx, place)
+  const posting = calledOffCredit({
+    sourceId: place.id,
+    what: 'Called off, kept as credit',
+    happenedOn: localDayOf(now, academy.zone),
+    place: amount,
+  })
+  await post(services, trx, { posting, currency: academy.currency })
+  await insertCredit(trx, {
+    id: newId(now),
+    golferId: place.golferId,
+    amountMinor: amount.netMinor + amount.taxMinor,
+    currency: academy.currency,
+    sourceType: 'owed-place',
+    sourceId: place.id,
+    createdAt: now,
+  })
+}
+
+export interface MoneySource {
+  order: Order | null
+  paymentId: string | null
+  from: 'provider-clearing' | 'cash-drawer' | 'receivable'
+}
+
+/** Where an enrolment's money came from, and so where it goes back to. */
+export async function sourceOf(trx: AcademyTrx, enrolmentId: string): Promise<MoneySource> {
+  const order = (await lockLiveOrder(trx, enrolmentId)) ?? null
+  const payments = order ? await listPaymentsOf(trx, [order.id]) : []
+  const card = payments.find(({ method }) => method === 'card')
+  if (card) return { order, paymentId: card.id, from: 'provider-clearing' }
+  const [cash] = payments
+  if (cash) return { order, paymentId: cash.id, from: 'cash-drawer' }
+  return { order, paymentId: null, from: 'receivable' }
+}
+
+async function postMoneyBack(
+  services: Services,
+  trx: AcademyTrx,
+  { academy, place, source }: { academy: Academy; place: Place; source: MoneySource },
+): Promise<void> {
+  const now = services.clock.now()
+  const amount = await amountOf(trx, place)
+  const isPaid = source.from !== 'receivable'
+  const posting = calledOffMoney({
+    sourceId: place.id,
+    what: isPaid ? 'Called off, money back' : 'Called off, no longer owed',
+    happenedOn: localDayOf(now, academy.zone),
+    place: amount,
+    from: source.from,
+  })
+  await post(services, trx, { posting, currency: academy.currency })
+  if (!isPaid || !source.order) return
+  const refundId = newId(now)
+  const isCard = source.from === 'provider-clearing'
+  const isNew = await insertRefund(trx, {
+    id: refundId,
+    orderId: source.order.id,
+    paymentId: source.paymentId,
+    reason: 'called-off',
+    sourceId: place.id,
+    method: isCard ? 'card' : 'cash',
+    amountMinor: amount.netMinor + amount.taxMinor,
+    currency: academy.currency,
+    state: isCard ? 'asked' : 'done',
+    createdAt: now,
+    doneAt: isCard ? null : now,
+  })
+  const { academyId } = academy
+  if (isNew && isCard) await services.outbox.emit(trx, 'refund.asked', { academyId, refundId })
+}
+
+async function amountOf(trx: AcademyTrx, place: Place): Promise<PlaceAmount> {
+  const session = await findSession(trx, place.sessionId)
+  const enrolment = await findEnrolment(trx, place.enrolmentId)
+  return {
+    clinicId: session?.clinicId ?? enrolment?.clinicId ?? '',
+    sessionId: place.sessionId,
+    heldOn: session?.heldOn ?? '',
+    netMinor: place.netMinor,
+    taxMinor: place.taxMinor,
+  }
+}

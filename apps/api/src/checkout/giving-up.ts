@@ -1,0 +1,169 @@
+import type { Answer } from '@marram/contract'
+import { divideRefund, refundByPolicy, toCurrencyCode, formatMoney } from '@marram/money'
+import { readAcademy, type Academy } from '../academies/academies'
+import {
+  giveUpPlaces,
+  listPlaces,
+  lockEnrolment,
+  lockOwnEnrolment,
+  type Enrolment,
+} from '../enrolments/enrolments'
+import { post } from '../ledger/ledger'
+import { givenUp, type GivenUpPlace } from '../ledger/postings'
+import { Problem, notFound } from '../platform/errors'
+import { newId } from '../platform/ids'
+import { localDayOf } from '../platform/local-day'
+import type { Services } from '../platform/services'
+import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { sourceOf, type MoneySource } from './called-off'
+import { insertRefund, listEnrolmentPlaces } from './queries'
+import { policySentence } from './rules'
+
+type Quote = Answer<'checkout.quote-giving-up'>
+
+/** Whose place is given up: the person's own, or anybody's when staff do it. */
+export interface GivingUp {
+  academyId: string
+  enrolmentId: string
+  accountId: string | 'staff'
+}
+
+interface Reckoning {
+  academy: Academy
+  enrolment: Enrolment
+  source: MoneySource
+  places: (GivenUpPlace & { placeId: string })[]
+  paidMinor: number
+  backMinor: number
+  bestBasisPoints: number
+}
+
+/** What giving up now would bring back, shown before anything is pressed. */
+export async function quoteGivingUp({ db, clock }: Services, given: GivingUp): Promise<Quote> {
+  return inAcademy(db, given.academyId, async (trx) =>
+    toQuote(await reckon(trx, given, clock.now())),
+  )
+}
+
+function toQuote(reckoning: Reckoning): Quote {
+  const { academy, source, places, paidMinor, backMinor, bestBasisPoints } = reckoning
+  const isPaid = source.from !== 'receivable'
+  return {
+    paidMinor: isPaid ? paidMinor : 0,
+    refundMinor: isPaid ? backMinor : 0,
+    refundBasisPoints: bestBasisPoints,
+    sentence: policySentence({ tiers: academy.refundTiers, refundBasisPoints: bestBasisPoints }),
+    places: places.length,
+    comesBackAs: backMinor === 0 || !isPaid ? 'nothing' : cardOrCash(source),
+  }
+}
+
+const cardOrCash = ({ from }: MoneySource) => (from === 'provider-clearing' ? 'card' : 'cash')
+
+/** Each place goes by the notice given for its own session. */
+async function reckon(trx: AcademyTrx, given: GivingUp, now: Date): Promise<Reckoning> {
+  const enrolment = await lockFor(trx, given)
+  if (enrolment.state !== 'confirmed') {
+    throw new Problem('already-decided', 'This place is not confirmed, or has ended already.')
+  }
+  const academy = await readAcademy(trx)
+  const ahead = (await listEnrolmentPlaces(trx, enrolment.id)).filter(
+    ({ state, sessionState, startsAt }) =>
+      state === 'confirmed' && sessionState === 'planned' && startsAt > now,
+  )
+  if (ahead.length === 0) {
+    throw new Problem('already-decided', 'Every session of this has begun.')
+  }
+  let bestBasisPoints = 0
+  const places = ahead.map((place) => {
+    const { refundBasisPoints } = refundByPolicy({
+      tiers: academy.refundTiers,
+      noticeMilliseconds: place.startsAt.getTime() - now.getTime(),
+    })
+    bestBasisPoints = Math.max(bestBasisPoints, refundBasisPoints)
+    const { netMinor, taxMinor } = place
+    return { ...place, ...divideRefund({ netMinor, taxMinor, refundBasisPoints }) }
+  })
+  return {
+    academy,
+    enrolment,
+    source: await sourceOf(trx, enrolment.id),
+    places,
+    paidMinor: places.reduce((sum, { netMinor, taxMinor }) => sum + netMinor + taxMinor, 0),
+    backMinor: places.reduce((sum, { back }) => sum + back.grossMinor, 0),
+    bestBasisPoints,
+  }
+}
+
+async function lockFor(trx: AcademyTrx, given: GivingUp): Promise<Enrolment> {
+  const { enrolmentId, accountId } = given
+  if (accountId !== 'staff') return lockOwnEnrolment(trx, { enrolmentId, accountId })
+  const enrolment = await lockEnrolment(trx, enrolmentId)
+  if (!enrolment) throw notFound('place')
+  return enrolment
+}
+
+/**
+ * Gives up every place that is still ahead, for the amount that was shown. Throws
+ * `changed-meanwhile` when the policy gives another one by now.
+ */
+export async function giveUp(
+  services: Services,
+  given: GivingUp & { refundMinor: number },
+): Promise<void> {
+  await inAcademy(services.db, given.academyId, async (trx) => {
+    const now = services.clock.now()
+    const reckoning = await reckon(trx, given, now)
+    const { academy, enrolment, source } = reckoning
+    const { refundMinor } = toQuote(reckoning)
+    if (refundMinor !== given.refundMinor) {
+      const currency = toCurrencyCode(academy.currency)
+      const amount = formatMoney({ amountMinor: refundMinor, currency }, { locale: academy.locale })
+      throw new Problem('changed-meanwhile', `You would get ${amount} back now.`)
+    }
+    const ids = new Set(reckoning.places.map(({ placeId }) => placeId))
+    const places = (await listPlaces(trx, enrolment.id)).filter(({ id }) => ids.has(id))
+    const { academyId } = academy
+    await giveUpPlaces(services, trx, { academyId, enrolment, places })
+    const posting = givenUp({
+      sourceId: enrolment.id,
+      what: 'Given up by the golfer',
+      happenedOn: localDayOf(now, academy.zone),
+      places: reckoning.places,
+      from: source.from,
+    })
+    if (enrolment.netMinor + enrolment.taxMinor > 0) {
+      await post(services, trx, { posting, currency: academy.currency })
+    }
+    await askRefund(services, trx, { reckoning, refundMinor, now })
+    const event = { academyId, enrolmentId: enrolment.id, refundMinor }
+    await services.outbox.emit(trx, 'enrolment.given-up', event)
+  })
+}
+
+async function askRefund(
+  services: Services,
+  trx: AcademyTrx,
+  given: { reckoning: Reckoning; refundMinor: number; now: Date },
+): Promise<void> {
+  const { reckoning, refundMinor, now } = given
+  const { academy, enrolment, source } = reckoning
+  if (refundMinor === 0 || !source.order) return
+  const isCard = cardOrCash(source) === 'card'
+  const refundId = newId(now)
+  const isNew = await insertRefund(trx, {
+    id: refundId,
+    orderId: source.order.id,
+    paymentId: source.paymentId,
+    reason: 'given-up',
+    sourceId: enrolment.id,
+    method: isCard ? 'card' : 'cash',
+    amountMinor: refundMinor,
+    currency: academy.currency,
+    state: isCard ? 'asked' : 'done',
+    createdAt: now,
+    doneAt: isCard ? null : now,
+  })
+  const { academyId } = academy
+  if (isNew && isCard) await services.outbox.emit(trx, 'refund.asked', { academyId, refundId })
+}

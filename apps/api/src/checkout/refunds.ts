@@ -1,0 +1,73 @@
+import { readAcademy } from '../academies/academies'
+import { post } from '../ledger/ledger'
+import { refundFailed, unplacedRefund } from '../ledger/postings'
+import { invariant } from '../platform/invariant'
+import { localDayOf } from '../platform/local-day'
+import type { Services } from '../platform/services'
+import { inAcademy } from '../platform/tenancy/transaction'
+import type { PaymentsProvider, ProviderRefund } from './provider'
+import { findPayment, lockRefund, updateRefund } from './queries'
+
+/** Carries a refund out at the provider. The same refund asked again is the same one there. */
+export async function carryOutRefund(
+  services: Services,
+  provider: PaymentsProvider,
+  { academyId, refundId }: { academyId: string; refundId: string },
+): Promise<void> {
+  const asked = await inAcademy(services.db, academyId, async (trx) => {
+    const refund = await lockRefund(trx, refundId)
+    if (refund?.state !== 'asked' || !refund.paymentId) return null
+    const payment = await findPayment(trx, refund.paymentId)
+    const { paymentsAccount } = await readAcademy(trx)
+    invariant(payment?.providerPayment && paymentsAccount, 'a card refund has a card payment')
+    return { refund, payment: payment.providerPayment, account: paymentsAccount }
+  })
+  if (!asked) return
+  const { refund, payment, account } = asked
+  const answer = await provider.refund({
+    account,
+    payment,
+    amountMinor: refund.amountMinor,
+    currency: refund.currency,
+    refundId,
+    orderId: refund.orderId,
+  })
+  await settleRefund(services, { academyId, answer: { ...answer, refundId } })
+}
+
+/** What the provider says of a refund; it only moves forward, and a failure after success counts. */
+export async function settleRefund(
+  services: Services,
+  { academyId, answer }: { academyId: string; answer: ProviderRefund },
+): Promise<void> {
+  const { refundId } = answer
+  if (!refundId) return
+  await inAcademy(services.db, academyId, async (trx) => {
+    const refund = await lockRefund(trx, refundId)
+    if (!refund || refund.state === 'failed') return
+    const now = services.clock.now()
+    const { zone } = await readAcademy(trx)
+    const about = { sourceId: refundId, happenedOn: localDayOf(now, zone) }
+    const { amountMinor, currency } = refund
+    if (answer.state === 'failed') {
+      const what = 'Refund failed at the provider'
+      const posting = refundFailed({ ...about, what, amountMinor })
+      await updateRefund(trx, refundId, { state: 'failed', providerRefund: answer.id })
+      await post(services, trx, { posting, currency })
+      services.log.warn({ refundId, academyId }, 'a refund failed at the provider')
+      return
+    }
+    if (refund.state === 'asked' && refund.reason === 'late-payment') {
+      const what = 'Late payment given back'
+      await post(services, trx, {
+        posting: unplacedRefund({ ...about, what, amountMinor }),
+        currency,
+      })
+    }
+    const isDone = answer.state === 'done'
+    await updateRefund(trx, refundId, {
+      providerRefund: answer.id,
+      ...(isDone ? { state: 'done', doneAt: now } : {}),
+    })
+  })
+}

@@ -1,0 +1,110 @@
+import { readAcademy } from '../academies/academies'
+import { isCoachOfClinic } from '../clinics/clinics'
+import { givePlaces, listWaitlist, lockEnrolment } from '../enrolments/enrolments'
+import { viewEntry } from '../enrolments/waitlist'
+import { changeGolfer, readGolfer } from '../golfers/golfers'
+import { notFound } from '../platform/errors'
+import type { Handlers, RequestContext } from '../platform/http/context'
+import { asAcademy, asStaff } from '../platform/http/narrow'
+import { invariant } from '../platform/invariant'
+import type { Services } from '../platform/services'
+import { inAcademy } from '../platform/tenancy/transaction'
+import { chooseForOwedPlace } from './called-off'
+import { giveUp, quoteGivingUp } from './giving-up'
+import { letGo, payAtDesk, promiseAtDesk, startCheckout, takeCash } from './orders'
+import { connectPayments, readPaymentsAccount } from './payments-account'
+import type { PaymentsProvider } from './provider'
+import { readCreditOfGolfer } from './queries'
+import { showEnrolments } from './views'
+
+export function checkoutHandlers(services: Services, provider: PaymentsProvider): Handlers {
+  const show = (academyId: string, id: string) =>
+    inAcademy(services.db, academyId, async (trx) => {
+      const [view] = await showEnrolments(trx, { ids: [id] })
+      if (!view) throw notFound('place')
+      return view
+    })
+  const own = (context: RequestContext, enrolmentId: string) => {
+    const { academyId, account } = asStaff(context)
+    return { academyId, enrolmentId, accountId: account.id }
+  }
+  const byStaff = (context: RequestContext, enrolmentId: string) =>
+    ({ academyId: asAcademy(context).academyId, enrolmentId, accountId: 'staff' }) as const
+  const readOneGolfer = (context: RequestContext, golferId: string) => {
+    const { academyId, account, scope } = asStaff(context)
+    const reach = { academyId, accountId: account.id, scope: scope ?? 'own' }
+    return readGolfer(services, { reach, golferId, creditOf: readCreditOfGolfer })
+  }
+
+  return {
+    'checkout.start': async ({ params }, context) => ({
+      url: await startCheckout(services, provider, own(context, params.enrolmentId)),
+    }),
+    'checkout.at-desk': async ({ params }, context) => {
+      const mine = own(context, params.enrolmentId)
+      await payAtDesk(services, provider, mine)
+      return show(mine.academyId, mine.enrolmentId)
+    },
+    'enrolments.release': async ({ params }, context) => {
+      await letGo(services, provider, own(context, params.enrolmentId))
+      return null
+    },
+    'enrolments.give': async ({ body }, context) => {
+      const { academyId } = asAcademy(context)
+      const id = await givePlaces(services, { academyId, wanted: body }, async (trx, given) => {
+        const enrolment = await lockEnrolment(trx, given)
+        invariant(enrolment, 'the enrolment was just written')
+        await promiseAtDesk(services, trx, { academy: await readAcademy(trx), enrolment })
+      })
+      return show(academyId, id)
+    },
+    'enrolments.of-clinic': ({ params }, context) => {
+      const { academyId, account, scope } = asStaff(context)
+      return inAcademy(services.db, academyId, async (trx) => {
+        const { clinicId } = params
+        const isTheirs = await isCoachOfClinic(trx, { clinicId, accountId: account.id })
+        if (scope === 'own' && !isTheirs) throw notFound('clinic')
+        return {
+          enrolments: await showEnrolments(trx, { clinicId }),
+          waitlist: (await listWaitlist(trx, { clinicId })).map(viewEntry),
+        }
+      })
+    },
+    'checkout.quote-giving-up': ({ params }, context) =>
+      quoteGivingUp(services, own(context, params.enrolmentId)),
+    'checkout.give-up': async ({ params, body }, context) => {
+      const mine = own(context, params.enrolmentId)
+      await giveUp(services, { ...mine, ...body })
+      return show(mine.academyId, mine.enrolmentId)
+    },
+    'checkout.quote-giving-up-for': ({ params }, context) =>
+      quoteGivingUp(services, byStaff(context, params.enrolmentId)),
+    'checkout.give-up-for': async ({ params, body }, context) => {
+      const theirs = byStaff(context, params.enrolmentId)
+      await giveUp(services, { ...theirs, ...body })
+      return show(theirs.academyId, theirs.enrolmentId)
+    },
+    'checkout.choose': async ({ params, body }, context) => {
+      const { academyId, account } = asStaff(context)
+      await chooseForOwedPlace(services, { academyId, accountId: account.id, ...params, ...body })
+      return null
+    },
+    'checkout.take-cash': async ({ params, body }, context) => {
+      const { academyId, account } = asStaff(context)
+      await takeCash(services, { academyId, ...params, ...body, takenBy: account.id })
+      return show(academyId, params.enrolmentId)
+    },
+    'payments.read': (_input, context) =>
+      readPaymentsAccount(services, provider, asAcademy(context).academyId),
+    'payments.connect': (_input, context) => {
+      const { academyId, account } = asStaff(context)
+      return connectPayments(services, provider, { academyId, email: account.email })
+    },
+    'golfers.read': ({ params }, context) => readOneGolfer(context, params.golferId),
+    'golfers.change': async ({ params, body }, context) => {
+      const { academyId } = asAcademy(context)
+      await changeGolfer(services, { academyId, ...params, change: body })
+      return readOneGolfer(context, params.golferId)
+    },
+  }
+}
