@@ -43,6 +43,7 @@ export async function owePlacesOfSession(
     for (const place of await lockConfirmedPlaces(trx, sessionId)) {
       await owe(services, trx, { academy, place })
     }
+    await services.outbox.emit(trx, 'session.owed', { academyId, sessionId })
   })
 }
 

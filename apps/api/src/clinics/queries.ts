@@ -356,3 +356,8 @@ export async function isCoachOfClinic(
   )
   return rows.length > 0
 }
+
+export async function listTitles(trx: AcademyTrx): Promise<Map<string, string>> {
+  const rows = await Clinic.query(trx).select('id', 'title')
+  return new Map(rows.map(({ id, title }) => [id, title]))
+}

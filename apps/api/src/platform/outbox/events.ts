@@ -9,6 +9,8 @@ export interface OutboxEvents {
   'enrolment.offered': { academyId: string; enrolmentId: string }
   'enrolment.given-up': { academyId: string; enrolmentId: string; refundMinor: number }
   'session.called-off': { academyId: string; sessionId: string }
+  /** Places of a called-off session have ended, and what is owed for them stands. */
+  'session.owed': { academyId: string; sessionId: string }
   'session.changed': { academyId: string; sessionId: string }
   'register.closed': { academyId: string; sessionId: string; revision: number }
   'register.reopened': { academyId: string; sessionId: string; revision: number }
@@ -28,7 +30,8 @@ export const LISTENERS = {
   'enrolment.confirmed': ['messaging'],
   'enrolment.offered': ['messaging'],
   'enrolment.given-up': ['messaging'],
-  'session.called-off': ['checkout', 'messaging'],
+  'session.called-off': ['checkout'],
+  'session.owed': ['messaging'],
   'session.changed': ['checkout', 'messaging'],
   'register.closed': ['checkout'],
   'register.reopened': ['checkout'],

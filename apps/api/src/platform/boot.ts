@@ -1,0 +1,71 @@
+import type { Server } from 'node:http'
+import { systemClock, type Clock } from './clock'
+import { readConfig, type Config } from './config'
+import { connect } from './db/connect'
+import { makeLogger } from './logging'
+import { makeMetrics } from './metrics'
+import { makeOutbox } from './outbox/outbox'
+import type { Services } from './services'
+
+/** Makes what every use case may reach, from the configuration. */
+export function makeServices(config: Config, given: { name: string; clock?: Clock }): Services {
+  return {
+    config,
+    db: connect({
+      url: config.database.url,
+      poolSize: config.database.poolSize,
+      name: given.name,
+    }),
+    clock: given.clock ?? systemClock,
+    outbox: makeOutbox(),
+    log: makeLogger({ level: config.logLevel }),
+    metrics: makeMetrics(),
+  }
+}
+
+/** Reads the configuration or ends the process with the sentence that says what is wrong. */
+export function readConfigOrExit(): Config {
+  try {
+    return readConfig(process.env)
+  } catch (error) {
+    process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`)
+    process.exit(78)
+  }
+}
+
+/** Listens on loopback, or on every address in production behind its proxy. */
+export function listen(
+  server: Server,
+  { port, mode }: Pick<Config, 'port' | 'mode'>,
+): Promise<number> {
+  const host = mode === 'production' ? '0.0.0.0' : '127.0.0.1'
+  return new Promise((resolve, reject) => {
+    server.once('error', reject)
+    server.listen(port, host, () => {
+      const address = server.address()
+      resolve(typeof address === 'object' && address ? address.port : port)
+    })
+  })
+}
+
+/** Runs `stop` once at the first SIGTERM or SIGINT, then ends the process. */
+export function stopOnSignal(log: Services['log'], stop: () => Promise<void>): void {
+  let isStopping = false
+  for (const signal of ['SIGTERM', 'SIGINT'] as const) {
+    process.on(signal, () => {
+      if (isStopping) return
+      isStopping = true
+      const forced = setTimeout(() => process.exit(1), 15_000)
+      stop().then(
+        () => {
+          clearTimeout(forced)
+          process.exit(0)
+        },
+        (err: unknown) => {
+          log.error({ err }, 'stopping failed')
+          process.exit(1)
+        },
+      )
+    })
+  }
+}
