@@ -1,4 +1,4 @@
-import knex, { Knex } from 'knex'
+import knex, { type Knex } from 'knex'
 import { knexSnakeCaseMappers } from 'objection'
 import pg from 'pg'
 import { MarramPgClient } from './client'
@@ -22,6 +22,15 @@ pg.types.setTypeParser(DATE_ARRAY as never, (text: string) =>
   text.slice(1, -1).split(',').filter(Boolean),
 )
 
+const names = knexSnakeCaseMappers()
+
+/** The library renames the columns of built queries; raw ones answer with their rows inside. */
+function toCamelCase(response: unknown): unknown {
+  const { rows } = Object(response) as { rows?: unknown }
+  if (Array.isArray(rows)) return { rows: names.postProcessResponse(rows) as unknown }
+  return names.postProcessResponse(response) as unknown
+}
+
 /** Opens a pool. Rows come back in camelCase, and identifiers go out in snake_case. */
 export function connect(options: { url: string; poolSize: number; name: string }): Knex {
   return knex({
@@ -35,6 +44,7 @@ export function connect(options: { url: string; poolSize: number; name: string }
     },
     pool: { min: 0, max: options.poolSize },
     acquireConnectionTimeout: 15_000,
-    ...knexSnakeCaseMappers(),
+    wrapIdentifier: names.wrapIdentifier,
+    postProcessResponse: toCamelCase,
   })
 }
