@@ -48,24 +48,28 @@ export function listen(
   })
 }
 
-/** Runs `stop` once at the first SIGTERM or SIGINT, then ends the process. */
+/**
+ * Runs `stop` once at the first SIGTERM or SIGINT, then ends the process. A process that was started
+ * with a pipe for its input also stops when whoever started it is gone, however that came.
+ */
 export function stopOnSignal(log: Services['log'], stop: () => Promise<void>): void {
   let isStopping = false
-  for (const signal of ['SIGTERM', 'SIGINT'] as const) {
-    process.on(signal, () => {
-      if (isStopping) return
-      isStopping = true
-      const forced = setTimeout(() => process.exit(1), 15_000)
-      stop().then(
-        () => {
-          clearTimeout(forced)
-          process.exit(0)
-        },
-        (err: unknown) => {
-          log.error({ err }, 'stopping failed')
-          process.exit(1)
-        },
-      )
-    })
+  const stopOnce = () => {
+    if (isStopping) return
+    isStopping = true
+    setTimeout(() => process.exit(1), 15_000).unref()
+    stop().then(
+      () => process.exit(0),
+      (err: unknown) => {
+        log.error({ err }, 'stopping failed')
+        process.exit(1)
+      },
+    )
+  }
+  process.on('SIGTERM', stopOnce)
+  process.on('SIGINT', stopOnce)
+  if (process.env['MARRAM_STOP_WITH_PARENT'] === 'yes') {
+    process.stdin.on('end', stopOnce)
+    process.stdin.resume()
   }
 }

@@ -1,0 +1,114 @@
+/**
+ * Who may import whom. Features of the API import downwards only, in the order of this list; the
+ * packages import no app; only query files touch the database libraries; only adapters a vendor.
+ */
+const FEATURES_UPWARDS = [
+  ['accounts'],
+  ['academies'],
+  ['venues', 'coaches', 'golfers'],
+  ['clinics'],
+  ['enrolments'],
+  ['register'],
+  ['checkout'],
+  ['messaging'],
+  ['demo'],
+]
+
+const VENDORS = ['stripe', '@sendgrid/mail', '@sendgrid/client', '@sendgrid/eventwebhook']
+const DATABASE = ['knex', 'objection', 'pg']
+
+const pattern = (group, message) => ({ group, message })
+
+function rule(files, patterns, ignores = []) {
+  return {
+    files,
+    ignores,
+    rules: {
+      '@typescript-eslint/no-restricted-imports': ['error', { patterns }],
+    },
+  }
+}
+
+const vendorRule = pattern(VENDORS, 'Only an adapter touches a vendor.')
+const databaseRule = {
+  group: DATABASE,
+  allowTypeImports: true,
+  message: 'Only queries.ts and models.ts touch the database libraries.',
+}
+
+/** Feature folders above a feature, which it must not import. `ledger` stands below all but platform. */
+function above(level) {
+  return FEATURES_UPWARDS.slice(level + 1)
+    .flat()
+    .map((name) => `../${name}/**`)
+}
+
+const perFeature = FEATURES_UPWARDS.flatMap((names, level) =>
+  names.map((name) => {
+    const patterns = [vendorRule, databaseRule]
+    const forbidden = above(level)
+    if (forbidden.length > 0) patterns.push(pattern(forbidden, 'Features import downwards only.'))
+    return rule([`apps/api/src/${name}/**/*.ts`], patterns, [
+      '**/*-queries.ts',
+      '**/queries.ts',
+      '**/models.ts',
+      '**/*-provider.ts',
+      '**/webhooks.ts',
+      '**/*.test.ts',
+    ])
+  }),
+)
+
+export const boundaries = [
+  rule(['packages/**/*.ts'], [pattern(['**/apps/**'], 'A package imports no app.')]),
+  rule(
+    ['packages/{money,schedule}/src/**/*.ts'],
+    [pattern(['node:*', '**/apps/**'], 'This package is pure: no input, no output, no clock.')],
+    ['**/*.test.ts'],
+  ),
+  rule(
+    ['apps/api/src/ledger/**/*.ts'],
+    [
+      pattern(
+        FEATURES_UPWARDS.flat().map((name) => `../${name}/**`),
+        'The ledger knows no feature.',
+      ),
+      vendorRule,
+    ],
+  ),
+  rule(
+    ['apps/api/src/platform/**/*.ts'],
+    [
+      pattern(
+        [...FEATURES_UPWARDS.flat(), 'ledger'].flatMap((name) => [
+          `../${name}/**`,
+          `../../${name}/**`,
+        ]),
+        'The platform knows no feature.',
+      ),
+    ],
+  ),
+  ...perFeature,
+  {
+    files: ['apps/api/src/**/*.ts'],
+    ignores: ['apps/api/src/platform/clock.ts', '**/*.test.ts'],
+    rules: {
+      'no-restricted-syntax': [
+        'error',
+        {
+          selector: "CallExpression[callee.object.name='Date'][callee.property.name='now']",
+          message: 'Only platform/clock.ts reads the clock; use services.clock.',
+        },
+        {
+          selector: "NewExpression[callee.name='Date'][arguments.length=0]",
+          message: 'Only platform/clock.ts reads the clock; use services.clock.',
+        },
+        {
+          selector:
+            'CallExpression[callee.property.name=/^(upsertGraph|allowGraph|insertGraphAndFetch)/]',
+          message: 'Graph writes delete what they were not given; write rows one kind at a time.',
+        },
+      ],
+    },
+  },
+]
