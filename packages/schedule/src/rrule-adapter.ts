@@ -27,31 +27,78 @@ export function expandFloating(given: {
   limit: number
   count?: number
 }): number[] {
-  const { rule, startMs, limit } = given
-  // rrule drops milliseconds of the start but compares UNTIL with them.
-  const start = new Date(Math.floor(startMs / 1000) * 1000)
-  const horizon = new Date(start)
-  horizon.setUTCFullYear(start.getUTCFullYear() + HORIZON_YEARS)
+  const { rule, startMs } = given
+  const ownCount = rule.ends.kind === 'count' ? rule.ends.count : Infinity
+  const span = {
+    startMs,
+    endMs: Math.min(untilMs(rule), horizonMs(startMs)),
+    most: Math.min(given.limit, given.count ?? ownCount),
+  }
+  return rule.bySetPos.length > 0 ? pickPositions(rule, span) : expand(rule, span)
+}
 
-  const dates = new RRule(
-    {
-      freq: FREQUENCIES[rule.freq],
-      interval: rule.interval,
-      dtstart: start,
-      wkst: RRule[rule.weekStart],
-      until: new Date(Math.min(untilMs(rule), horizon.valueOf())),
-      ...(rule.ends.kind === 'count' && { count: given.count ?? rule.ends.count }),
-      ...(rule.byDay.length > 0 && {
-        byweekday: rule.byDay.map(({ weekday, nth }) =>
-          nth === null ? RRule[weekday] : RRule[weekday].nth(nth),
-        ),
-      }),
-      ...(rule.byMonthDay.length > 0 && { bymonthday: [...rule.byMonthDay] }),
-      ...(rule.bySetPos.length > 0 && { bysetpos: [...rule.bySetPos] }),
-    },
-    true,
-  ).all((_date, index) => index < limit)
+interface Span {
+  startMs: number
+  endMs: number
+  most: number
+}
+
+/** All that the rule matches, its BYSETPOS aside. */
+function expand(rule: Recurrence, { startMs, endMs, most }: Span): number[] {
+  const options = {
+    freq: FREQUENCIES[rule.freq],
+    interval: rule.interval,
+    dtstart: new Date(startMs),
+    until: new Date(endMs),
+    wkst: RRule[rule.weekStart],
+    ...(rule.byDay.length > 0 && {
+      byweekday: rule.byDay.map(({ weekday, nth }) =>
+        nth === null ? RRule[weekday] : RRule[weekday].nth(nth),
+      ),
+    }),
+    ...(rule.byMonthDay.length > 0 && { bymonthday: [...rule.byMonthDay] }),
+  }
+  const dates = new RRule(options, true).all((_date, index) => index < most)
   return dates.map((date) => date.valueOf())
+}
+
+/**
+ * BYSETPOS of a monthly rule: the chosen places among each month's matches, counted over the whole
+ * month even where the run begins or ends within it. Not left to rrule, which gives a day twice
+ * that is both the first and the last, and some days out of order.
+ */
+function pickPositions(rule: Recurrence, { startMs, endMs, most }: Span): number[] {
+  const months = new Map<string, number[]>()
+  const whole = { startMs: startOfMonth(startMs), endMs: endOfMonth(endMs) }
+  const enough = (most + 1) * MOST_DAYS_IN_MONTH
+  for (const dateMs of expand(rule, { ...whole, most: enough })) {
+    const month = new Date(dateMs).toISOString().slice(0, 7)
+    months.set(month, [...(months.get(month) ?? []), dateMs])
+  }
+  return [...months.values()]
+    .flatMap((dates) => {
+      const chosen = new Set(rule.bySetPos.map((place) => dates.at(place > 0 ? place - 1 : place)))
+      return dates.filter((dateMs) => chosen.has(dateMs))
+    })
+    .filter((dateMs) => dateMs >= startMs && dateMs <= endMs)
+    .slice(0, most)
+}
+
+const MOST_DAYS_IN_MONTH = 31
+
+function horizonMs(startMs: number): number {
+  const horizon = new Date(startMs)
+  return horizon.setUTCFullYear(horizon.getUTCFullYear() + HORIZON_YEARS)
+}
+
+function startOfMonth(localMs: number): number {
+  const day = new Date(localMs)
+  return day.setUTCDate(1)
+}
+
+function endOfMonth(localMs: number): number {
+  const day = new Date(localMs)
+  return Date.UTC(day.getUTCFullYear(), day.getUTCMonth() + 1) - 1000
 }
 
 function untilMs({ ends }: Recurrence): number {
