@@ -87,6 +87,17 @@ describe('expandLocal', () => {
     ])
   })
 
+  it('counts places over the whole month, a day once, in order of time', () => {
+    const thursdays = 'FREQ=MONTHLY;BYDAY=TH;BYSETPOS=-2,5,2;COUNT=5'
+    expect(daysOf(thursdays, '2024-08-19')).toEqual([
+      ...['2024-08-22', '2024-08-29', '2024-09-12', '2024-09-19', '2024-10-10'],
+    ])
+    const both = 'FREQ=MONTHLY;BYDAY=TU;BYSETPOS=1,-1,-5;UNTIL=20260612'
+    expect(daysOf(both, '2026-03-10')).toEqual([
+      ...['2026-03-31', '2026-04-07', '2026-04-28', '2026-05-05', '2026-05-26', '2026-06-02'],
+    ])
+  })
+
   it('gives nothing for what never comes, without seeking for ever', () => {
     expect(daysOf('FREQ=MONTHLY;BYMONTHDAY=31;BYDAY=1MO;COUNT=3', '2026-01-01')).toEqual([])
     expect(daysOf('FREQ=DAILY;INTERVAL=7;BYDAY=WE;COUNT=3', '2026-01-01')).toEqual([])

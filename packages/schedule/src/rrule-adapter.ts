@@ -34,17 +34,29 @@ export function expandFloating(given: {
     endMs: Math.min(untilMs(rule), horizonMs(startMs)),
     most: Math.min(given.limit, given.count ?? ownCount),
   }
-  return rule.bySetPos.length > 0 ? pickPositions(rule, span) : expand(rule, span)
+  const dates: number[] = []
+  const take = (dateMs: number): boolean => {
+    if (dateMs >= span.startMs && dateMs <= span.endMs) dates.push(dateMs)
+    return dates.length < span.most
+  }
+  if (rule.bySetPos.length > 0) visitPositions(rule, span, take)
+  else visitMatches(rule, span, take)
+  return dates
 }
 
 interface Span {
   startMs: number
   endMs: number
-  most: number
 }
 
-/** All that the rule matches, its BYSETPOS aside. */
-function expand(rule: Recurrence, { startMs, endMs, most }: Span): number[] {
+/** Takes a date and says whether another is wanted. */
+type Visitor = (dateMs: number) => boolean
+
+/** Shows all that the rule matches, its BYSETPOS aside, in order. */
+function visitMatches(rule: Recurrence, { startMs, endMs }: Span, visit: Visitor): void {
+  // Where a day must pass two tests, that of the weekday is made here: rrule looks at its end only
+  // when a day has passed both, and would seek a rule that never matches until the year 9999.
+  const testsWeekdayHere = rule.freq === 'daily' || rule.byMonthDay.length > 0
   const options = {
     freq: FREQUENCIES[rule.freq],
     interval: rule.interval,
@@ -58,42 +70,56 @@ function expand(rule: Recurrence, { startMs, endMs, most }: Span): number[] {
     }),
     ...(rule.byMonthDay.length > 0 && { bymonthday: [...rule.byMonthDay] }),
   }
-  const dates = new RRule(options, true).all((_date, index) => index < most)
-  return dates.map((date) => date.valueOf())
+  if (testsWeekdayHere) delete options.byweekday
+  new RRule(options, true).all(
+    (date) => (testsWeekdayHere && !isAmong(rule.byDay, date)) || visit(date.valueOf()),
+  )
 }
 
 /**
- * BYSETPOS of a monthly rule: the chosen places among each month's matches, counted over the whole
- * month even where the run begins or ends within it. Not left to rrule, which gives a day twice
- * that is both the first and the last, and some days out of order.
+ * Shows the chosen places among each month's matches, counted over the whole month even where the
+ * run begins or ends within it. Not left to rrule, which gives a day twice that is both the first
+ * and the last, and some days out of order.
  */
-function pickPositions(rule: Recurrence, { startMs, endMs, most }: Span): number[] {
-  const months = new Map<string, number[]>()
-  const whole = { startMs: startOfMonth(startMs), endMs: endOfMonth(endMs) }
-  const enough = (most + 1) * MOST_DAYS_IN_MONTH
-  for (const dateMs of expand(rule, { ...whole, most: enough })) {
-    const month = new Date(dateMs).toISOString().slice(0, 7)
-    months.set(month, [...(months.get(month) ?? []), dateMs])
+function visitPositions(rule: Recurrence, { startMs, endMs }: Span, visit: Visitor): void {
+  let month: number[] = []
+  const visitChosen = (): boolean => {
+    const chosen = new Set(rule.bySetPos.map((place) => month.at(place > 0 ? place - 1 : place)))
+    return month.filter((dateMs) => chosen.has(dateMs)).every(visit)
   }
-  return [...months.values()]
-    .flatMap((dates) => {
-      const chosen = new Set(rule.bySetPos.map((place) => dates.at(place > 0 ? place - 1 : place)))
-      return dates.filter((dateMs) => chosen.has(dateMs))
-    })
-    .filter((dateMs) => dateMs >= startMs && dateMs <= endMs)
-    .slice(0, most)
+  const whole = { startMs: startOfMonth(startMs), endMs: endOfMonth(endMs) }
+  visitMatches(rule, whole, (dateMs) => {
+    const isSameMonth = startOfMonth(month[0] ?? dateMs) === startOfMonth(dateMs)
+    const isMoreWanted = isSameMonth || visitChosen()
+    month = isSameMonth ? [...month, dateMs] : isMoreWanted ? [dateMs] : []
+    return isMoreWanted
+  })
+  visitChosen()
 }
 
-const MOST_DAYS_IN_MONTH = 31
+/** Whether a day is one of those named; a rule that names none means every day. */
+function isAmong(byDay: Recurrence['byDay'], date: Date): boolean {
+  const fromStart = date.getUTCDate()
+  const lastDay = new Date(Date.UTC(date.getUTCFullYear(), date.getUTCMonth() + 1, 0)).getUTCDate()
+  const nthFromStart = Math.ceil(fromStart / 7)
+  const nthFromEnd = -Math.ceil((lastDay - fromStart + 1) / 7)
+  const isOne = byDay.some(
+    ({ weekday, nth }) =>
+      // JavaScript counts from Sunday, rrule from Monday.
+      RRule[weekday].weekday === (date.getUTCDay() + 6) % 7 &&
+      (nth === null || nth === nthFromStart || nth === nthFromEnd),
+  )
+  return isOne || byDay.length === 0
+}
 
 function horizonMs(startMs: number): number {
-  const horizon = new Date(startMs)
-  return horizon.setUTCFullYear(horizon.getUTCFullYear() + HORIZON_YEARS)
+  const start = new Date(startMs)
+  return start.setUTCFullYear(start.getUTCFullYear() + HORIZON_YEARS)
 }
 
+/** The first day of the month, at the same time. */
 function startOfMonth(localMs: number): number {
-  const day = new Date(localMs)
-  return day.setUTCDate(1)
+  return new Date(localMs).setUTCDate(1)
 }
 
 function endOfMonth(localMs: number): number {
