@@ -7,7 +7,7 @@ export default defineConfig({
     outDir: 'dist/api',
     target: 'node20',
     sourcemap: true,
-    rollupOptions: {
+    rolldownOptions: {
       input: {
         main: 'apps/api/src/main.ts',
         worker: 'apps/api/src/worker.ts',

@@ -35,7 +35,7 @@ type PartOf<K extends RouteKey, P extends string> =
 
 /** What a handler gets after validation. */
 export type Parsed<K extends RouteKey, P extends 'params' | 'query' | 'body'> =
-  PartOf<K, P> extends z.ZodType ? z.output<PartOf<K, P>> : Record<never, never>
+  PartOf<K, P> extends z.ZodType ? z.output<PartOf<K, P>> : object
 
 /** What a caller sends. */
 export type Sent<K extends RouteKey, P extends 'params' | 'query' | 'body'> =

@@ -54,6 +54,6 @@ export function toCurrencyCode(text: string): CurrencyCode {
 /** Figures after the point: 2 for EUR, 0 for JPY, 3 for KWD. Source: ISO 4217. */
 export function minorDigitsOf(currency: CurrencyCode): number {
   const digits = MINOR_DIGITS.get(currency)
-  if (digits === undefined) throw new RangeError(`${String(currency)} is no currency code`)
+  if (digits === undefined) throw new RangeError(`${currency as string} is no currency code`)
   return digits
 }

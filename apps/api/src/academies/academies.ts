@@ -87,7 +87,7 @@ export async function changeSettings(
   if (refundTiers) patch['refundTiers'] = sortTiers(refundTiers)
   return inAcademy(db, academyId, async (trx) => {
     if (Object.keys(patch).length === 0) return viewAcademy(await readAcademy(trx))
-    return viewAcademy(await updateAcademy(trx, patch as Partial<Academy>))
+    return viewAcademy(await updateAcademy(trx, patch))
   })
 }
 
@@ -130,7 +130,7 @@ export function viewAcademy(academy: Academy): AcademyView {
   } = academy.toJSON()
   return {
     ...(shown as unknown as AcademyView),
-    publishedAt: publishedAt ? new Date(publishedAt as unknown as string).toISOString() : null,
+    publishedAt: publishedAt ? new Date(publishedAt).toISOString() : null,
   }
 }
 

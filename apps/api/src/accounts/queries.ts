@@ -21,11 +21,11 @@ export interface AccountLink {
 }
 
 export async function findAccountById(trx: Knex, id: string): Promise<Account | undefined> {
-  return trx('accounts').where({ id }).first()
+  return trx('accounts').where({ id }).first<Account | undefined>()
 }
 
 export async function findAccountByEmail(trx: Knex, email: string): Promise<Account | undefined> {
-  return trx('accounts').where({ email }).first()
+  return trx('accounts').where({ email }).first<Account | undefined>()
 }
 
 export async function findAccountByIdentity(

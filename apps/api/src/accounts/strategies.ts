@@ -68,7 +68,7 @@ export function authenticateLocally(
 ): Promise<string> {
   return new Promise((resolve, reject) => {
     const done = (error: unknown, person?: { accountId: string } | false) => {
-      if (error) return reject(error as Error)
+      if (error) return reject(error)
       if (!person) {
         return reject(new Problem('wrong-credentials', 'Please give an address and a password.'))
       }

@@ -25,7 +25,8 @@ type Quote = Answer<'checkout.quote-giving-up'>
 export interface GivingUp {
   academyId: string
   enrolmentId: string
-  accountId: string | 'staff'
+  /** `staff` for a member of staff, who needs no share in it. */
+  accountId: string
 }
 
 interface Reckoning {

@@ -46,7 +46,7 @@ export async function insertPayment(trx: AcademyTrx, row: Partial<Payment>): Pro
     .onConflict(['academy_id', 'provider_payment'])
     .ignore()
     .returning('academyId')
-  return Object(written).academyId !== undefined
+  return isWritten(written)
 }
 
 export async function listPaymentsOf(
@@ -219,4 +219,9 @@ export async function insertProviderEvent(
     .ignore()
     .returning('event_id')
   return written.length === 1
+}
+
+/** An insert that met a conflict answers with nothing of the row. */
+function isWritten(answer: object): boolean {
+  return 'academyId' in answer && answer.academyId !== undefined
 }

@@ -7,9 +7,9 @@ import { listSessionParts } from './queries'
 export type SessionView = Answer<'sessions.change'>
 
 /** Sessions as staff see them, with their coaches and areas. */
-export async function viewSessions<S extends Session>(
+export async function viewSessions(
   trx: AcademyTrx,
-  sessions: readonly S[],
+  sessions: readonly Session[],
 ): Promise<SessionView[]> {
   const parts = await listSessionParts(
     trx,

@@ -5,7 +5,7 @@ import { invite, takeUpInvitation } from '../academies/staff'
 import { notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import type { Services } from '../platform/services'
-import { inAcademy } from '../platform/tenancy/transaction'
+import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import type { Coach } from './models'
 import { findCoachOf, findCoaches, insertCoach, listCoaches, updateCoach } from './queries'
 
@@ -82,6 +82,14 @@ export async function acceptInvitation(
     },
   )
   return { slug, role }
+}
+
+/** Ties a coach to the account they sign in with. */
+export async function tieCoach(
+  trx: AcademyTrx,
+  { coachId, accountId }: { coachId: string; accountId: string },
+): Promise<void> {
+  await updateCoach(trx, coachId, { accountId })
 }
 
 /** "Aoife Kerrane" is AK; "Sorcha Ní Bhraonáin" is SB. */

@@ -279,11 +279,11 @@ export async function listEnrolments(
   if ('clinicId' in by) query.where('enrolments.clinicId', by.clinicId)
   if ('golferId' in by) query.where('enrolments.golferId', by.golferId)
   if ('accountId' in by) {
-    query.where((either) =>
-      either
+    query.where((either) => {
+      void either
         .where('golfers.accountId', by.accountId)
-        .orWhere('golfers.guardianAccountId', by.accountId),
-    )
+        .orWhere('golfers.guardianAccountId', by.accountId)
+    })
   }
   return query.castTo<EnrolmentRow[]>()
 }

@@ -34,16 +34,9 @@ export async function listGolfersOf(trx: AcademyTrx, accountId: string): Promise
     .orderByRaw('account_id IS NULL, created_at, id')
 }
 
-export async function insertGolfer(
-  trx: AcademyTrx,
-  row: Partial<Golfer>,
-): Promise<'inserted' | 'already-there'> {
-  const made = await Golfer.query(trx)
-    .insert(row)
-    .onConflict(['academy_id', 'account_id'])
-    .ignore()
-    .returning('id')
-  return Object(made).academyId ? 'inserted' : 'already-there'
+/** Writes a golfer; a person who is a golfer here already stays the one they are. */
+export async function insertGolfer(trx: AcademyTrx, row: Partial<Golfer>): Promise<void> {
+  await Golfer.query(trx).insert(row).onConflict(['academy_id', 'account_id']).ignore()
 }
 
 export async function updateGolfer(

@@ -1,7 +1,7 @@
 /** Whole years between a birth date and a day, both local dates ("2016-05-02"). */
 export function ageOn(bornOn: string, dayLocal: string): number {
-  const [bornYear = 0, bornRest = ''] = splitYear(bornOn)
-  const [year = 0, rest = ''] = splitYear(dayLocal)
+  const [bornYear, bornRest] = splitYear(bornOn)
+  const [year, rest] = splitYear(dayLocal)
   return year - bornYear - (rest < bornRest ? 1 : 0)
 }
 

@@ -18,7 +18,7 @@ export async function claimMail(trx: AcademyTrx, key: MailKey): Promise<boolean>
     .ignore()
   const row = await trx('mails')
     .where({ businessKey: key.businessKey })
-    .first<{ sentAt: Date | null }>('sentAt')
+    .first<{ sentAt: Date | null } | undefined>('sentAt')
   return row?.sentAt === null
 }
 

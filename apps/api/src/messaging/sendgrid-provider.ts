@@ -36,7 +36,8 @@ export function makeSendgridProvider(config: Config['mail']): MailProvider {
             }
           : {}),
       })
-      return String((response.headers as Record<string, unknown>)['x-message-id'] ?? '')
+      const id = (response.headers as Record<string, unknown>)['x-message-id']
+      return typeof id === 'string' ? id : ''
     },
   }
 }

@@ -3,24 +3,26 @@ import { knexSnakeCaseMappers } from 'objection'
 import pg from 'pg'
 import { MarramPgClient } from './client'
 
+/**
+ * Types by the number the server gives them: the driver's own list misses arrays, which is why its
+ * function is typed anew here.
+ */
+const parseAs = pg.types.setTypeParser as (type: number, parse: (text: string) => unknown) => void
 const INT8 = 20
 const NUMERIC = 1700
 const DATE = 1082
 const DATE_ARRAY = 1182
 
 // Counts and minor units fit in a double exactly; one that does not must stop us, not round.
-pg.types.setTypeParser(INT8, (text) => {
+parseAs(INT8, (text) => {
   const value = Number(text)
   if (!Number.isSafeInteger(value)) throw new RangeError(`${text} is beyond a safe integer`)
   return value
 })
-pg.types.setTypeParser(NUMERIC, Number)
+parseAs(NUMERIC, Number)
 // A calendar day has no zone: it stays text.
-pg.types.setTypeParser(DATE, (text) => text)
-// The array's number is missing from the driver's list of types.
-pg.types.setTypeParser(DATE_ARRAY as never, (text: string) =>
-  text.slice(1, -1).split(',').filter(Boolean),
-)
+parseAs(DATE, (text) => text)
+parseAs(DATE_ARRAY, (text: string) => text.slice(1, -1).split(',').filter(Boolean))
 
 const names = knexSnakeCaseMappers()
 
@@ -44,7 +46,7 @@ export function connect(options: { url: string; poolSize: number; name: string }
     },
     pool: { min: 0, max: options.poolSize },
     acquireConnectionTimeout: 15_000,
-    wrapIdentifier: names.wrapIdentifier,
+    wrapIdentifier: (name, original) => names.wrapIdentifier(name, original),
     postProcessResponse: toCamelCase,
   })
 }

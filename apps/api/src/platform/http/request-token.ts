@@ -52,7 +52,7 @@ function isValid(services: Services, request: Request, token: string): boolean {
 }
 
 function sign(services: Services, request: Request, nonce: string): string {
-  const boundTo = request.session?.accountId ? request.sessionID : 'visitor'
+  const boundTo = request.session.accountId ? request.sessionID : 'visitor'
   return createHmac('sha256', services.config.secret)
     .update(`${boundTo}:${nonce}`)
     .digest('base64url')

@@ -77,7 +77,7 @@ function parse(
   refusal: 'not-found' | 'invalid-fields',
 ): unknown {
   if (!schema) {
-    const isEmpty = value === undefined || Object.keys(Object(value)).length === 0
+    const isEmpty = value === undefined || JSON.stringify(value) === '{}'
     if (isEmpty || refusal === 'not-found') return {}
     throw new Problem('invalid-fields', 'This takes no fields.')
   }

@@ -53,7 +53,7 @@ export async function currentAccount(
   { db }: Services,
   request: Request,
 ): Promise<SignedInAccount | null> {
-  const { accountId, sessionVersion } = request.session ?? {}
+  const { accountId, sessionVersion } = request.session
   if (!accountId) return null
   const row = await db('accounts').where({ id: accountId }).first<AccountRow | undefined>()
   if (!row || row.sessionVersion !== sessionVersion) return null
@@ -75,18 +75,18 @@ export async function signInAs(
   const row = await db('accounts').where({ id: accountId }).first<AccountRow | undefined>()
   invariant(row, 'the account that signs in exists')
   await new Promise<void>((resolve, reject) => {
-    request.session.regenerate((error?: unknown) => (error ? reject(error as Error) : resolve()))
+    request.session.regenerate((error?: unknown) => (error ? reject(error) : resolve()))
   })
   request.session.accountId = accountId
   request.session.sessionVersion = row.sessionVersion
   await new Promise<void>((resolve, reject) => {
-    request.session.save((error?: unknown) => (error ? reject(error as Error) : resolve()))
+    request.session.save((error?: unknown) => (error ? reject(error) : resolve()))
   })
 }
 
 export async function signOut(request: Request, response: Response): Promise<void> {
   await new Promise<void>((resolve, reject) => {
-    request.session.destroy((error?: unknown) => (error ? reject(error as Error) : resolve()))
+    request.session.destroy((error?: unknown) => (error ? reject(error) : resolve()))
   })
   response.clearCookie(cookieName(request.app.locals['config'] as Services['config']), {
     path: '/',

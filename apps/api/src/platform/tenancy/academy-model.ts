@@ -24,7 +24,7 @@ interface WithInternals {
  * so that a top-level `or` cannot reach around.
  */
 export class AcademyQueryBuilder<M extends Model, R = M[]> extends QueryBuilder<M, R> {
-  declare ArrayQueryBuilderType: AcademyQueryBuilder<M, M[]>
+  declare ArrayQueryBuilderType: AcademyQueryBuilder<M>
   declare SingleQueryBuilderType: AcademyQueryBuilder<M, M>
   declare MaybeSingleQueryBuilderType: AcademyQueryBuilder<M, M | undefined>
   declare NumberQueryBuilderType: AcademyQueryBuilder<M, number>
@@ -71,13 +71,19 @@ export class AcademyModel extends Model {
   }
 
   override $beforeUpdate(_options: unknown, context: QueryContext): void {
-    if (this.academyId !== undefined) this.stamp(context)
+    if (this.givenAcademyId() !== undefined) this.stamp(context)
+  }
+
+  /** A row that was not read from the database has none yet, whatever its type says. */
+  private givenAcademyId(): string | undefined {
+    return this.academyId
   }
 
   private stamp(context: QueryContext): void {
     const academyId = academyOf(context.transaction)
+    const given = this.givenAcademyId()
     invariant(
-      this.academyId === undefined || this.academyId === academyId,
+      given === undefined || given === academyId,
       'a row of another academy was about to be written',
     )
     this.academyId = academyId
