@@ -61,7 +61,7 @@ function makeCases(count: number): Case[] {
   const makeRule = (): Omit<Recurrence, 'ends' | 'interval' | 'weekStart'> => {
     const days = some(WEEKDAYS, 5).map((weekday) => ({ weekday, nth: null }))
     const plain = { byDay: [], bySetPos: [], byMonthDay: [] }
-    switch (random(9)) {
+    switch (random(10)) {
       case 0:
         return { ...plain, freq: 'daily' }
       case 1:
@@ -78,6 +78,10 @@ function makeCases(count: number): Case[] {
       case 7: {
         const nth = pick([1, 2, 3, 4, 5, -1, -2, -5])
         return { ...plain, freq: 'monthly', byDay: days.map((day) => ({ ...day, nth })) }
+      }
+      case 8: {
+        const byDay = days.map((day) => ({ ...day, nth: pick([1, 2, 5, -1, -2, -5]) }))
+        return { ...plain, freq: 'monthly', byDay, byMonthDay: some(monthDays, 4) }
       }
       default:
         return { ...plain, freq: 'monthly', byDay: days, byMonthDay: some(monthDays, 3) }

@@ -98,6 +98,15 @@ describe('expandLocal', () => {
     ])
   })
 
+  it('takes a day of the month only where it is the weekday asked for', () => {
+    const thirteenth = 'FREQ=MONTHLY;BYMONTHDAY=13;BYDAY=FR;COUNT=3'
+    expect(daysOf(thirteenth, '2026-01-01')).toEqual(['2026-02-13', '2026-03-13', '2026-11-13'])
+    const lastMonday = 'FREQ=MONTHLY;BYMONTHDAY=25,31;BYDAY=-1MO;COUNT=3'
+    expect(daysOf(lastMonday, '2026-01-01')).toEqual(['2026-05-25', '2026-08-31', '2027-01-25'])
+    const thirdMonday = 'FREQ=MONTHLY;BYMONTHDAY=15,22;BYDAY=3MO;COUNT=2'
+    expect(daysOf(thirdMonday, '2026-01-01')).toEqual(['2026-06-15', '2027-02-15'])
+  })
+
   it('gives nothing for what never comes, without seeking for ever', () => {
     expect(daysOf('FREQ=MONTHLY;BYMONTHDAY=31;BYDAY=1MO;COUNT=3', '2026-01-01')).toEqual([])
     expect(daysOf('FREQ=DAILY;INTERVAL=7;BYDAY=WE;COUNT=3', '2026-01-01')).toEqual([])
