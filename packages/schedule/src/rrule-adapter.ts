@@ -5,11 +5,10 @@ import type { Recurrence } from './recurrence'
  * The one place that knows rrule. Its own handling of zones is not used, since its results change
  * with the process's TZ: all it sees are local times dressed up as UTC.
  */
-// Bundlers see rrule's module build with named exports, Node its script build with a default one.
-const { RRule } =
-  (rrule as { RRule?: typeof rrule.RRule }).RRule === undefined
-    ? (rrule as unknown as { default: typeof rrule }).default
-    : rrule
+// Bundlers find rrule's module build, with named exports; Node its script build, with a default one.
+// A copy, since a bundler warns of a name that is not among a module's exports.
+const library: Partial<typeof rrule> & { default?: typeof rrule } = { ...rrule }
+const { RRule } = library.default ?? rrule
 
 const FREQUENCIES = { daily: RRule.DAILY, weekly: RRule.WEEKLY, monthly: RRule.MONTHLY }
 
