@@ -17,7 +17,7 @@ import {
  */
 const RULE_COUNT = process.env['MARRAM_DEEP'] === '1' ? 6_000 : 300
 const SEED = 20_260_406
-const SCRIPT = fileURLToPath(new URL('./dateutil_expand.py', import.meta.url))
+const SCRIPT = fileURLToPath(new URL('./dateutil-expand.py', import.meta.url))
 // The python first on PATH may be one of its own, without Debian's packages.
 const PYTHON = existsSync('/usr/bin/python3') ? '/usr/bin/python3' : 'python3'
 const hasDateutil = spawnSync(PYTHON, ['-c', 'import dateutil, zoneinfo']).status === 0
