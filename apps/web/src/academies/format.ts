@@ -1,0 +1,70 @@
+import { formatMoney, toCurrencyCode } from '@marram/money'
+import {
+  formatDay,
+  formatSessionTime,
+  formatTime,
+  formatTimeRange,
+  type DayStyle,
+} from '@marram/schedule/format'
+
+export interface Place {
+  locale: string
+  currency: string
+  zone: string
+}
+
+/** Amounts and times as an academy writes them. */
+export function makeFormat({ locale, currency, zone }: Place) {
+  const code = toCurrencyCode(currency)
+  return {
+    locale,
+    currency: code,
+    zone,
+    /** "€108.00" */
+    money: (amountMinor: number) => formatMoney({ amountMinor, currency: code }, { locale }),
+    /** "€108", for cards and lists; cents only where there are some. */
+    shortMoney: (amountMinor: number) =>
+      formatMoney({ amountMinor, currency: code }, { locale, whole: amountMinor % 100 === 0 }),
+    day: (at: string, style?: DayStyle) =>
+      formatDay({ at, zone, locale, ...(style ? { style } : {}) }),
+    time: (at: string) => formatTime({ at, zone, locale }),
+    range: (session: { startsAt: string; endsAt: string }) =>
+      formatTimeRange({ ...session, zone, locale }),
+    session: (session: { startsAt: string; endsAt: string }) =>
+      formatSessionTime({ ...session, zone, locale }),
+  }
+}
+
+export type Format = ReturnType<typeof makeFormat>
+
+/** "Ages 7–10", "Handicap 10 and up", "Any level". */
+export function levelInWords(clinic: {
+  ageMin: number | null
+  ageMax: number | null
+  handicapMin: number | null
+  handicapMax: number | null
+}): string {
+  const { ageMin, ageMax, handicapMin, handicapMax } = clinic
+  const parts = [
+    rangeInWords('Ages', ageMin, ageMax),
+    rangeInWords('Handicap', handicapMin, handicapMax),
+  ].filter(Boolean)
+  return parts.length > 0 ? parts.join(', ') : 'Any age and level'
+}
+
+function rangeInWords(name: string, from: number | null, to: number | null): string {
+  if (from !== null && to !== null) return `${name} ${from}–${to}`
+  if (from !== null) return `${name} ${from} and up`
+  return to !== null ? `${name} ${to} and under` : ''
+}
+
+/** "VAT included", "plus sales tax", or nothing where there is no tax. */
+export function taxInWords(academy: {
+  taxMode: 'included' | 'added'
+  taxName: string
+  taxBasisPoints: number
+}): string {
+  if (academy.taxBasisPoints === 0) return ''
+  if (academy.taxMode === 'included') return `${academy.taxName} included`
+  return `plus ${academy.taxBasisPoints / 100} % ${academy.taxName.toLowerCase()}`
+}

@@ -1,0 +1,52 @@
+import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
+import type { Answer, Sent } from '@marram/contract'
+import { call } from '../api/client'
+
+export type Session = Answer<'session.read'>
+export type Membership = Session['memberships'][number]
+
+const SESSION_KEY = ['', 'session.read'] as const
+
+export const sessionQuery = queryOptions({
+  queryKey: SESSION_KEY,
+  queryFn: ({ signal }) => call('session.read', { signal }),
+  staleTime: 60_000,
+})
+
+export const useSession = () => useQuery(sessionQuery)
+
+/** The roles of the person in an academy; none for a visitor. */
+export function rolesIn(session: Session | undefined, academy: string): Membership['roles'] {
+  return session?.memberships.find((entry) => entry.academy.slug === academy)?.roles ?? []
+}
+
+/** Signs in, or up: both answer with the new session, and whatever was asked before is asked anew. */
+export function useSignIn() {
+  const client = useQueryClient()
+  return useMutation({
+    mutationFn: (body: Sent<'session.sign-in', 'body'>) => call('session.sign-in', { body }),
+    onSuccess: (session) => takeOver(client, session),
+  })
+}
+
+export function useSignUp() {
+  const client = useQueryClient()
+  return useMutation({
+    mutationFn: (body: Sent<'accounts.sign-up', 'body'>) => call('accounts.sign-up', { body }),
+    onSuccess: (session) => takeOver(client, session),
+  })
+}
+
+export function useSignOut() {
+  const client = useQueryClient()
+  return useMutation({
+    mutationFn: (options: { isEverywhere: boolean }) =>
+      call(options.isEverywhere ? 'session.sign-out-everywhere' : 'session.sign-out', {}),
+    onSuccess: () => client.clear(),
+  })
+}
+
+function takeOver(client: ReturnType<typeof useQueryClient>, session: Session): void {
+  client.setQueryData(SESSION_KEY, session)
+  void client.invalidateQueries({ predicate: ({ queryKey }) => queryKey !== SESSION_KEY })
+}

@@ -1,0 +1,20 @@
+import type { Answer } from '@marram/contract'
+import type { RouteKey } from '@marram/contract/routes'
+import { queryOptions } from '@tanstack/react-query'
+import { addressOf, call, type CallInput } from './client'
+import { takePageData } from './page-data'
+
+/**
+ * The query of a GET route. Its key begins with the academy and the route, so that a change can make
+ * every answer of a route, or of an academy, be asked for again.
+ */
+export function routeQuery<K extends RouteKey>(key: K, input: CallInput<K>) {
+  const loose = input as Parameters<typeof addressOf>[1]
+  const address = addressOf(key, loose)
+  return queryOptions({
+    queryKey: [loose.academy ?? '', key, address],
+    queryFn: ({ signal }) => call(key, { ...input, signal }),
+    // What came inside the page's HTML was true a moment ago.
+    initialData: () => takePageData<Answer<K>>(address),
+  })
+}

@@ -1,0 +1,39 @@
+import { useMutation } from '@tanstack/react-query'
+import type { Sent } from '@marram/contract'
+import { call } from '../api/client'
+import { routeQuery } from '../api/query'
+import { useAcademyMutation } from '../enrolments/queries'
+
+export const giveUpQuoteQuery = (academy: string, enrolmentId: string) =>
+  routeQuery('checkout.quote-giving-up', { academy, params: { enrolmentId } })
+
+/** Begins payment and leaves for the provider's page. */
+export const useGoToPayment = (academy: string, enrolmentId: string) =>
+  useMutation({
+    mutationFn: () => call('checkout.start', { academy, params: { enrolmentId } }),
+    onSuccess: ({ url }) => location.assign(url),
+  })
+
+export const usePayAtDesk = (academy: string, enrolmentId: string) =>
+  useAcademyMutation(academy, (_: void) =>
+    call('checkout.at-desk', { academy, params: { enrolmentId } }),
+  )
+
+export const useLetGo = (academy: string, enrolmentId: string) =>
+  useAcademyMutation(academy, (_: void) =>
+    call('enrolments.release', { academy, params: { enrolmentId } }),
+  )
+
+export const useGiveUp = (academy: string, enrolmentId: string) =>
+  useAcademyMutation(academy, (body: Sent<'checkout.give-up', 'body'>) =>
+    call('checkout.give-up', { academy, params: { enrolmentId }, body }),
+  )
+
+export const useChoose = (academy: string) =>
+  useAcademyMutation(academy, (given: { placeId: string; choice: 'credit' | 'money' }) =>
+    call('checkout.choose', {
+      academy,
+      params: { placeId: given.placeId },
+      body: { choice: given.choice },
+    }),
+  )

@@ -1,0 +1,48 @@
+import type { PageClinic } from './queries'
+
+/** The words of the filter's sentence; an empty word leaves everything in. */
+export interface Filter {
+  ages: '' | 'juniors' | 'adults'
+  level: '' | 'beginner' | 'middle' | 'low'
+  /** 0 is Sunday; empty for any day. */
+  day: string
+  coach: string
+  full: '' | 'hide'
+}
+
+export const NO_FILTER: Filter = { ages: '', level: '', day: '', coach: '', full: '' }
+
+/** A handicap in the middle of each level's range. */
+const LEVELS = { beginner: 36, middle: 18, low: 6 } as const
+const ADULT_YEARS = 18
+
+export function filterClinics(clinics: readonly PageClinic[], filter: Filter): PageClinic[] {
+  return clinics.filter(
+    (clinic) =>
+      fitsAges(clinic, filter.ages) &&
+      fitsLevel(clinic, filter.level) &&
+      (filter.day === '' || dayOf(clinic) === filter.day) &&
+      (filter.coach === '' || clinic.coaches.includes(filter.coach)) &&
+      (filter.full === '' || clinic.taken < clinic.capacity),
+  )
+}
+
+function fitsAges({ ageMin, ageMax }: PageClinic, ages: Filter['ages']): boolean {
+  if (ages === '') return true
+  const isJunior = ageMax !== null && ageMax < ADULT_YEARS
+  if (ages === 'juniors') return isJunior || (ageMin === null && ageMax === null)
+  return !isJunior
+}
+
+function fitsLevel({ handicapMin, handicapMax }: PageClinic, level: Filter['level']): boolean {
+  if (level === '') return true
+  const handicap = LEVELS[level]
+  return handicap >= (handicapMin ?? -10) && handicap <= (handicapMax ?? 54)
+}
+
+/** The weekday of the next session on the venue's own clock, as JavaScript counts. */
+export function dayOf(clinic: PageClinic): string {
+  const name = new Intl.DateTimeFormat('en', { weekday: 'short', timeZone: clinic.zone })
+  const days = ['Sun', 'Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat']
+  return String(days.indexOf(name.format(new Date(clinic.startsAt))))
+}

@@ -1,0 +1,35 @@
+import type { Answer, Sent } from '@marram/contract'
+import { useMutation, useQueryClient } from '@tanstack/react-query'
+import { call } from '../api/client'
+import { routeQuery } from '../api/query'
+
+export type Enrolment = Answer<'enrolments.read'>
+export type MyPlaces = Answer<'enrolments.mine'>
+export type PlaceOfEnrolment = Enrolment['places'][number]
+
+export const myPlacesQuery = (academy: string) => routeQuery('enrolments.mine', { academy })
+export const enrolmentQuery = (academy: string, enrolmentId: string) =>
+  routeQuery('enrolments.read', { academy, params: { enrolmentId } })
+export const myGolfersQuery = (academy: string) => routeQuery('golfers.mine', { academy })
+
+/** Everything an academy said is asked for again after a change there. */
+export function useAcademyMutation<Input, Result>(
+  academy: string,
+  mutationFn: (input: Input) => Promise<Result>,
+) {
+  const client = useQueryClient()
+  return useMutation({
+    mutationFn,
+    onSuccess: () => client.invalidateQueries({ queryKey: [academy] }),
+  })
+}
+
+export const useHold = (academy: string) =>
+  useAcademyMutation(academy, (body: Sent<'enrolments.hold', 'body'>) =>
+    call('enrolments.hold', { academy, body }),
+  )
+
+export const useJoinWaitlist = (academy: string) =>
+  useAcademyMutation(academy, (body: Sent<'waitlist.join', 'body'>) =>
+    call('waitlist.join', { academy, body }),
+  )

@@ -1,0 +1,123 @@
+import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
+import { useRef, useState, type FormEvent } from 'react'
+import { useParams, type LoaderFunctionArgs } from 'react-router'
+import { SignOut } from '../accounts/sign-out'
+import { call } from '../api/client'
+import { ApiProblem } from '../api/problem'
+import { academyPageQuery } from '../clinics/queries'
+import { myGolfersQuery, useAcademyMutation } from '../enrolments/queries'
+import { useTitle } from '../layouts/accent'
+import { Button } from '../ui/button'
+import { focusFirstWrong } from '../ui/field'
+import { Notice } from '../ui/notice'
+import { toast } from '../ui/toast'
+import { DependantFields, EMPTY_DEPENDANT, toDependant } from './dependant-fields'
+
+export const loader =
+  (client: QueryClient) =>
+  ({ params }: LoaderFunctionArgs) => {
+    const slug = params['academy'] ?? ''
+    return Promise.all([
+      client.ensureQueryData(myGolfersQuery(slug)),
+      client.ensureQueryData(academyPageQuery(slug)),
+    ])
+  }
+
+/** Those the person looks after here, and themselves. */
+export default function FamilyPage() {
+  const { academy: slug = '' } = useParams()
+  const { data } = useSuspenseQuery(myGolfersQuery(slug))
+  const { data: page } = useSuspenseQuery(academyPageQuery(slug))
+  useTitle(`Family – ${page.academy.name}`)
+  const [isAdding, setIsAdding] = useState(false)
+  return (
+    <main id="main" className="wrap narrow">
+      <div className="head">
+        <h1>Family</h1>
+      </div>
+      <ul className="reg mb-5">
+        {data.golfers.map((golfer) => (
+          <li key={golfer.id} className="waitrow">
+            <span>
+              <b>{golfer.name}</b>
+              <br />
+              <span className="soft">
+                {[
+                  golfer.isMe ? 'You' : '',
+                  golfer.ageYears === null ? '' : `${golfer.ageYears} years`,
+                  golfer.handicap === null ? '' : `handicap ${golfer.handicap}`,
+                  golfer.emergencyContact ? `call ${golfer.emergencyContact.name}` : '',
+                ]
+                  .filter(Boolean)
+                  .join(', ')}
+              </span>
+            </span>
+          </li>
+        ))}
+        {data.golfers.length === 0 && (
+          <li className="waitrow">
+            Nobody yet. Add someone you look after, or take a place for yourself.
+          </li>
+        )}
+      </ul>
+      {isAdding ? (
+        <AddDependant
+          slug={slug}
+          safeguarding={page.academy.safeguarding}
+          onDone={() => setIsAdding(false)}
+        />
+      ) : (
+        <Button onClick={() => setIsAdding(true)}>Add someone you look after</Button>
+      )}
+      <SignOut />
+    </main>
+  )
+}
+
+function AddDependant(props: { slug: string; safeguarding: string; onDone: () => void }) {
+  const form = useRef<HTMLFormElement>(null)
+  const [draft, setDraft] = useState(EMPTY_DEPENDANT)
+  const [problem, setProblem] = useState<ApiProblem | null>(null)
+  const add = useAcademyMutation(props.slug, () =>
+    call('golfers.add-dependant', { academy: props.slug, body: toDependant(draft) }),
+  )
+  const submit = async (event: FormEvent) => {
+    event.preventDefault()
+    setProblem(null)
+    try {
+      const golfer = await add.mutateAsync(undefined)
+      toast(`${golfer.name} is in your family here.`)
+      props.onDone()
+    } catch (error) {
+      if (error instanceof ApiProblem) setProblem(error)
+      focusFirstWrong(form.current)
+    }
+  }
+  return (
+    <form
+      ref={form}
+      className="panel max-w-[34rem]"
+      onSubmit={(event) => void submit(event)}
+      noValidate
+    >
+      <div className="pad">
+        {problem && Object.keys(problem.fields).length === 0 && (
+          <Notice kind="flag">{problem.message}</Notice>
+        )}
+        <DependantFields
+          draft={draft}
+          onChange={setDraft}
+          errors={problem?.fields ?? {}}
+          prefix=""
+          safeguarding={props.safeguarding}
+        />
+        <div className="actions">
+          <Button type="submit" kind="go" waiting={add.isPending && 'Adding…'}>
+            Add them
+          </Button>
+          <Button onClick={props.onDone}>Not now</Button>
+        </div>
+      </div>
+    </form>
+  )
+}

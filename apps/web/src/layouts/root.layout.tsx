@@ -1,0 +1,37 @@
+import { Outlet, ScrollRestoration, useRouteError } from 'react-router'
+import { Link } from 'react-router'
+import { ApiProblem, sentenceOf } from '../api/problem'
+import { paths } from '../paths'
+import { buttonClass } from '../ui/button'
+
+export function RootLayout() {
+  return (
+    <>
+      <a className="skip" href="#main">
+        Skip to the page
+      </a>
+      <Outlet />
+      <ScrollRestoration />
+    </>
+  )
+}
+
+/** What is shown when a page cannot be. */
+export function PageError() {
+  const error = useRouteError()
+  const status = error instanceof ApiProblem ? error.status : Number(Object(error).status ?? 0)
+  const isMissing = status === 404
+  return (
+    <main id="main" className="wrap narrow py-16">
+      <h1>{isMissing ? 'There is nothing here' : 'This page did not come up'}</h1>
+      <p className="lead my-4">
+        {isMissing
+          ? 'The address may be old, or the clinic may be off the page.'
+          : sentenceOf(error)}
+      </p>
+      <Link className={buttonClass()} to={paths.home()}>
+        Go to the front page
+      </Link>
+    </main>
+  )
+}
