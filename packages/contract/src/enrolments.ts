@@ -119,6 +119,10 @@ export const enrolmentSchemas = {
       waitlist: z.array(waitlistView),
     }),
   },
+  'enrolments.of-golfer': {
+    params: z.strictObject({ golferId: id }),
+    response: z.object({ enrolments: z.array(enrolmentView) }),
+  },
   'waitlist.join': {
     body: z.strictObject({ ...what, golferId: id }),
     response: waitlistView,

@@ -122,6 +122,11 @@ export const ROUTES = {
     path: `${TENANT}/clinics/:clinicId/enrolments`,
     access: 'places:read',
   },
+  'enrolments.of-golfer': {
+    method: 'GET',
+    path: `${TENANT}/golfers/:golferId/enrolments`,
+    access: 'places:change',
+  },
   'waitlist.join': { method: 'POST', path: `${TENANT}/my/waitlist`, access: 'account' },
   'waitlist.leave': { method: 'DELETE', path: `${TENANT}/my/waitlist/:entryId`, access: 'account' },
 

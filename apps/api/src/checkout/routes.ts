@@ -70,6 +70,10 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
         }
       })
     },
+    'enrolments.of-golfer': ({ params }, context) =>
+      inAcademy(services.db, asAcademy(context).academyId, async (trx) => ({
+        enrolments: await showEnrolments(trx, { golferId: params.golferId }),
+      })),
     'checkout.quote-giving-up': ({ params }, context) =>
       quoteGivingUp(services, own(context, params.enrolmentId)),
     'checkout.give-up': async ({ params, body }, context) => {

@@ -15,7 +15,11 @@ type EnrolmentView = Answer<'enrolments.read'>
  */
 export type ShowEnrolments = (
   trx: AcademyTrx,
-  by: { ids: readonly string[] } | { accountId: string } | { clinicId: string },
+  by:
+    | { ids: readonly string[] }
+    | { accountId: string }
+    | { clinicId: string }
+    | { golferId: string },
 ) => Promise<EnrolmentView[]>
 
 export type ReadCredit = (trx: AcademyTrx, accountId: string) => Promise<number>

@@ -1,0 +1,169 @@
+import { useQuery } from '@tanstack/react-query'
+import { useDeferredValue, useState, type FormEvent } from 'react'
+import { Link, useNavigate, useParams } from 'react-router'
+import type { Sent } from '@marram/contract'
+import { call } from '../api/client'
+import { routeQuery } from '../api/query'
+import { ApiProblem, sentenceOf } from '../api/problem'
+import { useAcademyMutation } from '../enrolments/queries'
+import { useTitle } from '../layouts/accent'
+import { useMay } from '../layouts/staff.layout'
+import { paths } from '../paths'
+import { Button } from '../ui/button'
+import { Field } from '../ui/field'
+import { Notice } from '../ui/notice'
+import { PageHead } from '../ui/page-head'
+import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
+
+/** Everybody who plays here, found by name; and the way to enter somebody new. */
+export default function GolfersPage() {
+  const { academy: slug = '' } = useParams()
+  const may = useMay()
+  const [search, setSearch] = useState('')
+  const [isEntering, setIsEntering] = useState(false)
+  const wanted = useDeferredValue(search.trim())
+  const golfers = useQuery(
+    routeQuery('golfers.list', { academy: slug, query: wanted ? { search: wanted } : {} }),
+  )
+  useTitle('Golfers')
+  return (
+    <main id="main" className="wrap">
+      <PageHead
+        title="Golfers"
+        sub={golfers.data && `${golfers.data.golfers.length} ${wanted ? 'found' : 'play here'}.`}
+        actions={
+          may('golfers:change') && (
+            <Button kind="go" onClick={() => setIsEntering(!isEntering)}>
+              Enter a golfer
+            </Button>
+          )
+        }
+      />
+      {isEntering && <EnterGolfer slug={slug} onDone={() => setIsEntering(false)} />}
+      <div className="max-w-[24rem]">
+        <Field
+          label="Find by name"
+          type="search"
+          value={search}
+          onChange={(event) => setSearch(event.target.value)}
+        />
+      </div>
+      {golfers.isError ? (
+        <ErrorState sentence={sentenceOf(golfers.error)} onRetry={() => void golfers.refetch()} />
+      ) : !golfers.data ? (
+        <div className="card">
+          <SkeletonRows rows={8} />
+        </div>
+      ) : golfers.data.golfers.length === 0 ? (
+        <EmptyState>
+          {wanted
+            ? `Nobody called “${wanted}”.`
+            : 'Nobody yet. Golfers appear here when they take a place.'}
+        </EmptyState>
+      ) : (
+        <div className="card">
+          <table className="sc jv">
+            <thead>
+              <tr>
+                <th scope="col">Golfer</th>
+                <th scope="col" className="l">
+                  E-mail
+                </th>
+                <th scope="col">Handicap</th>
+                <th scope="col" className="l">
+                  Guardian
+                </th>
+                <th scope="col">Sessions ahead</th>
+              </tr>
+            </thead>
+            <tbody>
+              {golfers.data.golfers.map((golfer) => (
+                <tr key={golfer.id}>
+                  <th scope="row">
+                    <Link to={paths.golfer(slug, golfer.id)}>{golfer.name}</Link>
+                    {golfer.isJunior && <small>Junior</small>}
+                  </th>
+                  <td className="l">{golfer.email ?? '–'}</td>
+                  <td>{golfer.handicap ?? '–'}</td>
+                  <td className="l">{golfer.guardianName ?? '–'}</td>
+                  <td>{golfer.placesAhead === 0 ? '–' : golfer.placesAhead}</td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </div>
+      )}
+    </main>
+  )
+}
+
+function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
+  const navigate = useNavigate()
+  const [fields, setFields] = useState({ name: '', email: '', phone: '', handicap: '' })
+  const [problem, setProblem] = useState<ApiProblem | null>(null)
+  const enter = useAcademyMutation(slug, (body: Sent<'golfers.enter', 'body'>) =>
+    call('golfers.enter', { academy: slug, body }),
+  )
+  const set = (change: Partial<typeof fields>) => setFields({ ...fields, ...change })
+  const submit = async (event: FormEvent) => {
+    event.preventDefault()
+    setProblem(null)
+    try {
+      const golfer = await enter.mutateAsync({
+        name: fields.name,
+        ...(fields.email ? { email: fields.email } : {}),
+        ...(fields.phone ? { phone: fields.phone } : {}),
+        ...(fields.handicap ? { handicap: Number(fields.handicap.replace(',', '.')) } : {}),
+      })
+      onDone()
+      await navigate(paths.golfer(slug, golfer.id))
+    } catch (error) {
+      if (error instanceof ApiProblem) setProblem(error)
+    }
+  }
+  return (
+    <form className="panel mb-6 max-w-[38rem]" onSubmit={(event) => void submit(event)} noValidate>
+      <div className="pad">
+        {problem && Object.keys(problem.fields).length === 0 && (
+          <Notice kind="flag">{problem.message}</Notice>
+        )}
+        <Field
+          label="Name"
+          value={fields.name}
+          onChange={(event) => set({ name: event.target.value })}
+          error={problem?.fields['name']}
+        />
+        <div className="f two">
+          <Field
+            label="E-mail"
+            type="email"
+            hint="If they have one"
+            value={fields.email}
+            onChange={(event) => set({ email: event.target.value })}
+            error={problem?.fields['email']}
+          />
+          <Field
+            label="Telephone"
+            type="tel"
+            value={fields.phone}
+            onChange={(event) => set({ phone: event.target.value })}
+            error={problem?.fields['phone']}
+          />
+        </div>
+        <Field
+          label="Handicap"
+          inputMode="decimal"
+          value={fields.handicap}
+          onChange={(event) => set({ handicap: event.target.value })}
+          error={problem?.fields['handicap']}
+        />
+        <div className="actions">
+          <Button type="submit" kind="go" waiting={enter.isPending && 'Entering…'}>
+            Enter them
+          </Button>
+          <Button onClick={onDone}>Not now</Button>
+        </div>
+      </div>
+    </form>
+  )
+}
