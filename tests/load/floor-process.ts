@@ -1,0 +1,34 @@
+import express from 'express'
+import { createServer } from 'node:http'
+import pg from 'pg'
+import { listen } from '../../apps/api/src/platform/boot'
+import { PAGE, beginReadingAt } from './floor-sql'
+import { POOL_SIZE, sayPort } from './processes'
+
+const pool = new pg.Pool({
+  connectionString: process.env['BENCH_DATABASE_URL'],
+  max: POOL_SIZE,
+})
+const app = express()
+
+/** The bare handler: one question, one answer. */
+app.get('/page/:slug', async (request, response) => {
+  const { rows } = await pool.query<{ page: object }>(PAGE, [request.params.slug, new Date()])
+  response.json(rows[0]?.page)
+})
+
+/** The same in a transaction that row-level security can read its academy from. */
+app.get('/walled-page/:slug', async (request, response) => {
+  const { slug } = request.params
+  const client = await pool.connect()
+  try {
+    await client.query(beginReadingAt(slug))
+    const { rows } = await client.query<{ page: object }>(PAGE, [slug, new Date()])
+    await client.query('COMMIT')
+    response.json(rows[0]?.page)
+  } finally {
+    client.release()
+  }
+})
+
+sayPort(await listen(createServer(app), { port: 0, mode: 'test' }))
