@@ -28,7 +28,7 @@ export async function readAcademyPage(
 ): Promise<Answer<'page.read'>> {
   const page = await readPageOf(db, reader.slug, (trx) => readPage(trx, clock.now()))
   const academy = checkFace(page.academy, reader)
-  return { ...page, academy, clinics: page.clinics.map(toPageClinic) }
+  return { ...page, academy, clinics: page.clinics.map(withPriceNow) }
 }
 
 function checkFace(academy: FaceRow | null, reader: PageReader): FaceRow {
@@ -36,13 +36,8 @@ function checkFace(academy: FaceRow | null, reader: PageReader): FaceRow {
   return academy
 }
 
-function toPageClinic(row: PageClinicRow): PageClinic {
-  const { id: _, fullestTaken, nextTaken, ...shown } = row
-  return {
-    ...shown,
-    taken: row.saleMode === 'drop-in' ? nextTaken : fullestTaken,
-    runPriceMinor: priceNow(row),
-  }
+function withPriceNow(clinic: PageClinicRow): PageClinic {
+  return { ...clinic, runPriceMinor: priceNow(clinic) }
 }
 
 /** What a golfer who joins a run now pays: the share of the sessions still to come. */
