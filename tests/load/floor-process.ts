@@ -11,9 +11,12 @@ const pool = new pg.Pool({
 })
 const app = express()
 
+/** Named, so that the floor too plans its question once for each connection. */
+const pageOf = (slug: string) => ({ name: 'page', text: PAGE, values: [slug, new Date()] })
+
 /** The bare handler: one question, one answer. */
 app.get('/page/:slug', async (request, response) => {
-  const { rows } = await pool.query<{ page: object }>(PAGE, [request.params.slug, new Date()])
+  const { rows } = await pool.query<{ page: object }>(pageOf(request.params.slug))
   response.json(rows[0]?.page)
 })
 
@@ -23,7 +26,7 @@ app.get('/walled-page/:slug', async (request, response) => {
   const client = await pool.connect()
   try {
     await client.query(beginReadingAt(slug))
-    const { rows } = await client.query<{ page: object }>(PAGE, [slug, new Date()])
+    const { rows } = await client.query<{ page: object }>(pageOf(slug))
     await client.query('COMMIT')
     response.json(rows[0]?.page)
   } finally {
