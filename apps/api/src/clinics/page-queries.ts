@@ -1,4 +1,4 @@
-import type { Knex } from 'knex'
+import type { Question } from '../platform/tenancy/transaction'
 
 /** The academy of the transaction as the public sees it. */
 export interface FaceRow {
@@ -69,7 +69,7 @@ const FACE = `
 const iso = (column: string): string =>
   `to_char(${column} AT TIME ZONE 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"')`
 
-const isAhead = "s.state = 'planned' AND s.starts_at > :now"
+const isAhead = "s.state = 'planned' AND s.starts_at > $1"
 
 /**
  * Published clinics with a session still to come: what the next one and the fullest one say, each
@@ -108,27 +108,21 @@ const CLINICS = `
     FROM sessions s WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id) run
   WHERE c.state = 'published'`
 
-/**
- * The whole public page in one question. It has a name, so that each connection plans it once:
- * planning it costs as much as answering it.
- */
-export async function readPage(trx: Knex.Transaction, now: Date): Promise<PageRow> {
-  const { rows } = await trx
-    .raw<{ rows: PageRow[] }>(
-      `SELECT (${FACE}) AS academy,
-         (SELECT coalesce(json_agg(p.shown ORDER BY p.starts_at, p.slug), '[]')
-            FROM (${CLINICS}) p) AS clinics,
-         (SELECT coalesce(json_agg(json_build_object(
-              'name', name, 'initials', initials, 'about', about) ORDER BY created_at), '[]')
-            FROM coaches) AS coaches,
-         (SELECT coalesce(json_agg(json_build_object('name', name, 'address', address,
-              'gettingHere', getting_here) ORDER BY created_at), '[]')
-            FROM venues) AS venues`,
-      { now },
-    )
-    .options({ name: 'public-page' })
-  return rows[0] ?? { academy: null, clinics: [], coaches: [], venues: [] }
-}
+/** The whole public page in one question: what is on it at this moment. */
+export const pageAt = (now: Date): Question => ({
+  name: 'public-page',
+  text: `
+    SELECT (${FACE}) AS academy,
+      (SELECT coalesce(json_agg(p.shown ORDER BY p.starts_at, p.slug), '[]')
+         FROM (${CLINICS}) p) AS clinics,
+      (SELECT coalesce(json_agg(json_build_object(
+           'name', name, 'initials', initials, 'about', about) ORDER BY created_at), '[]')
+         FROM coaches) AS coaches,
+      (SELECT coalesce(json_agg(json_build_object(
+           'name', name, 'address', address, 'gettingHere', getting_here) ORDER BY created_at), '[]')
+         FROM venues) AS venues`,
+  values: [now],
+})
 
 export interface ClinicDetailRow {
   id: string
@@ -171,15 +165,16 @@ export interface ClinicDetailRow {
   }[]
 }
 
+export interface ClinicPageRow {
+  academy: FaceRow | null
+  clinic: ClinicDetailRow | null
+}
+
 /** One clinic on the page, with every session and the places left in it at this moment. */
-export async function readClinicPage(
-  trx: Knex.Transaction,
-  slug: string,
-): Promise<{ academy: FaceRow | null; clinic: ClinicDetailRow | null }> {
-  const { rows } = await trx.raw<{
-    rows: { academy: FaceRow | null; clinic: ClinicDetailRow | null }[]
-  }>(
-    `SELECT (${FACE}) AS academy, (
+export const clinicPageOf = (slug: string): Question => ({
+  name: 'public-clinic-page',
+  text: `
+    SELECT (${FACE}) AS academy, (
        SELECT json_build_object(
          'id', c.id, 'slug', c.slug, 'title', c.title, 'summary', c.summary, 'about', c.about,
          'bring', c.bring, 'zone', c.zone, 'rrule', c.rrule, 'startsOnLocal', c.starts_on_local,
@@ -205,8 +200,6 @@ export async function readClinicPage(
                FROM session_areas sa JOIN areas ar ON ar.id = sa.area_id
                WHERE sa.session_id = s.id)) ORDER BY s.number), '[]')
             FROM sessions s WHERE s.clinic_id = c.id))
-       FROM clinics c WHERE c.slug = :slug AND c.state = 'published') AS clinic`,
-    { slug },
-  )
-  return rows[0] ?? { academy: null, clinic: null }
-}
+       FROM clinics c WHERE c.slug = $1 AND c.state = 'published') AS clinic`,
+  values: [slug],
+})

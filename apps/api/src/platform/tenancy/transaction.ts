@@ -1,4 +1,5 @@
 import type { Knex } from 'knex'
+import type pg from 'pg'
 import type { BeginOptions } from '../db/client'
 import { invariant } from '../invariant'
 
@@ -39,20 +40,47 @@ export function inAcademy<T>(
   })
 }
 
+/** A question in raw SQL. Its name is its own: each connection plans what it names once. */
+export interface Question {
+  name: string
+  text: string
+  values: readonly unknown[]
+}
+
 /**
- * Runs raw, read-only SQL inside the academy of this address, finding it in the same message as
- * BEGIN. An unknown address sees no rows at all. The model layer does not work in here.
+ * Asks one read-only question inside the academy of this address, which is found in the same
+ * message as BEGIN. All goes out at once: it costs one way there and back. An unknown address sees
+ * no rows at all. The model layer does not work in here.
  */
-export function readPageOf<T>(
+export async function askPageOf<Row extends pg.QueryResultRow>(
   db: Knex,
   slug: string,
-  work: (trx: Knex.Transaction) => Promise<T>,
-): Promise<T> {
+  question: Question,
+): Promise<Row[]> {
   const wanted = SLUG.test(slug) ? slug : ''
-  const withBegin =
-    `SELECT set_config('app.academy_id', ` +
+  const begin =
+    `BEGIN READ ONLY; SELECT set_config('app.academy_id', ` +
     `coalesce(find_academy_by_slug('${wanted}')::text, ''), true)`
-  return begin(db, { readOnly: true, withBegin }, work)
+  // Knex types its client and what its pool holds as anything; ours holds the driver's clients.
+  const pool = db.client as ConnectionPool
+  const connection = await pool.acquireConnection()
+  try {
+    const [begun, answer, ended] = await Promise.allSettled([
+      connection.query(begin),
+      connection.query<Row>({ ...question, values: [...question.values] }),
+      connection.query('COMMIT'),
+    ])
+    for (const step of [begun, answer, ended]) if (step.status === 'rejected') throw step.reason
+    invariant(answer.status === 'fulfilled', 'a question is answered or refused')
+    return answer.value.rows
+  } finally {
+    await pool.releaseConnection(connection)
+  }
+}
+
+interface ConnectionPool {
+  acquireConnection(): Promise<pg.Client>
+  releaseConnection(connection: pg.Client): Promise<void>
 }
 
 /** Runs `work` in one transaction outside any academy: tenant tables look empty there. */
