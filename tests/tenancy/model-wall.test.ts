@@ -42,7 +42,7 @@ describe('reading', () => {
   const readings: [string, (trx: AcademyTrx) => PromiseLike<{ name: string }[]>][] = [
     ['find', (trx) => TwinVenue.query(trx)],
     ['where', (trx) => TwinVenue.query(trx).where({ id: VENUE })],
-    ['orWhere at the top', (trx) => TwinVenue.query(trx).where({ id: AREA }).orWhere('id', VENUE)],
+    ['orWhere at the top', (trx) => TwinVenue.query(trx).where({ id: VENUE }).orWhere('id', AREA)],
     ['orWhere first', (trx) => TwinVenue.query(trx).orWhereRaw('true')],
     [
       'orWhere inside a group',
