@@ -32,7 +32,7 @@ export async function addCoach(
   return inAcademy(services.db, wanted.academyId, async (trx) => {
     const now = services.clock.now()
     const id = newId(now)
-    const me = await findAccountById(services.db, wanted.addedBy)
+    const me = await findAccountById(trx, wanted.addedBy)
     const isMe = email !== undefined && me?.email === email
     const isFree = isMe && !(await findCoachOf(trx, wanted.addedBy))
     const accountId = isFree ? wanted.addedBy : null
@@ -74,7 +74,7 @@ export async function acceptInvitation(
         await updateCoach(trx, coachId, { accountId })
         return
       }
-      const account = await findAccountById(services.db, accountId)
+      const account = await findAccountById(trx, accountId)
       const name = account?.name ?? 'Coach'
       const now = services.clock.now()
       const own = { id: newId(now), name, initials: initialsOf(name), accountId, createdAt: now }

@@ -9,7 +9,8 @@ const NOTE =
 /** The provider's own pages: paying, connecting an account, and a look at what is there. */
 export function hostedPages(machine: Machine, onChange: () => void): Router {
   const router = Router()
-  router.use(urlencoded({ extended: false }))
+  // Only for the pages: the API reads its forms itself, nested brackets and all.
+  router.use(['/pay', '/onboarding'], urlencoded({ extended: false }))
 
   router.get('/pay/:id', (request, response) => {
     const checkout = machine.findCheckout(request.params.id)
