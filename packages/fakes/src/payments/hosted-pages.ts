@@ -9,13 +9,14 @@ const NOTE =
 /** The provider's own pages: paying, connecting an account, and a look at what is there. */
 export function hostedPages(machine: Machine, onChange: () => void): Router {
   const router = Router()
-  router.use(urlencoded({ extended: false }))
+  // For these pages only: the API reads its bodies itself, and a body can be read once.
+  const readForm = urlencoded({ extended: false })
 
   router.get('/pay/:id', (request, response) => {
     const checkout = machine.findCheckout(request.params.id)
     response.send(payPage(checkout))
   })
-  router.post('/pay/:id', (request, response) => {
+  router.post('/pay/:id', readForm, (request, response) => {
     const checkout = machine.findCheckout(request.params.id)
     const body = request.body as Record<string, string>
     const refusal = machine.pay(checkout, { card: body['card'] ?? '' })
