@@ -45,7 +45,11 @@ export function makeDeliveries(options: {
       await pause(pauseMs, undefined, { signal: stopping.signal }).catch(() => {})
     }
   }
-  const start = (body: string) => {
+  const track = (delivery: Promise<void>) => {
+    const tracked: Promise<void> = delivery.finally(() => onTheirWay.delete(tracked))
+    onTheirWay.add(tracked)
+  }
+  const start = async (body: string): Promise<void> => {
     if (!url || isMuted) return
     if (drops > 0) {
       drops -= 1
@@ -53,22 +57,23 @@ export function makeDeliveries(options: {
     }
     const times = duplicates > 0 ? 2 : 1
     if (duplicates > 0) duplicates -= 1
-    for (let time = 0; time < times; time += 1) {
-      const delivery: Promise<void> = deliver(url, body).finally(() => onTheirWay.delete(delivery))
-      onTheirWay.add(delivery)
-    }
+    await Promise.all(Array.from({ length: times }, () => deliver(url, body)))
   }
   const releaseAll = (bodies: string[]) => {
     isHolding = false
     held = []
-    bodies.forEach(start)
+    // One after the other, so that the order they leave in is the order they come in.
+    const inTurn = async () => {
+      for (const body of bodies) await start(body)
+    }
+    track(inTurn())
   }
   return {
     send(payload) {
       // Written out at once: a held event tells how things were, not how they are when released.
       const body = JSON.stringify(payload)
       if (isHolding) held.push(body)
-      else start(body)
+      else track(start(body))
     },
     mute: (value) => void (isMuted = value),
     hold: () => void (isHolding = true),
