@@ -104,3 +104,18 @@ export async function control(fake: PaymentsFake, name: string, body: object = {
   // Every control answers in this shape.
   return ((await response.json()) as { outcome: unknown }).outcome
 }
+
+/** Pays a new checkout by a card, and gives what its payment intent is now. */
+export async function payFor(
+  { fake, stripe, stripeAccount }: { fake: PaymentsFake; stripe: Stripe; stripeAccount: string },
+  params: Stripe.Checkout.SessionCreateParams,
+  card?: string,
+): Promise<Stripe.PaymentIntent> {
+  const { id } = await stripe.checkout.sessions.create(params, { stripeAccount })
+  const refusal = fake.pay(id, card)
+  if (refusal) throw new Error(refusal)
+  const expand = ['payment_intent.latest_charge.balance_transaction']
+  const paid = await stripe.checkout.sessions.retrieve(id, { expand }, { stripeAccount })
+  // It was asked for with the object in place of its id.
+  return paid.payment_intent as Stripe.PaymentIntent
+}

@@ -21,14 +21,9 @@ const LEAST: Readonly<Record<string, number>> = {
 const MOST = 99_999_999
 
 const THREE_DECIMALS = new Set(['bhd', 'jod', 'kwd', 'omr', 'tnd'])
-/** Whole units only, though they are written with two decimals. */
-const WHOLE_OF_TWO_DECIMALS = new Set(['isk', 'ugx'])
 
-/** The step that amounts of a currency come in: 10 for those with three decimals. */
-function stepOf(currency: string): number {
-  if (THREE_DECIMALS.has(currency)) return 10
-  return WHOLE_OF_TWO_DECIMALS.has(currency) ? 100 : 1
-}
+/** The step that amounts of a currency come in: of three decimals the last one is always 0. */
+const stepOf = (currency: string): number => (THREE_DECIMALS.has(currency) ? 10 : 1)
 
 /** @throws ProviderError for a currency that is none; they are written in lower case. */
 export function requireCurrency(currency: string): void {
