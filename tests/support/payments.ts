@@ -76,3 +76,46 @@ export function checkoutParams(
     expires_at: nowSeconds + (wishes.lastsSeconds ?? 3_600),
   }
 }
+
+/** A clock that stands still until it is moved. */
+export function movableClock(start: string) {
+  let at = Date.parse(start)
+  return {
+    now: () => new Date(at),
+    seconds: () => Math.floor(at / 1000),
+    moveBy: (seconds: number) => void (at += seconds * 1000),
+  }
+}
+
+/** Sends the form of a payment page, as a browser does. */
+export function payByForm(url: string, card: string): Promise<Response> {
+  const body = new URLSearchParams({ card, expiry: '12 / 34', cvc: '123', name: 'Test Card' })
+  return fetch(url, { method: 'POST', body, redirect: 'manual' })
+}
+
+/** A control over HTTP, as another process uses it. @throws Error where it is refused. */
+export async function control(fake: PaymentsFake, name: string, body: object = {}) {
+  const response = await fetch(`${fake.url}/_control/${name}`, {
+    method: 'POST',
+    headers: { 'content-type': 'application/json' },
+    body: JSON.stringify(body),
+  })
+  if (!response.ok) throw new Error(`${name} was refused: ${await response.text()}`)
+  // Every control answers in this shape.
+  return ((await response.json()) as { outcome: unknown }).outcome
+}
+
+/** Pays a new checkout by a card, and gives what its payment intent is now. */
+export async function payFor(
+  { fake, stripe, stripeAccount }: { fake: PaymentsFake; stripe: Stripe; stripeAccount: string },
+  params: Stripe.Checkout.SessionCreateParams,
+  card?: string,
+): Promise<Stripe.PaymentIntent> {
+  const { id } = await stripe.checkout.sessions.create(params, { stripeAccount })
+  const refusal = fake.pay(id, card)
+  if (refusal) throw new Error(refusal)
+  const expand = ['payment_intent.latest_charge.balance_transaction']
+  const paid = await stripe.checkout.sessions.retrieve(id, { expand }, { stripeAccount })
+  // It was asked for with the object in place of its id.
+  return paid.payment_intent as Stripe.PaymentIntent
+}
