@@ -73,7 +73,7 @@ export default function StaffLayout() {
       <nav className="tabs onhand" aria-label="Desk">
         {may('register:take') && <NavLink to={paths.today(slug)}>Today</NavLink>}
         {shown
-          .filter(({ label }) => ['Clinics', 'Golfers', 'Money'].includes(label))
+          .filter(({ label }) => label !== 'Set-up')
           .map(({ label, to }) => (
             <NavLink key={label} to={to(slug)}>
               {label}

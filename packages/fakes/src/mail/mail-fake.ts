@@ -1,7 +1,7 @@
 import { createSign, generateKeyPairSync, type KeyObject } from 'node:crypto'
 import express, { Router, json, type Request, type Response } from 'express'
 import { closeServer, listenOnLoopback } from '../listen'
-import { keepState } from '../kept-state'
+import { keepState, readKept } from '../kept-state'
 import { mailboxPage, messagePage } from './mailbox-pages'
 
 export interface KeptMail {
@@ -55,7 +55,7 @@ export async function startMailFake(options: MailFakeOptions): Promise<MailFake>
   const now = options.now ?? (() => new Date())
   const keys = readOrMakeKeys(options.stateFile)
   const kept = keepState(options.stateFile, () => ({ messages, pem: keys.pem }))
-  const had = kept.read() as { messages?: KeptMail[] } | undefined
+  const had = readKept(options.stateFile) as { messages?: KeptMail[] } | undefined
   const messages: KeptMail[] = had?.messages ?? []
   const failures: number[] = []
   const onTheirWay = new Set<Promise<void>>()
@@ -111,7 +111,7 @@ export async function startMailFake(options: MailFakeOptions): Promise<MailFake>
     '/_control',
     controlRoutes({ messages, failures, publicKey: keys.publicKey, keep: kept.keep }),
   )
-  const listening = await listenOnLoopback(app, options.port)
+  const listening = await listenOnLoopback(app, options)
 
   return {
     url: listening.url,
@@ -164,8 +164,7 @@ function toKept(
 }
 
 function readOrMakeKeys(stateFile: string | undefined) {
-  const had = keepState(stateFile, () => null).read() as
-    { pem?: { privateKey: string; publicKey: string } } | undefined
+  const had = readKept(stateFile) as { pem?: { privateKey: string; publicKey: string } } | undefined
   const made = had?.pem ?? makeKeys()
   return { pem: made, privateKey: made.privateKey, publicKey: made.publicKey }
 }

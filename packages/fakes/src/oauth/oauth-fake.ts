@@ -103,7 +103,7 @@ export async function startOauthFake(options: OauthFakeOptions): Promise<OauthFa
     })
   })
 
-  const listening = await listenOnLoopback(app, options.port)
+  const listening = await listenOnLoopback(app, options)
   return {
     url: listening.url,
     port: listening.port,
