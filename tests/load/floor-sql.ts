@@ -73,15 +73,36 @@ export const beginReadingAt = (slug: string): string =>
   `BEGIN READ ONLY; SELECT set_config('app.academy_id',
      coalesce(find_academy_by_slug('${slug}')::text, ''), true)`
 
-/** An enrolment ($1 academy, $2 id, …) with its one place. */
+/**
+ * What a hold of one session must know ($1 academy, $2 session, $3 account): what it costs with tax
+ * in it, for how long it is held, what is agreed to, who takes it, and that they have none yet.
+ */
+export const READ_FOR_HOLD = `
+  SELECT c.id AS clinic_id, c.drop_in_price_minor AS price_minor,
+    round(c.drop_in_price_minor * a.tax_basis_points / (10000.0 + a.tax_basis_points)) AS tax_minor,
+    a.currency, a.hold_minutes, a.waiver, g.id AS golfer_id
+  FROM sessions s
+    JOIN clinics c ON c.academy_id = s.academy_id AND c.id = s.clinic_id
+    JOIN academies a ON a.academy_id = s.academy_id
+    JOIN golfers g ON g.academy_id = s.academy_id AND g.account_id = $3
+  WHERE s.academy_id = $1 AND s.id = $2 AND s.state = 'planned' AND s.starts_at > now()
+    AND c.state = 'published' AND c.sale_mode <> 'run' AND s.held + s.confirmed < s.capacity
+    AND (c.handicap_max IS NULL OR g.handicap <= c.handicap_max)
+    AND NOT EXISTS (SELECT 1 FROM places p WHERE p.academy_id = s.academy_id
+      AND p.session_id = s.id AND p.golfer_id = g.id AND p.state <> 'cancelled')`
+
+/** The rows of a hold: what was agreed to, the enrolment and its place. */
 export const INSERT_HOLD = `
-  WITH enrolment AS (
+  WITH consent AS (
+    INSERT INTO consents (academy_id, id, golfer_id, kind, wording, given_by, given_at)
+    VALUES ($1, $2, $3, 'waiver', $4, $5, now())
+  ), enrolment AS (
     INSERT INTO enrolments (academy_id, id, clinic_id, golfer_id, taken_by, kind, state,
       is_offer, held_until, currency, net_minor, tax_minor, pay_mode, created_at)
-    VALUES ($1, $2, $3, $4, $5, 'session', 'held', false, $6, 'EUR', $7, $8, 'card', now()))
+    VALUES ($1, $6, $7, $3, $5, 'session', 'held', false, $8, $9, $10, $11, 'card', now()))
   INSERT INTO places (academy_id, id, enrolment_id, session_id, golfer_id, state, net_minor,
     tax_minor)
-  VALUES ($1, $9, $2, $10, $4, 'held', $7, $8)`
+  VALUES ($1, $12, $6, $13, $3, 'held', $10, $11)`
 
 /** The guard: one seat, where there is one. */
 export const TAKE_SEAT = `

@@ -47,8 +47,18 @@ export async function updateGolfer(
   return Golfer.query(trx).patch(change).where({ id })
 }
 
-export async function insertConsent(trx: AcademyTrx, row: Partial<Consent>): Promise<void> {
-  await Consent.query(trx).insert(row)
+export async function insertConsent(
+  trx: AcademyTrx,
+  row: Pick<Consent, 'id' | 'golferId' | 'kind' | 'wording' | 'givenBy' | 'givenAt'>,
+): Promise<void> {
+  await trx
+    .raw(
+      `INSERT INTO consents (academy_id, id, golfer_id, kind, wording, given_by, given_at)
+       VALUES (current_setting('app.academy_id')::uuid, :id, :golferId, :kind, :wording, :givenBy,
+         :givenAt)`,
+      row,
+    )
+    .options({ name: 'insert-consent' })
 }
 
 export interface ConsentRow {

@@ -2,6 +2,7 @@ import type { Knex } from 'knex'
 import type pg from 'pg'
 import type { BeginOptions } from '../db/client'
 import { invariant } from '../invariant'
+import { together } from './together'
 
 declare const inside: unique symbol
 
@@ -65,14 +66,12 @@ export async function askPageOf<Row extends pg.QueryResultRow>(
   const pool = db.client as ConnectionPool
   const connection = await pool.acquireConnection()
   try {
-    const [begun, answer, ended] = await Promise.allSettled([
+    const [, { rows }] = await together(
       connection.query(begin),
       connection.query<Row>({ ...question, values: [...question.values] }),
       connection.query('COMMIT'),
-    ])
-    for (const step of [begun, answer, ended]) if (step.status === 'rejected') throw step.reason
-    invariant(answer.status === 'fulfilled', 'a question is answered or refused')
-    return answer.value.rows
+    )
+    return rows
   } finally {
     await pool.releaseConnection(connection)
   }
