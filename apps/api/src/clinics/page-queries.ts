@@ -1,4 +1,4 @@
-import type { Question } from '../platform/tenancy/transaction'
+import type { Question } from '../platform/tenancy/ask'
 
 /** The academy of the transaction as the public sees it. */
 export interface FaceRow {

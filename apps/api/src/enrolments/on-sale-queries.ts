@@ -1,6 +1,8 @@
 import type { Clinic } from '../clinics/clinics'
 import type { Academy } from '../academies/academies'
 import type { Golfer } from '../golfers/golfers'
+import { invariant } from '../platform/invariant'
+import { ask } from '../platform/tenancy/ask'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 import type { Enrolment } from './models'
 
@@ -59,16 +61,15 @@ const SESSION = `json_build_object(
 
 /** A clinic with what selling it needs of its academy and its sessions, in one question. */
 export async function readOffer(trx: AcademyTrx, clinicId: string): Promise<OfferRow | undefined> {
-  const { rows } = await trx
-    .raw<{ rows: OfferRow[] }>(
-      `SELECT ${ACADEMY} AS academy, ${CLINIC} AS clinic,
-         (SELECT coalesce(json_agg(${SESSION} ORDER BY s.number), '[]') FROM sessions s
-            WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id) AS sessions
-       FROM clinics c JOIN academies a ON a.academy_id = c.academy_id WHERE c.id = ?`,
-      [clinicId],
-    )
-    .options({ name: 'offer-of-clinic' })
-  const [row] = rows
+  const [row] = await ask<OfferRow>(trx, {
+    name: 'offer-of-clinic',
+    text: `
+      SELECT ${ACADEMY} AS academy, ${CLINIC} AS clinic,
+        (SELECT coalesce(json_agg(${SESSION} ORDER BY s.number), '[]') FROM sessions s
+           WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id) AS sessions
+      FROM clinics c JOIN academies a ON a.academy_id = c.academy_id WHERE c.id = $1`,
+    values: [clinicId],
+  })
   // JSON has no dates.
   const dated = row?.sessions.map((s) => ({ ...s, startsAt: new Date(s.startsAt) }))
   return row && dated && { ...row, sessions: dated }
@@ -97,25 +98,26 @@ export async function readStanding(
   of: { accountId: string; golferId: string | null; clinicId: string },
 ): Promise<Standing> {
   const isNamed = of.golferId !== null
-  const { rows } = await trx
-    .raw<{ rows: Standing[] }>(
-      `WITH golfer AS (
-         SELECT * FROM golfers WHERE ${isNamed ? 'id = :golferId' : 'account_id = :accountId'})
-       SELECT
-         EXISTS (SELECT 1 FROM memberships
-           WHERE account_id = :accountId AND role = 'golfer') AS is_member,
-         (SELECT json_build_object('id', id, 'name', name, 'accountId', account_id,
-            'guardianAccountId', guardian_account_id, 'bornOn', born_on, 'handicap', handicap)
-            FROM golfer) AS golfer,
-         (SELECT coalesce(json_agg(json_build_object('id', e.id, 'state', e.state,
-              'takenBy', e.taken_by, 'kind', e.kind,
-              'sessionIds', (SELECT coalesce(json_agg(p.session_id), '[]') FROM places p
-                WHERE p.academy_id = e.academy_id AND p.enrolment_id = e.id
-                  AND p.state <> 'cancelled')) ORDER BY e.created_at DESC), '[]')
-            FROM golfer g JOIN enrolments e ON e.academy_id = g.academy_id AND e.golfer_id = g.id
-            WHERE e.clinic_id = :clinicId AND e.state <> 'cancelled') AS active`,
-      of,
-    )
-    .options({ name: isNamed ? 'standing-of-golfer' : 'standing-of-person' })
-  return rows[0] ?? { isMember: false, golfer: null, active: [] }
+  const [row] = await ask<Standing>(trx, {
+    name: isNamed ? 'standing-of-golfer' : 'standing-of-person',
+    text: `
+      WITH golfer AS (
+        SELECT * FROM golfers WHERE ${isNamed ? 'id = $3' : 'account_id = $1'})
+      SELECT
+        EXISTS (SELECT 1 FROM memberships
+          WHERE account_id = $1 AND role = 'golfer') AS "isMember",
+        (SELECT json_build_object('id', id, 'name', name, 'accountId', account_id,
+           'guardianAccountId', guardian_account_id, 'bornOn', born_on, 'handicap', handicap)
+           FROM golfer) AS golfer,
+        (SELECT coalesce(json_agg(json_build_object('id', e.id, 'state', e.state,
+             'takenBy', e.taken_by, 'kind', e.kind,
+             'sessionIds', (SELECT coalesce(json_agg(p.session_id), '[]') FROM places p
+               WHERE p.academy_id = e.academy_id AND p.enrolment_id = e.id
+                 AND p.state <> 'cancelled')) ORDER BY e.created_at DESC), '[]')
+           FROM golfer g JOIN enrolments e ON e.academy_id = g.academy_id AND e.golfer_id = g.id
+           WHERE e.clinic_id = $2 AND e.state <> 'cancelled') AS active`,
+    values: [of.accountId, of.clinicId, ...(isNamed ? [of.golferId] : [])],
+  })
+  invariant(row, 'a standing is one row, whatever is in it')
+  return row
 }

@@ -1,4 +1,5 @@
 import { raw } from 'objection'
+import { ask } from '../platform/tenancy/ask'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 import { Consent, Golfer, MinorLookUp } from './models'
 
@@ -51,14 +52,14 @@ export async function insertConsent(
   trx: AcademyTrx,
   row: Pick<Consent, 'id' | 'golferId' | 'kind' | 'wording' | 'givenBy' | 'givenAt'>,
 ): Promise<void> {
-  await trx
-    .raw(
-      `INSERT INTO consents (academy_id, id, golfer_id, kind, wording, given_by, given_at)
-       VALUES (current_setting('app.academy_id')::uuid, :id, :golferId, :kind, :wording, :givenBy,
-         :givenAt)`,
-      row,
-    )
-    .options({ name: 'insert-consent' })
+  const { id, golferId, kind, wording, givenBy, givenAt } = row
+  await ask(trx, {
+    name: 'insert-consent',
+    text: `
+      INSERT INTO consents (academy_id, id, golfer_id, kind, wording, given_by, given_at)
+      VALUES (current_setting('app.academy_id')::uuid, $1, $2, $3, $4, $5, $6)`,
+    values: [id, golferId, kind, wording, givenBy, givenAt],
+  })
 }
 
 export interface ConsentRow {

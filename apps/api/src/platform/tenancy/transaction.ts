@@ -2,7 +2,7 @@ import type { Knex } from 'knex'
 import type pg from 'pg'
 import type { BeginOptions } from '../db/client'
 import { invariant } from '../invariant'
-import { together } from './together'
+import { askBetween, type Question } from './ask'
 
 declare const inside: unique symbol
 
@@ -41,19 +41,12 @@ export function inAcademy<T>(
   })
 }
 
-/** A question in raw SQL. Its name is its own: each connection plans what it names once. */
-export interface Question {
-  name: string
-  text: string
-  values: readonly unknown[]
-}
-
 /**
  * Asks one read-only question inside the academy of this address, which is found in the same
  * message as BEGIN. All goes out at once: it costs one way there and back. An unknown address sees
  * no rows at all. The model layer does not work in here.
  */
-export async function askPageOf<Row extends pg.QueryResultRow>(
+export function askPageOf<Row extends pg.QueryResultRow>(
   db: Knex,
   slug: string,
   question: Question,
@@ -62,24 +55,7 @@ export async function askPageOf<Row extends pg.QueryResultRow>(
   const begin =
     `BEGIN READ ONLY; SELECT set_config('app.academy_id', ` +
     `coalesce(find_academy_by_slug('${wanted}')::text, ''), true)`
-  // Knex types its client and what its pool holds as anything; ours holds the driver's clients.
-  const pool = db.client as ConnectionPool
-  const connection = await pool.acquireConnection()
-  try {
-    const [, { rows }] = await together(
-      connection.query(begin),
-      connection.query<Row>({ ...question, values: [...question.values] }),
-      connection.query('COMMIT'),
-    )
-    return rows
-  } finally {
-    await pool.releaseConnection(connection)
-  }
-}
-
-interface ConnectionPool {
-  acquireConnection(): Promise<pg.Client>
-  releaseConnection(connection: pg.Client): Promise<void>
+  return askBetween(db, { begin, question })
 }
 
 /** Runs `work` in one transaction outside any academy: tenant tables look empty there. */
