@@ -26,11 +26,15 @@ export async function measureHoldsInProcess(
     releaseConnection(client: pg.Client): Promise<void>
   }
   const useCase = ({ academyId, clinicId, sessionId, accountId }: Wish) =>
-    holdPlaces(services, {
-      academyId,
-      person: { id: accountId, name: 'Golfer', email: 'golfer@mail.example', isVerified: true },
-      wanted: { clinicId, sessionId, for: { kind: 'me' }, hasAcceptedWaiver: true },
-    })
+    holdPlaces(
+      services,
+      {
+        academyId,
+        person: { id: accountId, name: 'Golfer', email: 'golfer@mail.example', isVerified: true },
+        wanted: { clinicId, sessionId, for: { kind: 'me' }, hasAcceptedWaiver: true },
+      },
+      (_, id) => Promise.resolve(id),
+    )
   const bare = async (wish: Wish) => {
     const client = await pool.acquireConnection()
     try {
