@@ -57,7 +57,7 @@ export default function StaffLayout() {
             <Pennon />
             {academy?.name}
           </Link>
-          <Link className="who" to={paths.family(slug)}>
+          <Link className="who" to={paths.family(slug)} aria-label={name}>
             <Initials of={initialsOf(name)} />
             <span>{name}</span>
           </Link>
