@@ -18,9 +18,9 @@ export const loader =
   (client: QueryClient) =>
   async ({ params, request }: LoaderFunctionArgs) => {
     const slug = params['academy'] ?? ''
-    const { zone } = await client.ensureQueryData(academyQuery(slug))
+    const { zone } = await client.query({ ...academyQuery(slug), staleTime: 'static' })
     const day = new URL(request.url).searchParams.get('day') ?? todayIn(zone)
-    void client.prefetchQuery(dayQuery(slug, day))
+    void client.query(dayQuery(slug, day)).catch(() => undefined)
     return null
   }
 
