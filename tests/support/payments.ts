@@ -93,18 +93,6 @@ export function payByForm(url: string, card: string): Promise<Response> {
   return fetch(url, { method: 'POST', body, redirect: 'manual' })
 }
 
-/** A control over HTTP, as another process uses it. @throws Error where it is refused. */
-export async function control(fake: PaymentsFake, name: string, body: object = {}) {
-  const response = await fetch(`${fake.url}/_control/${name}`, {
-    method: 'POST',
-    headers: { 'content-type': 'application/json' },
-    body: JSON.stringify(body),
-  })
-  if (!response.ok) throw new Error(`${name} was refused: ${await response.text()}`)
-  // Every control answers in this shape.
-  return ((await response.json()) as { outcome: unknown }).outcome
-}
-
 /** Pays a new checkout by a card, and gives what its payment intent is now. */
 export async function payFor(
   { fake, stripe, stripeAccount }: { fake: PaymentsFake; stripe: Stripe; stripeAccount: string },

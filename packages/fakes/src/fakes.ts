@@ -3,7 +3,8 @@ export {
   type PaymentsFake,
   type PaymentsFakeOptions,
 } from './payments/payments-fake'
-export { startMailFake, type MailFake, type MailFakeOptions, type KeptMail } from './mail/mail-fake'
+export { startMailFake, type MailFake, type MailFakeOptions } from './mail/mail-fake'
+export type { KeptMail } from './mail/message'
 export {
   startOauthFake,
   type OauthFake,

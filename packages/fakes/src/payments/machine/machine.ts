@@ -10,6 +10,8 @@ import { makeRefunds, type Refunds } from './refunds'
 export interface Machine extends Accounts, Checkouts, Charges, Refunds, Disputes, Payouts {
   state: FakeState
   now: () => number
+  /** Unix seconds of the clock that the provider's own started from. */
+  realNow: () => number
   /** Lets everything happen whose time has come. */
   tick: () => void
   advance: (seconds: number) => void
@@ -52,5 +54,6 @@ export function makeMachine(given: {
     state.clockOffsetSeconds += seconds
     tick()
   }
-  return { ...parts, state, now, tick, advance, setClock: (to) => advance(to - now()) }
+  const realNow = () => now() - state.clockOffsetSeconds
+  return { ...parts, state, now, realNow, tick, advance, setClock: (to) => advance(to - now()) }
 }
