@@ -5,9 +5,5 @@ export {
 } from './payments/payments-fake'
 export { startMailFake, type MailFake, type MailFakeOptions } from './mail/mail-fake'
 export type { KeptMail } from './mail/message'
-export {
-  startOauthFake,
-  type OauthFake,
-  type OauthFakeOptions,
-  type FakePerson,
-} from './oauth/oauth-fake'
+export { startOauthFake, type OauthFake, type OauthFakeOptions } from './oauth/oauth-fake'
+export type { FakePerson } from './oauth/people'
