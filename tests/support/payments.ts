@@ -16,7 +16,7 @@ export async function startPayments(
   return { fake, stripe: sdkFor(fake) }
 }
 
-export function sdkFor(fake: PaymentsFake, key = SECRET_KEY): Stripe {
+export function sdkFor(fake: { port: number }, key = SECRET_KEY): Stripe {
   return new Stripe(key, {
     host: '127.0.0.1',
     port: fake.port,
