@@ -41,7 +41,7 @@ export default function ClinicPageView() {
               Take a place
             </a>
             <Facts facts={factsOf(page, format)} />
-            <h3 className="mt-7 mb-2">{headOfDates(clinic)}</h3>
+            <h2 className="mt-7 mb-2 text-title">{headOfDates(clinic)}</h2>
             <SessionCard sessions={clinic.sessions} format={format} />
           </div>
           <TakePlace page={page} format={format} />

@@ -1,4 +1,4 @@
-import { Fragment } from 'react'
+import { Fragment, type CSSProperties } from 'react'
 import { Link } from 'react-router'
 import { formatLocalDay } from '@marram/schedule/format'
 import type { Format } from '../academies/format'
@@ -15,10 +15,18 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
   const hours = hoursOf(board)
   const span = (hours.to - hours.from) * 60
   const at = (minutes: number) => ((minutes - hours.from * 60) / span) * 100
-  const today = dayOfInstant(new Date(Date.now()).toISOString(), board.zone)
+  const now = new Date(Date.now()).toISOString()
+  const today = dayOfInstant(now, board.zone)
+  const nowMinutes = minutesOfDay(now, board.zone)
+  const isNowShown = nowMinutes > hours.from * 60 && nowMinutes < hours.to * 60
   return (
     <>
-      <div className="board" role="group" aria-label="Week board">
+      <div
+        className="board"
+        role="group"
+        aria-label="Week board"
+        style={{ '--hours': hours.to - hours.from } as CSSProperties}
+      >
         <div className="hd">Day</div>
         <div className="hd">Area</div>
         <div className="hrs" aria-hidden>
@@ -58,6 +66,9 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
                   aria-label={`Sunset ${format.time(duskAt)}`}
                 />
               )}
+              {dayLocal === today && isNowShown && (
+                <span className="nowline" style={{ left: `${at(nowMinutes)}%` }} />
+              )}
               {board.areas.map((area, index) => (
                 <div key={area.id} className="lane">
                   {duskAt && !area.hasLamps && !area.isCovered && (
@@ -90,10 +101,28 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
           </Fragment>
         ))}
       </div>
-      <p className="note soft my-3">
-        Fog is after sunset where there are no lamps. A red slip runs past sunset without them.
-      </p>
+      <BoardKey />
     </>
+  )
+}
+
+/** What is drawn, in words. */
+function BoardKey() {
+  return (
+    <ul className="boardkey">
+      <li>
+        <i className="k-line" /> Sunset
+      </li>
+      <li>
+        <i className="k-fog" /> Too dark, no lamps here
+      </li>
+      <li>
+        <PlaceTicks taken={2} capacity={3} /> Place taken, place free
+      </li>
+      <li className="flagtext">
+        <Drawing of="flag" className="inline-flag" /> Runs past sunset
+      </li>
+    </ul>
   )
 }
 

@@ -3,13 +3,13 @@ import { useState } from 'react'
 import type { Sent } from '@marram/contract'
 import type { Format } from '../academies/format'
 import { call } from '../api/client'
+import { useAcademyMutation } from '../api/mutation'
 import { ApiProblem, sentenceOf } from '../api/problem'
 import { clinicQuery, clinicsQuery } from '../clinics/queries'
 import { Button } from '../ui/button'
 import { CheckField, SelectField } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
-import { useAcademyMutation } from './queries'
 
 /** Staff take a place for a golfer; it is paid at the desk. */
 export function GivePlace(props: { academy: string; golferId: string; format: Format }) {

@@ -10,7 +10,8 @@ import { Button, buttonClass } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { EmptyState } from '../ui/states'
 import { call } from '../api/client'
-import { myPlacesQuery, useAcademyMutation, type Enrolment, type MyPlaces } from './queries'
+import { useAcademyMutation } from '../api/mutation'
+import { myPlacesQuery, type Enrolment, type MyPlaces } from './queries'
 
 export const loader =
   (client: QueryClient) =>

@@ -71,19 +71,22 @@ export class AcademyModel extends Model {
   }
 
   override $beforeUpdate(_options: unknown, context: QueryContext): void {
-    if (this.givenAcademyId() !== undefined) this.stamp(context)
+    if (this.givenAcademyIds().length > 0) this.stamp(context)
   }
 
-  /** A row that was not read from the database has none yet, whatever its type says. */
-  private givenAcademyId(): string | undefined {
-    return this.academyId
+  /**
+   * What the row says of its academy, under the property's name and under the column's, which
+   * would reach the database as well. A row that is yet to be written says nothing.
+   */
+  private givenAcademyIds(): unknown[] {
+    const { academyId, academy_id: byColumn } = this as { academyId?: string; academy_id?: unknown }
+    return [academyId, byColumn].filter((given) => given !== undefined)
   }
 
   private stamp(context: QueryContext): void {
     const academyId = academyOf(context.transaction)
-    const given = this.givenAcademyId()
     invariant(
-      given === undefined || given === academyId,
+      this.givenAcademyIds().every((given) => given === academyId),
       'a row of another academy was about to be written',
     )
     this.academyId = academyId
