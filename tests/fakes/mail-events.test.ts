@@ -7,6 +7,7 @@ import { letterTo, startMail } from '../support/mail'
 import { startReceiver, type WebhookReceiver } from '../support/webhooks'
 
 const NOW = new Date('2027-04-06T10:00:00Z')
+const ALL = ['processed', 'delivered', 'bounce', 'dropped', 'spamreport'] as const
 
 interface MailEvent {
   sg_event_id: string
@@ -24,7 +25,8 @@ let mail: MailService
 
 beforeEach(async () => {
   receiver = await startReceiver()
-  ;({ fake, mail } = await startMail({ now: () => NOW, webhookUrl: receiver.url }))
+  const { url: webhookUrl } = receiver
+  ;({ fake, mail } = await startMail({ now: () => NOW, webhookUrl, webhookEvents: ALL }))
 })
 afterEach(async () => {
   await fake.close()
@@ -81,6 +83,16 @@ describe('the event webhook of the mail stand-in', () => {
     expect(told().map(({ event }) => event)).toEqual(events)
     expect(new Set(told().map(({ sg_event_id }) => sg_event_id)).size).toBe(events.length)
     expect(fake.messagesTo(to)).toMatchObject([{ fate }])
+  })
+
+  it('keeps to what it is set up to tell, which is what keeps mail from an address', async () => {
+    const usual = await startMail({ webhookUrl: receiver.url })
+    for (const name of ['golfer', 'bounce', 'drop', 'spam']) {
+      await usual.mail.send(letterTo(`${name}@mail.example`))
+      await usual.fake.flush()
+    }
+    expect(told().map(({ event }) => event)).toEqual(['bounce', 'dropped', 'spamreport'])
+    await usual.fake.close()
   })
 
   it('says why', async () => {

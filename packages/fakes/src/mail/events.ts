@@ -21,10 +21,12 @@ export function meetFate(suppressed: Suppressed, email: string): { fate: Fate; r
   return { fate, reason: fate === 'dropped' ? 'Invalid' : '' }
 }
 
+export type MailEventName = Fate | 'processed'
+
 export interface MailEvent {
   sg_event_id: string
   sg_message_id: string
-  event: Fate | 'processed'
+  event: MailEventName
   email: string
   timestamp: number
   [detail: string]: string | number

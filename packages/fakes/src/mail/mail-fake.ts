@@ -4,6 +4,7 @@ import { makeDeliveries, type DeliveryControls } from '../deliveries'
 import { keepState, readKept } from '../kept-state'
 import { closeServer, listenOnLoopback, makeApp } from '../listen'
 import { requireLoopback, requireNoLiveKey } from '../safety'
+import type { MailEvent, MailEventName } from './events'
 import { makeSigningKeys, signDelivery, type SigningKeys } from './keys'
 import { mailboxRoutes } from './mailbox-routes'
 import type { KeptMail } from './message'
@@ -14,6 +15,8 @@ export interface MailFakeOptions {
   port?: number
   apiKey: string
   webhookUrl?: string
+  /** What the webhook is set up to hear of; left out, what keeps mail from an address. */
+  webhookEvents?: readonly MailEventName[]
   now?: () => Date
   /** Where the mailbox is kept between starts; left out, it is forgotten. */
   stateFile?: string
@@ -57,7 +60,11 @@ export async function startMailFake(options: MailFakeOptions): Promise<MailFake>
 
   const app = makeApp()
   const { apiKey } = options
-  const { send: tell } = deliveries
+  const wanted: readonly string[] = options.webhookEvents ?? ['bounce', 'dropped', 'spamreport']
+  const tell = (events: MailEvent[]) => {
+    const heard = events.filter(({ event }) => wanted.includes(event))
+    if (heard.length > 0) deliveries.send(heard)
+  }
   app.use(sendRoute({ mailbox, apiKey, now, failures, tell, onChange: kept.keep }))
   app.use(mailboxRoutes(mailbox.messages))
   const publicKey = keys.publicKey
