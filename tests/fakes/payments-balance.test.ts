@@ -116,6 +116,19 @@ describe('a payout', () => {
   })
 })
 
+describe('a control', () => {
+  it.each<[string, object, string]>([
+    ['payout', { currency: 'eur' }, 'account is missing'],
+    ['payout', { account: 'acct', currency: 'eur', until: 'soon' }, 'until is no number'],
+    ['payout', { account: 'acct', currency: 'eur', outcome: 'lost' }, 'outcome is one of paid'],
+    ['settle-payout', { payout: 'po_nothing' }, 'No such record'],
+    ['finish-onboarding', { url: 'nowhere' }, 'url is no address'],
+    ['pay', { session: 'cs_nothing' }, 'No such record'],
+  ])('%s says what it does not understand of %j', async (name, body, sentence) => {
+    await expect(control(fake, name, body)).rejects.toThrow(sentence)
+  })
+})
+
 describe('the balance', () => {
   it('is what came in less fees, refunds, disputes and payouts', async () => {
     await pay({ amount: 12_000, applicationFee: 120 })

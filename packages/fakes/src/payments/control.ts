@@ -27,7 +27,6 @@ export function controlRoutes(given: {
   moneyControls(act, machine)
   deliveryControls(act, deliveries)
   act('advance-clock', (body) => machine.advance(numberOf(body, 'seconds', 0)))
-  act('set-clock', (body) => machine.setClock(numberOf(body, 'to', machine.realNow())))
   act('fail-next', (body) => trouble.failNext(failureOf(body)))
   act('lose-answers', (body) => trouble.loseNextAnswers(numberOf(body, 'count', 1)))
   act('hold-requests', () => trouble.holdRequests())

@@ -10,13 +10,9 @@ import { makeRefunds, type Refunds } from './refunds'
 export interface Machine extends Accounts, Checkouts, Charges, Refunds, Disputes, Payouts {
   state: FakeState
   now: () => number
-  /** Unix seconds of the clock that the provider's own started from. */
-  realNow: () => number
   /** Lets everything happen whose time has come. */
   tick: () => void
   advance: (seconds: number) => void
-  /** Sets the provider's clock, which then goes on as the machine's own does. */
-  setClock: (unixSeconds: number) => void
 }
 
 /** The provider as a state machine. `tell` is called for everything that a webhook speaks of. */
@@ -54,6 +50,5 @@ export function makeMachine(given: {
     state.clockOffsetSeconds += seconds
     tick()
   }
-  const realNow = () => now() - state.clockOffsetSeconds
-  return { ...parts, state, now, realNow, tick, advance, setClock: (to) => advance(to - now()) }
+  return { ...parts, state, now, tick, advance }
 }
