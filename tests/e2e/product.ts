@@ -1,7 +1,7 @@
 import { spawn } from 'node:child_process'
 import { resolve } from 'node:path'
 import { createInterface } from 'node:readline'
-import type { KeptMail } from '../../packages/fakes/src/mail/mail-fake'
+import type { KeptMail } from '@marram/fakes'
 
 /** The product under test, in a process of its own. */
 export interface Product {
