@@ -21,6 +21,7 @@ export interface CallOptions<K extends RouteKey> {
 export class Person {
   readonly #baseUrl: string
   readonly #cookies = new Map<string, string>()
+  readonly #lines = new Map<string, string>()
   #token = ''
 
   constructor(baseUrl: string) {
@@ -83,6 +84,16 @@ export class Person {
     return this.#cookies.get(name)
   }
 
+  /** The line in which a cookie was last set, with all that it says of it. */
+  cookieLine(name: string): string | undefined {
+    return this.#lines.get(name)
+  }
+
+  /** Puts a cookie there that somebody else was given. */
+  putCookie(name: string, value: string): void {
+    this.#cookies.set(name, value)
+  }
+
   async #fetchToken(): Promise<void> {
     const { answer } = await this.send('GET', ROUTES['session.read'].path)
     this.#token = (answer as Answer<'session.read'>).token
@@ -92,6 +103,7 @@ export class Person {
     const [pair = ''] = line.split(';')
     const at = pair.indexOf('=')
     const value = pair.slice(at + 1)
+    this.#lines.set(pair.slice(0, at), line)
     if (value) this.#cookies.set(pair.slice(0, at), value)
     else this.#cookies.delete(pair.slice(0, at))
   }
