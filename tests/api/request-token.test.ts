@@ -1,6 +1,6 @@
 import { ROUTES, pathOf, type RouteKey, type RouteSpec } from '@marram/contract'
 import { beforeAll, describe, expect, it } from 'vitest'
-import { openAcademy, signUp, type OpenAcademy, type SignedUp } from '../support/builders'
+import { PASSWORD, openAcademy, signUp, type OpenAcademy, type SignedUp } from '../support/builders'
 import { useWorld } from '../support/use-world'
 
 const world = await useWorld()
@@ -48,11 +48,21 @@ describe('a change', () => {
     expect(await venueNames()).not.toContain('Forged')
   })
 
+  it("with another visitor's token is refused, so that nobody is signed in unawares", async () => {
+    const { token } = await world.person().must('session.read')
+    const { email } = owner.account
+    const reply = await world.person().call('session.sign-in', {
+      body: { email, password: PASSWORD },
+      headers: { 'x-marram-token': token },
+    })
+    expect(reply.problem?.code).toBe('foreign-origin')
+  })
+
   it('with a token of before the sign-in is refused', async () => {
     const person = world.person()
     const { token } = await person.must('session.read')
     const { email } = owner.account
-    await person.must('session.sign-in', { body: { email, password: 'salt wind and fescue' } })
+    await person.must('session.sign-in', { body: { email, password: PASSWORD } })
     const headers = { 'x-marram-token': token }
     expect((await person.call('session.sign-out', { headers })).status).toBe(403)
   })

@@ -7,6 +7,8 @@ export interface Reply<T> {
   answer: T
   problem: ProblemDocument | null
   text: string
+  /** Where a redirect leads; empty without one. */
+  location: string
 }
 
 export interface CallOptions<K extends RouteKey> {
@@ -77,6 +79,7 @@ export class Person {
       answer: parsed,
       problem: isProblem ? (parsed as ProblemDocument) : null,
       text,
+      location: response.headers.get('location') ?? '',
     }
   }
 
