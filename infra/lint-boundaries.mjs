@@ -59,6 +59,19 @@ const perFeature = FEATURES_UPWARDS.flatMap((names, level) =>
   }),
 )
 
+/** The web's features import downwards too; only a page may reach upwards, to compose. */
+const perWebFeature = FEATURES_UPWARDS.flatMap((names, level) =>
+  names.map((name) => {
+    const forbidden = above(level)
+    if (forbidden.length === 0) return {}
+    return rule(
+      [`apps/web/src/${name}/**/*.{ts,tsx}`],
+      [pattern(forbidden, 'Features import downwards only; a page composes them.')],
+      ['**/*.page.tsx', '**/*.test.ts'],
+    )
+  }),
+)
+
 export const boundaries = [
   rule(['packages/**/*.ts'], [pattern(['**/apps/**'], 'A package imports no app.')]),
   rule(
@@ -89,6 +102,21 @@ export const boundaries = [
     ],
   ),
   ...perFeature,
+  ...perWebFeature,
+  rule(
+    ['apps/web/src/ui/**/*.{ts,tsx}'],
+    [
+      pattern(
+        ['../*', 'react-router', '@tanstack/*', '@marram/*'],
+        'A component knows no domain, router or query.',
+      ),
+    ],
+  ),
+  rule(
+    ['apps/web/src/**/*.{ts,tsx}'],
+    [pattern(['**/apps/api/**', '@marram/fakes'], 'The web knows the API by its contract only.')],
+    ['apps/web/src/ui/**', ...FEATURES_UPWARDS.flat().map((name) => `apps/web/src/${name}/**`)],
+  ),
   {
     files: ['apps/api/src/**/*.ts'],
     ignores: ['apps/api/src/platform/clock.ts', '**/*.test.ts'],

@@ -1,9 +1,9 @@
-import { existsSync, readFileSync, rmSync } from 'node:fs'
+import { existsSync, readFileSync } from 'node:fs'
 import { dirname, join, resolve } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { ensurePostgres } from './postgres.mjs'
 import { say } from './console.mjs'
-import { run } from './run.mjs'
+import { forgetDemo } from './demo-data.mjs'
 
 const root = resolve(dirname(fileURLToPath(import.meta.url)), '..')
 const folder = join(root, '.marram', 'demo')
@@ -14,10 +14,8 @@ if (isRunning()) {
   process.exit(1)
 }
 const cluster = await ensurePostgres({ folder, say })
-const server = `--maintenance-db=${cluster.url('postgres')}`
-await run(join(cluster.bin, 'dropdb'), ['--if-exists', '--force', server, 'marram'])
+await forgetDemo({ folder, cluster })
 await cluster.stop()
-rmSync(join(folder, 'fakes'), { recursive: true, force: true })
 say('The demo is forgotten. The next "npm start" loads it anew.')
 
 function isRunning() {

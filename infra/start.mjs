@@ -4,6 +4,7 @@ import { fileURLToPath } from 'node:url'
 import { ensureBuild } from './build.mjs'
 import { makeChildren, waitUntilReady } from './children.mjs'
 import { say, step } from './console.mjs'
+import { forgetDemo, isHalfLoaded, whileLoading } from './demo-data.mjs'
 import { ensurePackages } from './packages.mjs'
 import { ensurePostgres } from './postgres.mjs'
 import { Problem, explain } from './problem.mjs'
@@ -53,6 +54,11 @@ async function main() {
 }
 
 async function up({ cluster, children, lock }) {
+  if (isHalfLoaded(folder)) {
+    await step('Clearing a demo that was cut off while it was loaded', () =>
+      forgetDemo({ folder, cluster }),
+    )
+  }
   const secrets = readSecrets(folder)
   const port = await choosePort(process.env.MARRAM_PORT)
   const ports = await chooseFakePorts(folder)
@@ -67,12 +73,14 @@ async function up({ cluster, children, lock }) {
   const env = { ...base, MARRAM_MAIL_WEBHOOK_PUBLIC_KEY: fakes.mailWebhookPublicKey }
 
   const [program, args] = entry('manage')
-  await step('Bringing the schema up to date', () =>
-    run(program, [...args, 'prepare'], { env, cwd: root }),
-  )
-  await step('Looking after the demo (half a minute the first time)', () =>
-    run(program, [...args, 'demo'], { env, cwd: root }),
-  )
+  await whileLoading(folder, async () => {
+    await step('Bringing the schema up to date', () =>
+      run(program, [...args, 'prepare'], { env, cwd: root }),
+    )
+    await step('Looking after the demo (half a minute the first time)', () =>
+      run(program, [...args, 'demo'], { env, cwd: root }),
+    )
+  })
   children.start('web', ...entry('main'), { env, cwd: root })
   children.start('worker', ...entry('worker'), { env, cwd: root })
   await waitUntilReady(`http://127.0.0.1:${port}/readyz`, { seconds: 30 })

@@ -12,20 +12,23 @@ const MIGRATIONS = resolve('migrations')
 /** The cluster is thrown away and listens on loopback; its passwords guard nothing. */
 export const TEST_PASSWORDS = { owner: 'owner', app: 'app', dispatch: 'dispatch' }
 
+/** The migrated database that every test database is a copy of. */
+export interface Template {
+  superuserUrl: string
+  databasePort: number
+  template: string
+}
+
 declare module 'vitest' {
   export interface ProvidedContext {
-    superuserUrl: string
-    databasePort: number
-    template: string
+    superuserUrl: Template['superuserUrl']
+    databasePort: Template['databasePort']
+    template: Template['template']
   }
 }
 
 /** Makes sure that a migrated database stands ready, which each test file takes a copy of. */
-export async function makeTemplate(): Promise<{
-  superuserUrl: string
-  databasePort: number
-  template: string
-}> {
+export async function makeTemplate(): Promise<Template> {
   const cluster = await ensurePostgres({ folder: resolve('.marram/test'), say: () => {} })
   const superuser = connect({ url: cluster.url('postgres'), poolSize: 1, name: 'tests' })
   await makeRoles(superuser, TEST_PASSWORDS)

@@ -13,7 +13,7 @@ import { connect } from '../../apps/api/src/platform/db/connect'
 import { makeDispatcher } from '../../apps/api/src/platform/outbox/dispatch'
 import { sweepDue } from '../../apps/api/src/platform/outbox/sweep'
 import type { Services } from '../../apps/api/src/platform/services'
-import { takeDatabase, type TestDatabase } from './database'
+import type { TestDatabase } from './copy-database'
 import { watchErrors, type ErrorLine } from './error-lines'
 import { startFakes, type Fakes } from './fakes'
 import { Person } from './person'
@@ -23,6 +23,7 @@ import { testConfig } from './test-config'
 export const WORLD_BEGINS = new Date('2031-03-03T09:00:00.000Z')
 
 export interface WorldOptions {
+  database: TestDatabase
   /** Small on purpose: a query that strays from its transaction finds no connection left. */
   poolSize?: number
   begins?: Date
@@ -50,8 +51,8 @@ export interface World extends Fakes {
   close(): Promise<void>
 }
 
-export async function makeWorld(options: WorldOptions = {}): Promise<World> {
-  const database = await takeDatabase()
+export async function makeWorld(options: WorldOptions): Promise<World> {
+  const { database } = options
   const clock = makeMovableClock(options.begins ?? WORLD_BEGINS)
   // The address must be known before what answers at it can be made.
   const server = createServer()

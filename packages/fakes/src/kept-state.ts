@@ -5,11 +5,15 @@ const SOON_MS = 300
 
 /** Keeps a stand-in's state in a file, so that it survives a restart as the database does. */
 export interface KeptState {
-  read(): unknown
   /** Writes soon; many changes at once are written together. */
-  keep(): void
+  keep: () => void
   /** Writes now, at the end. */
-  flush(): void
+  flush: () => void
+}
+
+/** What was kept before, as it was written; undefined where nothing was. */
+export function readKept(file: string | undefined): unknown {
+  return file && existsSync(file) ? JSON.parse(readFileSync(file, 'utf8')) : undefined
 }
 
 export function keepState(file: string | undefined, snapshot: () => unknown): KeptState {
@@ -23,7 +27,6 @@ export function keepState(file: string | undefined, snapshot: () => unknown): Ke
     renameSync(`${file}.new`, file)
   }
   return {
-    read: () => (file && existsSync(file) ? JSON.parse(readFileSync(file, 'utf8')) : undefined),
     keep() {
       if (file) timer ??= setTimeout(write, SOON_MS)
     },

@@ -1,19 +1,30 @@
 import { createServer, type Server } from 'node:http'
-import type { Express } from 'express'
+import express, { type Express } from 'express'
+import { UnsafeError, isLoopback, refuseOtherNames } from './safety'
 
-/** Starts an app on loopback. A stand-in is never reachable from elsewhere. */
+/** An app for a stand-in: it answers to names of this machine only. */
+export function makeApp(): Express {
+  const app = express()
+  app.disable('x-powered-by')
+  app.use(refuseOtherNames)
+  return app
+}
+
+/** Starts an app on loopback. @throws UnsafeError for any other host. */
 export async function listenOnLoopback(
   app: Express,
-  port = 0,
+  { host = '127.0.0.1', port = 0 }: { host?: string | undefined; port?: number | undefined },
 ): Promise<{ server: Server; url: string; port: number }> {
+  if (!isLoopback(host)) throw new UnsafeError('A stand-in listens on this machine only.')
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {
     server.once('error', reject)
-    server.listen(port, '127.0.0.1', resolve)
+    server.listen(port, host, resolve)
   })
   const address = server.address()
   if (address === null || typeof address === 'string') throw new Error('no address to listen on')
-  return { server, port: address.port, url: `http://127.0.0.1:${address.port}` }
+  const name = host.includes(':') ? `[${host}]` : host
+  return { server, port: address.port, url: `http://${name}:${address.port}` }
 }
 
 export function closeServer(server: Server): Promise<void> {

@@ -1,6 +1,7 @@
 import { rolesIn } from '../academies/academies'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
+import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import {
   changeClinic,
@@ -24,8 +25,10 @@ export function clinicHandlers(services: Services): Handlers {
   const academyIdOf = (context: RequestContext) => asAcademy(context).academyId
 
   const readerOf = async (context: RequestContext): Promise<PageReader> => {
-    const { academyId, academySlug: slug, account } = asAcademy(context)
+    const { academySlug: slug, account } = context
+    invariant(slug, 'a public page has an address')
     if (!account) return { slug, maySeeUnpublished: false }
+    const { academyId } = asAcademy(context)
     const roles = await rolesIn(services, { academyId, accountId: account.id })
     return { slug, maySeeUnpublished: roles.some((role) => role !== 'golfer') }
   }

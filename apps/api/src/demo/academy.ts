@@ -1,4 +1,3 @@
-import { signUp } from '../accounts/accounts'
 import { changeSettings, openAcademy, publishAcademy } from '../academies/academies'
 import { connectPayments, readPaymentsAccount } from '../checkout/payments-account'
 import { draftClinic, publishClinic } from '../clinics/clinics'
@@ -7,7 +6,7 @@ import type { Services } from '../platform/services'
 import { findAcademyBySlug } from '../platform/tenancy/look-ups'
 import { addArea, addVenue } from '../venues/venues'
 import type { DemoProvider } from './demo-provider'
-import { DEMO_PASSWORD } from './people'
+import { makePerson } from './golfers'
 import type { AcademyScript, ClinicScript } from './script'
 import { joinStaff } from './staff'
 
@@ -37,8 +36,8 @@ export async function buildAcademy(
 ): Promise<BuiltAcademy> {
   const [owner] = script.staff
   if (!owner) throw new Error('an academy has an owner')
-  const account = (person: { name: string; email: string }) =>
-    signUp(services, { ...person, password: DEMO_PASSWORD })
+  const account = async (person: { name: string; email: string }) =>
+    (await makePerson(services, { name: person.name, email: person.email })).id
   const ownerId = await account({ name: owner.name, email: owner.email })
   await openAcademy(services, { accountId: ownerId, wanted: script.open })
   const academyId = await findAcademyBySlug(services.db, script.open.slug)

@@ -1,4 +1,5 @@
 import type { PaymentsProvider } from '../checkout/provider'
+import { systemClock, type Clock } from '../platform/clock'
 
 /** The payments stand-in as the demo uses it: people of the demo pay without a browser. */
 export interface DemoProvider extends PaymentsProvider {
@@ -9,14 +10,15 @@ export interface DemoProvider extends PaymentsProvider {
 }
 
 /**
- * Adds to the provider what only the stand-in can do. Its webhooks are held back while the season
- * is played: the loader tells the use cases itself.
+ * Adds to the provider what only the stand-in can do. Its clock goes with the demo's, and its webhooks
+ * are held back while the season is played: the loader tells the use cases itself.
  */
 export async function makeDemoProvider(
   provider: PaymentsProvider,
-  url: string,
+  { url, clock }: { url: string; clock: Clock },
 ): Promise<DemoProvider & { release(): Promise<void> }> {
   let onboarding = ''
+  let offsetSeconds = 0
   const control = async (name: string, body: object = {}) => {
     const response = await fetch(`${url}/_control/${name}`, {
       method: 'POST',
@@ -27,9 +29,19 @@ export async function makeDemoProvider(
       throw new Error(`the payments stand-in refused ${name}: ${await response.text()}`)
     }
   }
+  const keepTime = async (at: Date) => {
+    const wanted = Math.round((at.getTime() - systemClock.now().getTime()) / 1000)
+    if (wanted !== offsetSeconds)
+      await control('advance-clock', { seconds: wanted - offsetSeconds })
+    offsetSeconds = wanted
+  }
   await control('mute-webhooks')
   return {
     ...provider,
+    async createCheckout(checkout) {
+      await keepTime(clock.now())
+      return provider.createCheckout(checkout)
+    },
     async createOnboarding(link) {
       onboarding = await provider.createOnboarding(link)
       return onboarding
@@ -43,6 +55,9 @@ export async function makeDemoProvider(
         card: '4242424242424242',
         created: Math.floor(at.getTime() / 1000),
       }),
-    release: () => control('unmute-webhooks'),
+    async release() {
+      await keepTime(systemClock.now())
+      await control('unmute-webhooks')
+    },
   }
 }

@@ -1,5 +1,4 @@
-import { signUp } from '../accounts/accounts'
-import { findAccountById } from '../accounts/accounts'
+import { makeLink, signUp, verifyEmail } from '../accounts/accounts'
 import { addMyDependant, type Person } from '../golfers/golfers'
 import type { Services } from '../platform/services'
 import { CHILD_NAMES, FIRST_NAMES } from './names'
@@ -51,14 +50,15 @@ export async function makeGolfers(
   return golfers
 }
 
-/** Somebody with an account, whose password is the demo's. */
+/** Somebody with an account and a confirmed address, whose password is the demo's. */
 export async function makePerson(
   services: Services,
   { name, email }: { name: string; email: string },
 ): Promise<Person> {
   const id = await signUp(services, { name, email, password: DEMO_PASSWORD })
-  const account = await findAccountById(services.db, id)
-  return { id, name, email, isVerified: account?.emailVerifiedAt !== null }
+  const link = await makeLink(services, { accountId: id, purpose: 'verify' })
+  if (link) await verifyEmail(services, { secret: link.secret, accountId: id })
+  return { id, name, email, isVerified: true }
 }
 
 export async function addChild(

@@ -38,7 +38,10 @@ export async function loadDemo(services: Services, { clock, say }: DemoLoading):
   const today = clock.now()
   const { payments: paymentsConfig } = services.config
   if (!paymentsConfig.url) throw new Error('The demo needs the payments stand-in.')
-  const provider = await makeDemoProvider(makeStripeProvider(paymentsConfig), paymentsConfig.url)
+  const provider = await makeDemoProvider(makeStripeProvider(paymentsConfig), {
+    url: paymentsConfig.url,
+    clock,
+  })
   const mail = onlyLately(services, today)
   const dispatch = connect({ url: services.config.database.dispatchUrl, poolSize: 1, name: 'demo' })
   const dispatcher = makeDispatcher({

@@ -2,18 +2,21 @@ import type { Parsed } from '@marram/contract'
 import { joinAsGolfer } from '../academies/academies'
 import {
   addDependant,
+  checkOwnGolfer,
   ensureOwnGolfer,
   findGolfer,
   findOwnGolfer,
   recordConsent,
-  type Golfer,
   type Person,
 } from '../golfers/golfers'
 import { Problem, notFound } from '../platform/errors'
 import type { Services } from '../platform/services'
+import { together } from '../platform/tenancy/together'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
-import { checkFit, findOnSale, takePlaces } from './hold'
+import { refuseFull, takePlaces } from './hold'
 import type { EndedBecause, Enrolment, Place } from './models'
+import { checkFit, findOnSale } from './on-sale'
+import { readStanding, type GolferToPlace } from './on-sale-queries'
 import {
   confirmSeats,
   findActiveEnrolment,
@@ -52,47 +55,62 @@ async function tryHold(
   given: { academyId: string; person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
 ): Promise<string> {
   const { person, wanted } = given
+  const { for: whom, clinicId } = wanted
   return inAcademy(services.db, given.academyId, async (trx) => {
     const now = services.clock.now()
-    const onSale = await findOnSale(trx, wanted, now)
-    await joinAsGolfer(trx, { accountId: person.id, now })
-    const golfer = await golferFor(services, trx, given)
+    const golferId = whom.kind === 'golfer' ? whom.golferId : null
+    const [onSale, standing] = await together(
+      findOnSale(trx, wanted, now),
+      readStanding(trx, { accountId: person.id, golferId, clinicId }),
+    )
+    if (!standing.isMember) await joinAsGolfer(trx, { accountId: person.id, now })
+    const known = whom.kind === 'new' ? null : standing.golfer
+    const golfer = await golferFor(services, trx, { person, whom, known })
     checkFit(golfer, onSale)
     const sessionIds = onSale.taken.map(({ id }) => id)
-    const had = await findActiveEnrolment(trx, { golferId: golfer.id, sessionIds })
+    const had = known
+      ? standing.active.find((active) => active.sessionIds.some((id) => sessionIds.includes(id)))
+      : await findActiveEnrolment(trx, { golferId: golfer.id, sessionIds })
     if (had?.state === 'held' && had.takenBy === person.id && had.kind === onSale.kind) {
       return had.id
     }
     if (had) throw new Problem('already-has-place', `${golfer.name} has a place there already.`)
+    refuseFull(onSale)
     const { waiver, holdMinutes } = onSale.academy
     const consent = { golferId: golfer.id, kind: 'waiver', wording: waiver } as const
-    await recordConsent(trx, { ...consent, givenBy: person.id, now })
-    return takePlaces(services, trx, {
-      onSale,
-      golferId: golfer.id,
-      takenBy: person.id,
-      heldUntil: new Date(now.getTime() + holdMinutes * 60_000),
-      isOffer: false,
-    })
+    const [, id] = await together(
+      recordConsent(trx, { ...consent, givenBy: person.id, now }),
+      takePlaces(services, trx, {
+        onSale,
+        golferId: golfer.id,
+        takenBy: person.id,
+        heldUntil: new Date(now.getTime() + holdMinutes * 60_000),
+        isOffer: false,
+      }),
+    )
+    return id
   })
 }
 
 async function golferFor(
   services: Services,
   trx: AcademyTrx,
-  { person, wanted }: { person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
-): Promise<Golfer> {
-  const { for: whom } = wanted
+  given: {
+    person: Person
+    whom: Parsed<'enrolments.hold', 'body'>['for']
+    known: GolferToPlace | null
+  },
+): Promise<GolferToPlace> {
+  const { person, whom, known } = given
   switch (whom.kind) {
     case 'me': {
-      const handicap = whom.handicap
-      return ensureOwnGolfer(services, trx, {
-        person,
-        ...(handicap === undefined ? {} : { handicap }),
-      })
+      const { handicap } = whom
+      const isNews = handicap !== undefined && handicap !== known?.handicap
+      if (known && !isNews) return known
+      return ensureOwnGolfer(services, trx, { person, ...(isNews ? { handicap } : {}) })
     }
     case 'golfer':
-      return findOwnGolfer(trx, { golferId: whom.golferId, accountId: person.id })
+      return checkOwnGolfer(known, person.id)
     case 'new':
       return addDependant(services, trx, { guardianId: person.id, dependant: whom.dependant })
   }
@@ -111,6 +129,7 @@ export async function givePlaces(
     const golfer = await findGolfer(trx, wanted.golferId)
     if (!golfer) throw notFound('golfer')
     if (!wanted.isException) checkFit(golfer, onSale)
+    refuseFull(onSale)
     const id = await takePlaces(services, trx, {
       onSale,
       golferId: golfer.id,

@@ -1,8 +1,8 @@
 import { useMutation } from '@tanstack/react-query'
 import type { Sent } from '@marram/contract'
 import { call } from '../api/client'
+import { useAcademyMutation } from '../api/mutation'
 import { routeQuery } from '../api/query'
-import { useAcademyMutation } from '../enrolments/queries'
 
 export const giveUpQuoteQuery = (academy: string, enrolmentId: string) =>
   routeQuery('checkout.quote-giving-up', { academy, params: { enrolmentId } })

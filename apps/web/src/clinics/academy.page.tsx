@@ -18,7 +18,7 @@ import { academyPageQuery, type AcademyPage, type PageClinic } from './queries'
 export const loader =
   (client: QueryClient) =>
   ({ params }: LoaderFunctionArgs) =>
-    client.ensureQueryData(academyPageQuery(params['academy'] ?? ''))
+    client.query({ ...academyPageQuery(params['academy'] ?? ''), staleTime: 'static' })
 
 export default function AcademyPageView() {
   const { academy: slug = '' } = useParams()

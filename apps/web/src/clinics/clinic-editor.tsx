@@ -1,5 +1,5 @@
 import { keepPreviousData, useQuery } from '@tanstack/react-query'
-import { useDeferredValue, type ReactNode } from 'react'
+import { useDeferredValue } from 'react'
 import type { Answer } from '@marram/contract'
 import { makeFormat } from '../academies/format'
 import type { Academy } from '../academies/queries'
@@ -12,17 +12,22 @@ import { ClinicPreview } from './clinic-preview'
 import { ClinicSentence } from './clinic-sentence'
 import { patternOf, type Draft } from './draft'
 
-/** Writing a clinic: the sentence, what it is called, and every date as it is being written. */
-export function ClinicEditor(props: {
-  academy: Academy
+/** What the sentence's words choose from. */
+export interface EditorChoices {
   venues: Answer<'venues.list'>['venues']
   coaches: Answer<'coaches.list'>['coaches']
-  draft: Draft
-  onChange: (change: Partial<Draft>) => void
-  errors: Readonly<Record<string, string>>
-  clinicId?: string
-  children?: ReactNode
-}) {
+}
+
+/** Writing a clinic: the sentence, what it is called, and every date as it is being written. */
+export function ClinicEditor(
+  props: EditorChoices & {
+    academy: Academy
+    draft: Draft
+    onChange: (change: Partial<Draft>) => void
+    errors: Readonly<Record<string, string>>
+    clinicId?: string
+  },
+) {
   const { academy, venues, coaches, draft, onChange, errors, clinicId } = props
   const pattern = useDeferredValue(patternOf(draft))
   const zone = venues.find(({ id }) => id === draft.venueId)?.zone ?? academy.zone
@@ -72,7 +77,6 @@ export function ClinicEditor(props: {
           />
         </div>
       </div>
-      {props.children}
       {preview.isError && <Notice kind="flag">{sentenceOf(preview.error)}</Notice>}
       {preview.isPending && pattern && <SkeletonRows rows={4} />}
       {preview.data && (

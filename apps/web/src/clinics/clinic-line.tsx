@@ -58,9 +58,8 @@ function priceOf(clinic: PageClinic, format: Format) {
   )
 }
 
+/** "10 sessions", or "last 4 sessions" of a run that is under way. */
 function countOf({ sessionsAhead, sessionsTotal }: PageClinic): string {
-  if (sessionsAhead === 1) return '1 session'
-  return sessionsAhead === sessionsTotal
-    ? `${sessionsAhead} sessions`
-    : `the last ${sessionsAhead} sessions`
+  const many = `${sessionsAhead} session${sessionsAhead === 1 ? '' : 's'}`
+  return sessionsAhead === sessionsTotal ? many : `last ${many}`
 }

@@ -1,3 +1,4 @@
+import { Fragment } from 'react'
 import type { Answer } from '@marram/contract'
 import { formatDuration } from '@marram/schedule/format'
 import { InputWord, SelectWord, Sentence } from '../ui/sentence'
@@ -41,25 +42,17 @@ export function ClinicSentence(props: {
   }
   return (
     <Sentence>
-      Every{' '}
       <SelectWord
         label="How often"
         value={draft.interval}
         onChange={(interval) => onChange({ interval })}
         options={[
-          { value: '1', label: 'single' },
-          { value: '2', label: 'second' },
-          { value: '4', label: 'fourth' },
+          { value: '1', label: 'Every' },
+          { value: '2', label: 'Every second' },
+          { value: '4', label: 'Every fourth' },
         ]}
       />{' '}
-      <SelectWord
-        label="Day"
-        value={draft.weekdays[0] ?? 'MO'}
-        onChange={(day) =>
-          onChange({ weekdays: [day, ...draft.weekdays.slice(1).filter((had) => had !== day)] })
-        }
-        options={DAYS}
-      />{' '}
+      <WeekdayWords weekdays={draft.weekdays} onChange={(weekdays) => onChange({ weekdays })} />{' '}
       from{' '}
       <InputWord label="First day" type="date" value={draft.startsOnLocal} onChange={chooseDate} />{' '}
       at{' '}
@@ -234,7 +227,8 @@ export function ClinicSentence(props: {
           <InputWord
             label="Price of the run"
             value={draft.runPrice}
-            size={7}
+            placeholder="108.00"
+            inputMode="decimal"
             onChange={(runPrice) => onChange({ runPrice })}
             isWrong={draft.runPrice === ''}
           />{' '}
@@ -248,7 +242,8 @@ export function ClinicSentence(props: {
           <InputWord
             label="Price of one session"
             value={draft.dropInPrice}
-            size={7}
+            placeholder="18.00"
+            inputMode="decimal"
             onChange={(dropInPrice) => onChange({ dropInPrice })}
             isWrong={draft.dropInPrice === ''}
           />{' '}
@@ -257,6 +252,49 @@ export function ClinicSentence(props: {
       )}
       .
     </Sentence>
+  )
+}
+
+/** One day of the week, or several: "Tuesday and Thursday". */
+function WeekdayWords(props: {
+  weekdays: readonly string[]
+  onChange: (weekdays: string[]) => void
+}) {
+  const { weekdays, onChange } = props
+  const [first = 'MO', ...others] = weekdays
+  const left = (own: string) =>
+    DAYS.filter(({ value }) => value === own || !weekdays.includes(value))
+  return (
+    <>
+      <SelectWord
+        label="Day"
+        value={first}
+        onChange={(day) => onChange([day, ...others])}
+        options={left(first)}
+      />
+      {others.map((day, index) => (
+        <Fragment key={day}>
+          {' and '}
+          <SelectWord
+            label={`Day ${index + 2}`}
+            value={day}
+            onChange={(next) =>
+              onChange([first, ...others.map((had) => (had === day ? next : had)).filter(Boolean)])
+            }
+            options={[...left(day), { value: '', label: 'no other day' }]}
+          />
+        </Fragment>
+      ))}{' '}
+      {weekdays.length < 3 && (
+        <button
+          type="button"
+          className="pick more"
+          onClick={() => onChange([...weekdays, left('')[0]?.value ?? first])}
+        >
+          and …<span className="vh"> another day</span>
+        </button>
+      )}
+    </>
   )
 }
 

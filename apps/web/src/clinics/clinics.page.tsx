@@ -51,7 +51,7 @@ export default function ClinicsPage() {
         <EmptyState>No clinics yet. Say when, where and for how many.</EmptyState>
       ) : (
         <div className="card">
-          <table className="sc jv">
+          <table className="sc stack">
             <thead>
               <tr>
                 <th scope="col">Clinic</th>
@@ -92,7 +92,7 @@ export default function ClinicsPage() {
                       <Initials key={coach.id} of={coach.initials} />
                     ))}
                   </td>
-                  <td>
+                  <td data-label="Held">
                     {clinic.sessionsHeld}/{clinic.sessionsTotal}
                   </td>
                   <td className="l">

@@ -1,4 +1,4 @@
-import { Fragment } from 'react'
+import { Fragment, type CSSProperties } from 'react'
 import { Link } from 'react-router'
 import { formatLocalDay } from '@marram/schedule/format'
 import type { Format } from '../academies/format'
@@ -6,6 +6,7 @@ import { paths } from '../paths'
 import { Drawing } from '../ui/drawing'
 import { PlaceTicks } from '../ui/place-ticks'
 import { dayOfInstant, hoursOf, minutesOfDay, type Board, type BoardSession } from './board-times'
+import { useNow } from '../ui/use-now'
 
 const MOST_TICKS = 12
 
@@ -15,10 +16,18 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
   const hours = hoursOf(board)
   const span = (hours.to - hours.from) * 60
   const at = (minutes: number) => ((minutes - hours.from * 60) / span) * 100
-  const today = dayOfInstant(new Date(Date.now()).toISOString(), board.zone)
+  const now = new Date(useNow()).toISOString()
+  const today = dayOfInstant(now, board.zone)
+  const nowMinutes = minutesOfDay(now, board.zone)
+  const isNowShown = nowMinutes > hours.from * 60 && nowMinutes < hours.to * 60
   return (
     <>
-      <div className="board" role="group" aria-label="Week board">
+      <div
+        className="board"
+        role="group"
+        aria-label="Week board"
+        style={{ '--hours': hours.to - hours.from } as CSSProperties}
+      >
         <div className="hd">Day</div>
         <div className="hd">Area</div>
         <div className="hrs" aria-hidden>
@@ -58,6 +67,9 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
                   aria-label={`Sunset ${format.time(duskAt)}`}
                 />
               )}
+              {dayLocal === today && isNowShown && (
+                <span className="nowline" style={{ left: `${at(nowMinutes)}%` }} />
+              )}
               {board.areas.map((area, index) => (
                 <div key={area.id} className="lane">
                   {duskAt && !area.hasLamps && !area.isCovered && (
@@ -90,10 +102,28 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
           </Fragment>
         ))}
       </div>
-      <p className="note soft my-3">
-        Fog is after sunset where there are no lamps. A red slip runs past sunset without them.
-      </p>
+      <BoardKey />
     </>
+  )
+}
+
+/** What is drawn, in words. */
+function BoardKey() {
+  return (
+    <ul className="boardkey">
+      <li>
+        <i className="k-line" /> Sunset
+      </li>
+      <li>
+        <i className="k-fog" /> Too dark, no lamps here
+      </li>
+      <li>
+        <PlaceTicks taken={2} capacity={3} /> Place taken, place free
+      </li>
+      <li className="flagtext">
+        <Drawing of="flag" className="inline-flag" /> Runs past sunset
+      </li>
+    </ul>
   )
 }
 
@@ -112,7 +142,7 @@ function Slip(props: {
   const { academy, session, zone, format, at } = props
   const from = at(minutesOfDay(session.startsAt, zone))
   const to = at(minutesOfDay(session.endsAt, zone))
-  const isDone = Date.parse(session.endsAt) < Date.now()
+  const isDone = Date.parse(session.endsAt) < useNow()
   const isOff = session.state === 'called-off'
   const isWarning = session.darkMinutes > 0 && !isDone && !isOff
   const kind = isOff ? 'done less' : isWarning ? 'warn' : isDone ? 'done' : ''

@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query'
 import { Link, useParams, useSearchParams } from 'react-router'
 import { formatLocalDay } from '@marram/schedule/format'
-import { makeFormat } from '../academies/format'
+import { makeFormat, type Format } from '../academies/format'
 import { academyQuery } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
@@ -10,6 +10,7 @@ import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
 import { PageHead } from '../ui/page-head'
 import { ErrorState, SkeletonRows } from '../ui/states'
+import type { Board } from './board-times'
 import { boardQuery } from './queries'
 import { DayBoard } from './day-board'
 import { WeekBoard } from './week-board'
@@ -38,7 +39,18 @@ export default function WeekPage() {
     <main id="main" className="wrap">
       <PageHead
         title={title}
-        sub={board.data && <Fact sessions={board.data.sessions} />}
+        sub={
+          board.data &&
+          academy.data && (
+            <>
+              <Fact sessions={board.data.sessions} />{' '}
+              <SunsetFact
+                board={board.data}
+                format={makeFormat({ ...academy.data, zone: board.data.zone })}
+              />
+            </>
+          )
+        }
         actions={
           <>
             <Link
@@ -109,6 +121,19 @@ function Fact({
           {dark === 1 ? 'One session runs' : `${dark} sessions run`} past sunset without lamps.
         </span>
       )}
+    </>
+  )
+}
+
+/** "Sunset moves from 16:09 on Monday to 16:05 on Sunday." */
+function SunsetFact({ board, format }: { board: Board; format: Format }) {
+  const first = board.days[0]?.duskAt
+  const last = board.days.at(-1)?.duskAt
+  if (!first || !last) return null
+  return (
+    <>
+      Sunset moves from <b className="text-haar">{format.time(first)}</b> on Monday to{' '}
+      <b className="text-haar">{format.time(last)}</b> on Sunday.
     </>
   )
 }

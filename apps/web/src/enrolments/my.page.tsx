@@ -10,15 +10,16 @@ import { Button, buttonClass } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { EmptyState } from '../ui/states'
 import { call } from '../api/client'
-import { myPlacesQuery, useAcademyMutation, type Enrolment, type MyPlaces } from './queries'
+import { useAcademyMutation } from '../api/mutation'
+import { myPlacesQuery, type Enrolment, type MyPlaces } from './queries'
 
 export const loader =
   (client: QueryClient) =>
   ({ params }: LoaderFunctionArgs) => {
     const slug = params['academy'] ?? ''
     return Promise.all([
-      client.ensureQueryData(myPlacesQuery(slug)),
-      client.ensureQueryData(academyPageQuery(slug)),
+      client.query({ ...myPlacesQuery(slug), staleTime: 'static' }),
+      client.query({ ...academyPageQuery(slug), staleTime: 'static' }),
     ])
   }
 

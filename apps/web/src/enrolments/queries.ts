@@ -1,6 +1,6 @@
 import type { Answer, Sent } from '@marram/contract'
-import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { call } from '../api/client'
+import { useAcademyMutation } from '../api/mutation'
 import { routeQuery } from '../api/query'
 
 export type Enrolment = Answer<'enrolments.read'>
@@ -11,18 +11,6 @@ export const myPlacesQuery = (academy: string) => routeQuery('enrolments.mine', 
 export const enrolmentQuery = (academy: string, enrolmentId: string) =>
   routeQuery('enrolments.read', { academy, params: { enrolmentId } })
 export const myGolfersQuery = (academy: string) => routeQuery('golfers.mine', { academy })
-
-/** Everything an academy said is asked for again after a change there. */
-export function useAcademyMutation<Input, Result>(
-  academy: string,
-  mutationFn: (input: Input) => Promise<Result>,
-) {
-  const client = useQueryClient()
-  return useMutation({
-    mutationFn,
-    onSuccess: () => client.invalidateQueries({ queryKey: [academy] }),
-  })
-}
 
 export const useHold = (academy: string) =>
   useAcademyMutation(academy, (body: Sent<'enrolments.hold', 'body'>) =>

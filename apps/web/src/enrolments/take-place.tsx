@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useRef, useState, type FormEvent } from 'react'
+import { useRef, useState, type SubmitEvent } from 'react'
 import { useNavigate } from 'react-router'
 import { taxInWords, type Format } from '../academies/format'
 import { useSession } from '../accounts/queries'
@@ -15,7 +15,7 @@ import { Picks } from '../ui/picks'
 import { Steps } from '../ui/steps'
 import { WaitlistOffer } from './waitlist-offer'
 import { myGolfersQuery, useHold } from './queries'
-import { amountOf, refusalFor, whatPicks, whoIsFor } from './what-and-who'
+import { amountOf, refusalFor, whatPicks, whoFits, whoIsFor } from './what-and-who'
 
 /** What, Who, Pay: the panel beside a clinic. Signing in happens on the way. */
 export function TakePlace({ page, format }: { page: ClinicPage; format: Format }) {
@@ -31,13 +31,14 @@ export function TakePlace({ page, format }: { page: ClinicPage; format: Format }
   const [what, setWhat] = useState(() => (clinic.saleMode === 'drop-in' ? 'session' : 'run'))
   const ahead = clinic.sessions.filter(({ isPast, state }) => !isPast && state === 'planned')
   const [sessionId, setSessionId] = useState(ahead[0]?.id ?? '')
-  const [who, setWho] = useState('me')
+  const [picked, setWho] = useState<string | null>(null)
   const [handicap, setHandicap] = useState('')
   const [dependant, setDependant] = useState<DependantDraft>(EMPTY_DEPENDANT)
   const [hasAccepted, setHasAccepted] = useState(false)
   const [problem, setProblem] = useState<ApiProblem | null>(null)
   const [isBusy, setIsBusy] = useState(false)
 
+  const who = picked ?? whoFits(golfers.data?.golfers ?? [], clinic)
   const chosen = what === 'session' ? ahead.find(({ id }) => id === sessionId) : undefined
   const amount = amountOf(clinic, what)
   const isFull =
@@ -45,7 +46,7 @@ export function TakePlace({ page, format }: { page: ClinicPage; format: Format }
       ? (chosen?.taken ?? 0) >= (chosen?.capacity ?? 1)
       : ahead.some(({ taken, capacity }) => taken >= capacity)
 
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault()
     setProblem(null)
     setIsBusy(true)

@@ -61,6 +61,14 @@ export function refusalFor(golfer: OwnGolfer | null, clinic: Clinic): { refusal?
     : {}
 }
 
+/** Who it is most likely for: the person where they fit, else somebody of the family who does. */
+export function whoFits(golfers: readonly OwnGolfer[], clinic: Clinic): string {
+  const me = golfers.find(({ isMe }) => isMe) ?? null
+  if (!refusalFor(me, clinic).refusal) return 'me'
+  const other = golfers.find((golfer) => !golfer.isMe && !refusalFor(golfer, clinic).refusal)
+  return other?.id ?? 'new'
+}
+
 /** The golfer part of a hold. */
 export function whoIsFor(given: {
   who: string

@@ -1,11 +1,11 @@
 import { useQuery } from '@tanstack/react-query'
-import { useDeferredValue, useState, type FormEvent } from 'react'
+import { useDeferredValue, useState, type SubmitEvent } from 'react'
 import { Link, useNavigate, useParams } from 'react-router'
 import type { Sent } from '@marram/contract'
 import { call } from '../api/client'
+import { useAcademyMutation } from '../api/mutation'
 import { routeQuery } from '../api/query'
 import { ApiProblem, sentenceOf } from '../api/problem'
-import { useAcademyMutation } from '../enrolments/queries'
 import { useTitle } from '../layouts/accent'
 import { useMay } from '../layouts/staff.layout'
 import { paths } from '../paths'
@@ -62,7 +62,7 @@ export default function GolfersPage() {
         </EmptyState>
       ) : (
         <div className="card">
-          <table className="sc jv">
+          <table className="sc stack">
             <thead>
               <tr>
                 <th scope="col">Golfer</th>
@@ -83,10 +83,10 @@ export default function GolfersPage() {
                     <Link to={paths.golfer(slug, golfer.id)}>{golfer.name}</Link>
                     {golfer.isJunior && <small>Junior</small>}
                   </th>
-                  <td className="l">{golfer.email ?? '–'}</td>
-                  <td>{golfer.handicap ?? '–'}</td>
-                  <td className="l">{golfer.guardianName ?? '–'}</td>
-                  <td>{golfer.placesAhead === 0 ? '–' : golfer.placesAhead}</td>
+                  <Cell label="" value={golfer.email} isText />
+                  <Cell label="Handicap" value={golfer.handicap} />
+                  <Cell label="Guardian" value={golfer.guardianName} isText />
+                  <Cell label="Sessions ahead" value={golfer.placesAhead || null} />
                 </tr>
               ))}
             </tbody>
@@ -94,6 +94,17 @@ export default function GolfersPage() {
         </div>
       )}
     </main>
+  )
+}
+
+/** A cell of the list; on a phone it carries its own label, and is left out where it holds nothing. */
+function Cell(props: { label: string; value: string | number | null; isText?: boolean }) {
+  const { label, value, isText } = props
+  const name = [isText ? 'l' : '', value === null ? 'none' : ''].join(' ').trim()
+  return (
+    <td className={name || undefined} data-label={label || undefined}>
+      {value ?? '–'}
+    </td>
   )
 }
 
@@ -105,7 +116,7 @@ function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
     call('golfers.enter', { academy: slug, body }),
   )
   const set = (change: Partial<typeof fields>) => setFields({ ...fields, ...change })
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault()
     setProblem(null)
     try {

@@ -27,22 +27,22 @@ export function AttestStrip(props: {
         <dd>
           {card.payments} {card.payments === 1 ? 'payment' : 'payments'}, tax in it
         </dd>
-        <span className="op" aria-label="less">
-          −
-        </span>
       </div>
       <div>
-        <dt>Refunded</dt>
-        <dd>{figure('refunded', `Refunded in ${card.year}`, card.refundedMinor)}</dd>
+        <dt>
+          <Less /> Refunded
+        </dt>
+        <dd className="text-flag">
+          {figure('refunded', `Refunded in ${card.year}`, card.refundedMinor)}
+        </dd>
         <dd>
           {card.refunds} {card.refunds === 1 ? 'refund' : 'refunds'}
         </dd>
-        <span className="op" aria-label="less">
-          −
-        </span>
       </div>
       <div>
-        <dt>Fees</dt>
+        <dt>
+          <Less /> Fees
+        </dt>
         <dd>{figure('fees', `Fees in ${card.year}`, card.feesMinor)}</dd>
         <dd>the provider’s and ours</dd>
       </div>
@@ -59,3 +59,10 @@ export function AttestStrip(props: {
     </dl>
   )
 }
+
+/** The operator between two figures; read out as a word. */
+const Less = () => (
+  <span className="op" role="img" aria-label="less">
+    −
+  </span>
+)

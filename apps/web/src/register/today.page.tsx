@@ -1,7 +1,8 @@
-import { useQuery, type QueryClient } from '@tanstack/react-query'
+import { useQuery, useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
 import { useState } from 'react'
 import { Link, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router'
 import { formatLocalDay, formatTime } from '@marram/schedule/format'
+import { academyQuery } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
@@ -9,16 +10,17 @@ import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
 import { DaySheet } from './day-sheet'
 import { dayQuery, type Register } from './queries'
 
-const LOCALE = navigator.language.startsWith('en-') ? navigator.language : 'en-IE'
-
-/** Today on this device, as a local date. */
-const todayLocal = (): string => new Intl.DateTimeFormat('en-CA').format(new Date(Date.now()))
+/** Today where the academy is, as a local date. */
+const todayIn = (timeZone: string): string =>
+  new Intl.DateTimeFormat('en-CA', { timeZone }).format(new Date(Date.now()))
 
 export const loader =
   (client: QueryClient) =>
-  ({ params, request }: LoaderFunctionArgs) => {
-    const day = new URL(request.url).searchParams.get('day') ?? todayLocal()
-    void client.prefetchQuery(dayQuery(params['academy'] ?? '', day))
+  async ({ params, request }: LoaderFunctionArgs) => {
+    const slug = params['academy'] ?? ''
+    const { zone } = await client.query({ ...academyQuery(slug), staleTime: 'static' })
+    const day = new URL(request.url).searchParams.get('day') ?? todayIn(zone)
+    void client.query(dayQuery(slug, day)).catch(() => undefined)
     return null
   }
 
@@ -26,10 +28,12 @@ export const loader =
 export default function TodayPage() {
   const { academy: slug = '' } = useParams()
   const [query] = useSearchParams()
-  const date = query.get('day') ?? todayLocal()
+  const { data: academy } = useSuspenseQuery(academyQuery(slug))
+  const { locale } = academy
+  const date = query.get('day') ?? todayIn(academy.zone)
   const day = useQuery(dayQuery(slug, date))
   const [chosen, setChosen] = useState<string | null>(null)
-  const title = formatLocalDay({ dayLocal: date, locale: LOCALE, style: 'weekday-long' })
+  const title = formatLocalDay({ dayLocal: date, locale, style: 'weekday-long' })
   useTitle(title)
 
   if (day.isPending) {
@@ -70,7 +74,7 @@ export default function TodayPage() {
                 setChosen(register.session.id)
               }}
             >
-              {formatTime({ at: register.session.startsAt, zone, locale: LOCALE })}
+              {formatTime({ at: register.session.startsAt, zone, locale })}
               <small>{stateOf(register)}</small>
             </a>
           ))}
@@ -82,7 +86,7 @@ export default function TodayPage() {
           academy={slug}
           date={date}
           register={current}
-          locale={LOCALE}
+          locale={locale}
         />
       ) : (
         <div className="p-4">

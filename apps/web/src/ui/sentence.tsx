@@ -41,6 +41,8 @@ export function InputWord({
   max?: number
   step?: number
   size?: number
+  placeholder?: string
+  inputMode?: 'decimal'
   isWrong?: boolean
 }) {
   const { isWrong, ...input } = rest

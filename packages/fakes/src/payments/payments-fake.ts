@@ -1,14 +1,21 @@
-import express, { Router, json } from 'express'
-import { keepState } from '../kept-state'
-import { closeServer, listenOnLoopback } from '../listen'
-import { paymentsApi } from './api'
-import { hostedPages } from './hosted-pages'
-import { ProviderError, makeMachine, type Machine } from './machine'
-import { showEvent } from './objects'
-import type { FakeState } from './state'
-import { makeDeliveries, type Deliveries, type DeliveryControls } from './webhooks'
+import { createHmac } from 'node:crypto'
+import { makeDeliveries, type DeliveryControls } from '../deliveries'
+import { keepState, readKept } from '../kept-state'
+import { closeServer, listenOnLoopback, makeApp } from '../listen'
+import { requireLoopback, requireNoLiveKey } from '../safety'
+import { paymentsApi } from './api/api'
+import { makeTrouble, type TroubleControls } from './api/trouble'
+import { CARDS } from './cards'
+import { controlRoutes } from './control'
+import type { Told } from './machine/core'
+import { makeMachine, type Machine } from './machine/machine'
+import { showEvent, type View } from './objects/objects'
+import { hostedPages } from './pages/hosted-pages'
+import { missing } from './provider-error'
+import { emptyState, type FakeState } from './state'
 
 export interface PaymentsFakeOptions {
+  host?: string
   port?: number
   secretKey: string
   webhookSecret: string
@@ -18,128 +25,90 @@ export interface PaymentsFakeOptions {
   stateFile?: string
 }
 
-export interface PaymentsFake extends DeliveryControls {
+export interface PaymentsFake extends DeliveryControls, TroubleControls {
   url: string
   port: number
   state: FakeState
-  /** Pays a checkout without a browser; resolves to the sentence of a refusal, or null. */
-  pay(checkoutId: string, card?: string): string | null
-  finishOnboarding(account: string): void
-  advanceClock(seconds: number): void
-  /** The next calls of the API are answered with this status. */
-  failNext(given: { status: number; count: number }): void
-  close(): Promise<void>
+  /** Pays a checkout without a browser; gives the sentence of a refusal, or null. */
+  pay: (checkoutId: string, card?: string) => string | null
+  finishOnboarding: (account: string) => void
+  openDispute: Machine['openDispute']
+  decideDispute: Machine['decideDispute']
+  makePayout: Machine['makePayout']
+  settlePayout: Machine['settlePayout']
+  advanceClock: (seconds: number) => void
+  close: () => Promise<void>
 }
 
 const EVENTS_KEPT = 5_000
+const TICK_MS = 500
 
 /** Starts the payment provider's stand-in on loopback. Refuses a live key. */
 export async function startPaymentsFake(options: PaymentsFakeOptions): Promise<PaymentsFake> {
-  if (options.secretKey.startsWith('sk_live_')) {
-    throw new Error('The payments stand-in refuses a live key.')
-  }
+  requireNoLiveKey(options.secretKey, 'payments key')
+  if (options.webhookUrl) requireLoopback(options.webhookUrl, 'a webhook')
   let url = ''
-  const failures: number[] = []
-  const kept = keepState(options.stateFile, () => machine.state)
-  // The state was written by this stand-in.
-  const state = kept.read() as FakeState | undefined
-  const machine = makeMachine(
-    ({ type, account, objectId }) => {
-      const id = `evt_fake${(machine.state.next += 1).toString(36).padStart(10, '0')}`
-      const event = { id, account, type, created: machine.now(), objectId }
-      machine.state.events.push(event)
-      if (machine.state.events.length > EVENTS_KEPT) machine.state.events.shift()
-      deliveries.send(showEvent(event, machine.state, url))
-    },
-    { state, now: options.now },
-  )
-  const deliveries = makeDeliveries({
-    url: options.webhookUrl,
-    secret: options.webhookSecret,
-    nowSeconds: machine.now,
+  // What was kept was written by this stand-in.
+  const state = (readKept(options.stateFile) as FakeState | undefined) ?? emptyState()
+  const kept = keepState(options.stateFile, () => state)
+  const trouble = makeTrouble()
+  const machine = makeMachine({
+    state,
+    now: options.now ?? (() => new Date()),
+    tell: (told) => tell(told),
   })
-  const controls = {
-    pay: (checkoutId: string, card = '4242424242424242', created?: number) =>
-      machine.pay(machine.findCheckout(checkoutId), { card, created }),
-    failNext: ({ status, count }: { status: number; count: number }) => {
-      failures.push(...Array<number>(count).fill(status))
-    },
-  }
+  const deliveries = makeDeliveries({ url: options.webhookUrl, sign })
+  const view: View = { state, now: machine.now, baseUrl: () => url }
 
-  const app = express()
-  app.disable('x-powered-by')
-  app.use('/_control', controlRoutes({ machine, deliveries, controls, keep: kept.keep }))
-  app.use('/v1', (_request, response, next) => {
-    const status = failures.shift()
-    if (status === undefined) return next()
-    response.status(status).json({ error: { type: 'api_error', message: 'Asked to fail.' } })
-  })
-  const { secretKey } = options
+  const app = makeApp()
+  app.use('/_control', controlRoutes({ machine, deliveries, trouble, onChange: kept.keep }))
+  app.use('/v1', trouble.intercept)
   app.use(hostedPages(machine, kept.keep))
-  app.use(paymentsApi(machine, { secretKey, baseUrl: () => url, onChange: kept.keep }))
-  const listening = await listenOnLoopback(app, options.port)
+  const { secretKey } = options
+  app.use(paymentsApi(machine, { secretKey, view, trouble, onChange: kept.keep }))
+  const listening = await listenOnLoopback(app, options)
   url = listening.url
+  const ticking = setInterval(machine.tick, TICK_MS)
+  ticking.unref()
 
   return {
     ...deliveries,
+    ...trouble,
     url,
     port: listening.port,
-    state: machine.state,
-    pay: (checkoutId, card) => controls.pay(checkoutId, card),
+    state,
+    pay: (id, card = CARDS.good) => {
+      const checkout = state.checkouts[id]
+      if (!checkout) throw missing('checkout.session', id)
+      machine.tick()
+      return machine.pay(checkout, { card })
+    },
     finishOnboarding: machine.finishOnboarding,
+    openDispute: machine.openDispute,
+    decideDispute: machine.decideDispute,
+    makePayout: machine.makePayout,
+    settlePayout: machine.settlePayout,
     advanceClock: machine.advance,
-    failNext: controls.failNext,
     async close() {
+      clearInterval(ticking)
+      deliveries.stop()
       kept.flush()
       await closeServer(listening.server)
     },
   }
-}
 
-/** The controls over HTTP, for tests and loaders in other processes. */
-function controlRoutes(given: {
-  machine: Machine
-  deliveries: Deliveries
-  controls: {
-    pay(id: string, card?: string, created?: number): string | null
-    failNext(wanted: { status: number; count: number }): void
+  function tell({ type, account, objectId }: Told): void {
+    const id = `evt_fake${(state.next += 1).toString(36).padStart(10, '0')}`
+    const event = { id, account, type, created: machine.now(), objectId }
+    state.events.push(event)
+    if (state.events.length > EVENTS_KEPT) state.events.shift()
+    // The webhook hears of connected accounts, as one that is set up for them does.
+    if (account !== null) deliveries.send(showEvent(event, view))
   }
-  keep: () => void
-}): Router {
-  const { machine, deliveries, controls, keep } = given
-  const router = Router()
-  router.use(json())
-  const act = (name: string, action: (body: Record<string, unknown>) => unknown) =>
-    router.post(`/${name}`, (request, response) => {
-      try {
-        const outcome = action(Object(request.body) as Record<string, unknown>)
-        keep()
-        response.json({ outcome: outcome ?? null })
-      } catch (error) {
-        const status = error instanceof ProviderError ? error.status : 400
-        response.status(status).json({ error: String(error) })
-      }
-    })
-  const count = (body: Record<string, unknown>) => Number(body['count'] ?? 1)
-  act('pay', (body) => {
-    const card = body['card'] === undefined ? undefined : String(body['card'])
-    const created = body['created'] === undefined ? undefined : Number(body['created'])
-    return controls.pay(String(body['session']), card, created)
-  })
-  act('finish-onboarding', (body) =>
-    machine.finishOnboarding(new URL(String(body['url'])).pathname.split('/').at(-1) ?? ''),
-  )
-  act('mute-webhooks', () => deliveries.mute(true))
-  act('unmute-webhooks', () => deliveries.mute(false))
-  act('hold-webhooks', () => deliveries.hold())
-  act('release-webhooks', () => deliveries.release())
-  act('release-webhooks-reversed', () => deliveries.releaseReversed())
-  act('duplicate-next', (body) => deliveries.duplicateNext(count(body)))
-  act('drop-next', (body) => deliveries.dropNext(count(body)))
-  act('advance-clock', (body) => machine.advance(Number(body['seconds'] ?? 0)))
-  act('fail-next', (body) =>
-    controls.failNext({ status: Number(body['status'] ?? 500), count: count(body) }),
-  )
-  router.get('/state', (_request, response) => response.json(machine.state))
-  return router
+
+  function sign(body: string): Record<string, string> {
+    const t = machine.now()
+    const v1 = createHmac('sha256', options.webhookSecret).update(`${t}.${body}`).digest('hex')
+    return { 'stripe-signature': `t=${t},v1=${v1}` }
+  }
 }

@@ -5,6 +5,7 @@ export interface FakeAccount {
   name: string
   chargesEnabled: boolean
   metadata: Record<string, string>
+  created: number
 }
 
 export interface FakeCheckout {
@@ -21,13 +22,13 @@ export interface FakeCheckout {
   applicationFee: number
   email: string | null
   successUrl: string
-  cancelUrl: string
+  cancelUrl: string | null
   expiresAt: number
   created: number
   payment: string | null
-  lastRefusal: string | null
 }
 
+/** A payment intent and its one charge; a try that was refused leaves no charge here. */
 export interface FakePayment {
   id: string
   account: string
@@ -37,12 +38,32 @@ export interface FakePayment {
   currency: string
   metadata: Record<string, string>
   charge: string
-  balanceTransaction: string
-  fee: number
+  balanceTransaction: string | null
   applicationFee: number
+  /** The platform's record of its fee; null until paid, or where none was asked. */
+  applicationFeeId: string | null
   refunded: number
-  refusal: string | null
+  isDisputed: boolean
+  refusal: Refusal | null
   card: string
+  created: number
+}
+
+/** Why a card was refused: the provider's codes, and the sentence that its page shows. */
+export interface Refusal {
+  code: string
+  declineCode: string | null
+  sentence: string
+}
+
+export interface FakeApplicationFee {
+  id: string
+  /** The connected account that paid it; the record itself is the platform's. */
+  payer: string
+  charge: string
+  amount: number
+  currency: string
+  balanceTransaction: string
   created: number
 }
 
@@ -53,7 +74,65 @@ export interface FakeRefund {
   amount: number
   currency: string
   status: 'pending' | 'succeeded' | 'failed'
+  balanceTransaction: string | null
+  failureBalanceTransaction: string | null
   metadata: Record<string, string>
+  created: number
+}
+
+export interface FakeDispute {
+  id: string
+  account: string
+  payment: string
+  amount: number
+  currency: string
+  reason: string
+  status: 'needs_response' | 'under_review' | 'won' | 'lost'
+  evidence: Record<string, string>
+  submissions: number
+  /** The money going out, and where the dispute was won, coming back. */
+  balanceTransactions: string[]
+  metadata: Record<string, string>
+  dueBy: number
+  created: number
+}
+
+export interface FakePayout {
+  id: string
+  account: string
+  amount: number
+  currency: string
+  status: 'in_transit' | 'paid' | 'failed'
+  balanceTransaction: string
+  failureBalanceTransaction: string | null
+  arrivesOn: number
+  created: number
+}
+
+/** One movement of a balance. Net of fees it is what the balance changes by. */
+export interface FakeBalanceTransaction {
+  id: string
+  /** Whose balance; null is the platform's own. */
+  account: string | null
+  amount: number
+  currency: string
+  type:
+    | 'charge'
+    | 'application_fee'
+    | 'refund'
+    | 'refund_failure'
+    | 'adjustment'
+    | 'payout'
+    | 'payout_failure'
+  category: string
+  description: string
+  /** What moved it: a charge, a refund, a dispute, a payout. */
+  source: string
+  providerFee: number
+  applicationFee: number
+  /** The payout that took it to the bank. */
+  payout: string | null
+  availableOn: number
   created: number
 }
 
@@ -65,14 +144,26 @@ export interface FakeEvent {
   objectId: string
 }
 
+/** What happens by itself, once the provider's clock has come so far. */
+export interface FakeDue {
+  at: number
+  kind: 'open-dispute' | 'decide-dispute' | 'settle-refund'
+  id: string
+}
+
 export interface FakeState {
   accounts: Record<string, FakeAccount>
   checkouts: Record<string, FakeCheckout>
   payments: Record<string, FakePayment>
+  applicationFees: Record<string, FakeApplicationFee>
   refunds: Record<string, FakeRefund>
+  disputes: Record<string, FakeDispute>
+  payouts: Record<string, FakePayout>
+  balance: Record<string, FakeBalanceTransaction>
   events: FakeEvent[]
-  /** Idempotency keys: what was asked and what was answered. */
-  answers: Record<string, { asked: string; status: number; body: string }>
+  due: FakeDue[]
+  /** Idempotency keys: what was asked, when, and what was answered. */
+  answers: Record<string, { asked: string; at: number; status: number; body: string }>
   clockOffsetSeconds: number
   next: number
 }
@@ -81,34 +172,14 @@ export const emptyState = (): FakeState => ({
   accounts: {},
   checkouts: {},
   payments: {},
+  applicationFees: {},
   refunds: {},
+  disputes: {},
+  payouts: {},
+  balance: {},
   events: [],
+  due: [],
   answers: {},
   clockOffsetSeconds: 0,
   next: 1,
 })
-
-/** The card numbers that the provider documents for tests, by what they do. */
-export const CARDS = {
-  good: '4242424242424242',
-  declined: '4000000000000002',
-  insufficient: '4000000000009995',
-  refundFails: '4000000000005126',
-  refundPends: '4000000000007726',
-} as const
-
-export const REFUSALS: Record<string, { code: string; sentence: string }> = {
-  [CARDS.declined]: { code: 'generic_decline', sentence: 'Your card was declined.' },
-  [CARDS.insufficient]: {
-    code: 'insufficient_funds',
-    sentence: 'Your card has too little money on it.',
-  },
-}
-
-const FEE_BASIS_POINTS = 150
-const FEE_FIXED = 25
-
-/** What the provider keeps of a charge: 1.5 % and 25 minor units. */
-export function feeOf(amount: number): number {
-  return Math.min(amount, Math.round((amount * FEE_BASIS_POINTS) / 10_000) + FEE_FIXED)
-}

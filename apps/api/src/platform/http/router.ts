@@ -13,7 +13,7 @@ import type { ZodType } from 'zod'
 import { Problem, notFound } from '../errors'
 import type { Services } from '../services'
 import { findAcademyBySlug } from '../tenancy/look-ups'
-import { Download, type Handlers, type RequestContext } from './context'
+import { Download, type Handlers, type RequestContext, type SignedInAccount } from './context'
 import { fieldSentences } from './field-sentences'
 import { currentAccount, signInAs, signOut } from './sign-in-session'
 import { tokenOf } from './request-token'
@@ -100,8 +100,7 @@ async function makeContext(
     throw new Problem('not-signed-in', 'Please sign in first.')
   }
   const academySlug = slugOf(request)
-  const academyId = academySlug ? await findAcademyBySlug(services.db, academySlug) : null
-  if (academySlug && !academyId) throw notFound('academy')
+  const academyId = academySlug && (await findAcademyFor(services, { academySlug, spec, account }))
   const needsRoles = account && academyId && spec.access !== 'public'
   const roles = needsRoles ? await rolesOf({ academyId, accountId: account.id }) : []
   return {
@@ -117,6 +116,20 @@ async function makeContext(
     signOut: () => signOut(request, response),
     token: () => tokenOf(services, request, response),
   }
+}
+
+/**
+ * The academy of the address. A visitor's look at a public page finds it with the page itself, in
+ * one message, so that the question is not asked twice. Throws for an address that is none.
+ */
+async function findAcademyFor(
+  { db }: Services,
+  of: { academySlug: string; spec: RouteSpec; account: SignedInAccount | null },
+): Promise<string | null> {
+  if (of.spec.access === 'public' && !of.account) return null
+  const academyId = await findAcademyBySlug(db, of.academySlug)
+  if (!academyId) throw notFound('academy')
+  return academyId
 }
 
 function slugOf(request: Request): string | null {
