@@ -17,8 +17,7 @@ export async function signInWithGoogle(
     redirect: 'manual',
     body: new URLSearchParams([
       ['sub', subject],
-      ['redirect_uri', asked.get('redirect_uri') ?? ''],
-      ['state', asked.get('state') ?? ''],
+      ...['redirect_uri', 'state', 'scope'].map((name) => [name, asked.get(name) ?? '']),
     ]),
   })
   const back = new URL(picked.headers.get('location') ?? '')

@@ -2,7 +2,7 @@ import { Agent, request } from 'node:http'
 import { pathOf, type RouteKey } from '@marram/contract'
 import { afterAll, beforeAll, expect, it } from 'vitest'
 import { findAcademyBySlug } from '../../apps/api/src/platform/tenancy/look-ups'
-import { inAcademy, inPlain, askPageOf } from '../../apps/api/src/platform/tenancy/transaction'
+import { askPageOf, inAcademy, inPlain } from '../../apps/api/src/platform/tenancy/transaction'
 import { listVenues } from '../../apps/api/src/venues/queries'
 import { openAcademy } from '../support/builders'
 import { useWorld } from '../support/use-world'
@@ -69,13 +69,20 @@ async function takeTurns(
 const half = (count: number) => ({ heron: count / 2, plover: count / 2 })
 const namesOf = (rows: readonly { name: string }[]) => rows.map(({ name }) => name).join(', ')
 
-const ALL_VENUES = { name: 'tests-all-venues', text: 'SELECT name FROM venues', values: [] }
+const NAMES = { name: 'names', text: 'SELECT name FROM venues', values: [] }
 
 /** The roads on which a transaction comes by its academy, and the ways in which it ends. */
 const TRANSACTIONS: ((academy: Marked) => Promise<string>)[] = [
   ({ academyId }) => inAcademy(db, academyId, async (trx) => namesOf(await listVenues(trx))),
   ({ academyId }) => inAcademy(db, academyId, async (trx) => namesOf(await trx('venues'))),
-  async ({ slug }) => namesOf(await askPageOf<{ name: string }>(db, slug, ALL_VENUES)),
+  async ({ slug }) => namesOf(await askPageOf<{ name: string }>(db, slug, NAMES)),
+  async ({ slug, mark }) => {
+    const broken = askPageOf(db, slug, { name: 'broken', text: 'SELECT 1 / 0', values: [] })
+    return broken.then(
+      () => 'nobody',
+      () => `${mark}: a question that failed`,
+    )
+  },
   async ({ academyId }) => {
     let seen = ''
     const undone = inAcademy(db, academyId, async (trx) => {
