@@ -32,10 +32,18 @@ export async function fillDatabase(
 
 /** One connection, one message: what is several statements is one transaction. */
 export async function runAlone(url: string, text: string): Promise<void> {
+  await readRows(url, text)
+}
+
+export async function readRows<Row extends pg.QueryResultRow>(
+  url: string,
+  text: string,
+): Promise<Row[]> {
   const client = new pg.Client({ connectionString: url })
   await client.connect()
   try {
-    await client.query(text)
+    const { rows } = await client.query<Row>(text)
+    return rows
   } finally {
     await client.end()
   }

@@ -2,6 +2,7 @@ import express from 'express'
 import { createServer } from 'node:http'
 import pg from 'pg'
 import { listen } from '../../apps/api/src/platform/boot'
+import { holdBarely, type Wish } from './bare-hold'
 import { PAGE, beginReadingAt } from './floor-sql'
 import { POOL_SIZE, sayPort } from './processes'
 
@@ -33,6 +34,17 @@ app.get('/walled-page/:slug', async (request, response) => {
       client.query('COMMIT'),
     ])
     response.json(rows[0]?.page)
+  } finally {
+    client.release()
+  }
+})
+
+/** A hold as bare SQL; who asks is believed. */
+app.post('/holds', express.json(), async (request, response) => {
+  const client = await pool.connect()
+  try {
+    // Only the bench sends anything here.
+    response.json({ id: await holdBarely(client, request.body as Wish) })
   } finally {
     client.release()
   }

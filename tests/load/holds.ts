@@ -4,7 +4,10 @@ import { makeServices } from '../../apps/api/src/platform/boot'
 import { holdBarely, type Wish } from './bare-hold'
 import { benchConfig } from './bench-config'
 import type { BenchDatabase } from './database'
+import { withServers } from './processes'
 import { find, inTurns, type Finding } from './rounds'
+import { signGolfersIn } from './signed-in'
+import { answersPerSecond, type Call } from './traffic'
 import { forgetHolds } from './wishes'
 
 const ROUNDS = 9
@@ -23,11 +26,15 @@ export async function measureHoldsInProcess(
     releaseConnection(client: pg.Client): Promise<void>
   }
   const useCase = ({ academyId, clinicId, sessionId, accountId }: Wish) =>
-    holdPlaces(services, {
-      academyId,
-      person: { id: accountId, name: 'Golfer', email: 'golfer@mail.example', isVerified: true },
-      wanted: { clinicId, sessionId, for: { kind: 'me' }, hasAcceptedWaiver: true },
-    })
+    holdPlaces(
+      services,
+      {
+        academyId,
+        person: { id: accountId, name: 'Golfer', email: 'golfer@mail.example', isVerified: true },
+        wanted: { clinicId, sessionId, for: { kind: 'me' }, hasAcceptedWaiver: true },
+      },
+      (_, id) => Promise.resolve(id),
+    )
   const bare = async (wish: Wish) => {
     const client = await pool.acquireConnection()
     try {
@@ -65,4 +72,44 @@ async function holdsPerSecond(
   }
   await Promise.all(Array.from({ length: AT_ONCE }, keepBusy))
   return (HOLDS * 1000) / (performance.now() - began)
+}
+
+/** The API against a bare handler around the same SQL, each in a process of its own. */
+export async function measureHoldsOverHttp(
+  database: BenchDatabase,
+  wishes: readonly Wish[],
+): Promise<Finding> {
+  const rates = await withServers(async (start) => {
+    const product = await start('product', database.url)
+    const floor = await start('floor', database.url)
+    const headersOf = await signGolfersIn(database, product)
+    const asked = wishes.slice(0, HOLDS).map((wish) => ({
+      method: 'POST' as const,
+      path: '/api/academies/links-1/my/enrolments',
+      headers: headersOf.get(wish.accountId) ?? {},
+      body: JSON.stringify({
+        clinicId: wish.clinicId,
+        sessionId: wish.sessionId,
+        for: { kind: 'me' },
+        hasAcceptedWaiver: true,
+      }),
+    }))
+    const askedBarely = wishes.slice(0, HOLDS).map((wish) => ({
+      method: 'POST' as const,
+      path: '/holds',
+      body: JSON.stringify(wish),
+    }))
+    const busy = (port: number, calls: readonly Call[]) => async () => {
+      await forgetHolds(database)
+      return answersPerSecond(port, { connections: AT_ONCE, calls })
+    }
+    return inTurns({ floor: busy(floor, askedBarely), ours: busy(product, asked) }, ROUNDS)
+  })
+  return find({
+    name: 'holds over HTTP, bare handler with that SQL',
+    unit: 'holds/s',
+    ours: rates.ours,
+    floor: rates.floor,
+    goal: { at: 'least', ratio: 0.6 },
+  })
 }

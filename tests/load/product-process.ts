@@ -7,7 +7,8 @@ import { sayPort } from './processes'
 
 const config = benchConfig({
   url: process.env['BENCH_DATABASE_URL'] ?? '',
-  dispatchUrl: process.env['BENCH_DISPATCH_URL'] ?? '',
+  // Only jobs connect there, and none are handled here.
+  dispatchUrl: '',
 })
 const services = makeServices(config, { name: 'bench-product' })
 // The built web app is not asked for anything here, and may not have been built yet.

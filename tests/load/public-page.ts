@@ -1,16 +1,16 @@
 import { isDeepStrictEqual } from 'node:util'
 import type { BenchDatabase } from './database'
-import { startServer, type RunningServer } from './processes'
+import { withServers } from './processes'
 import { find, inTurns, type Finding } from './rounds'
-import { answerTo, answersPerSecond } from './traffic'
+import { answerTo, answersPerSecond, type Call } from './traffic'
 
 const ROUNDS = 9
 const CALLS = 250
 const CONNECTIONS = 8
 
-const ours = { method: 'GET', path: '/api/academies/links-1/page' } as const
-const bare = { method: 'GET', path: '/page/links-1' } as const
-const walled = { method: 'GET', path: '/walled-page/links-1' } as const
+const ours: Call = { method: 'GET', path: '/api/academies/links-1/page' }
+const bare: Call = { method: 'GET', path: '/page/links-1' }
+const walled: Call = { method: 'GET', path: '/walled-page/links-1' }
 
 /** The public clinic list of one academy: against bare handlers, and beside 999 more academies. */
 export async function measurePublicPage(databases: {
@@ -18,25 +18,19 @@ export async function measurePublicPage(databases: {
   many: BenchDatabase
 }): Promise<Finding[]> {
   const { one, many } = databases
-  const running: RunningServer[] = []
-  const start = async (which: 'product' | 'floor', url: string): Promise<number> => {
-    const server = await startServer(which, { BENCH_DATABASE_URL: url })
-    running.push(server)
-    return server.port
-  }
-  try {
+  const rates = await withServers(async (start) => {
     const product = await start('product', one.url)
     const productOfMany = await start('product', many.url)
     const floor = await start('floor', one.superuserUrl)
     const walledFloor = await start('floor', one.url)
-    await refuseDifferent(
+    refuseDifferent(
       await answerTo(product, ours),
       await answerTo(floor, bare),
       await answerTo(walledFloor, walled),
     )
-    const busy = (port: number, call: typeof ours | typeof bare | typeof walled) => () =>
-      answersPerSecond(port, { connections: CONNECTIONS, calls: CALLS, next: () => call })
-    const rates = await inTurns(
+    const busy = (port: number, call: Call) => () =>
+      answersPerSecond(port, { connections: CONNECTIONS, calls: Array<Call>(CALLS).fill(call) })
+    return inTurns(
       {
         floor: busy(floor, bare),
         one: busy(product, ours),
@@ -45,14 +39,12 @@ export async function measurePublicPage(databases: {
       },
       ROUNDS,
     )
-    return describe(rates)
-  } finally {
-    for (const server of running) await server.stop()
-  }
+  })
+  return describe(rates)
 }
 
 /** A floor that answers something else is the floor of another house. */
-async function refuseDifferent(first: string, ...others: string[]): Promise<void> {
+function refuseDifferent(first: string, ...others: string[]): void {
   for (const other of others) {
     if (isDeepStrictEqual(JSON.parse(first), JSON.parse(other))) continue
     throw new Error(`The product and the floor answer differently:\n${first}\n${other}`)

@@ -30,65 +30,74 @@ import {
 } from './queries'
 import { offerFreedPlaces } from './waitlist'
 
-/**
- * Holds places for the person, somebody they look after, or a new dependant, while payment is made.
- * Pressing twice gives the same hold. Resolves to the enrolment's id.
- */
-export async function holdPlaces(
-  services: Services,
-  given: { academyId: string; person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
-): Promise<string> {
-  const outcome = await tryHold(services, given).then(
-    (id) => ({ id, outcome: 'held' }),
-    (error: unknown) => {
-      const code = error instanceof Problem ? error.code : 'unexpected'
-      services.metrics.holds.inc({ outcome: code })
-      throw error
-    },
-  )
-  services.metrics.holds.inc({ outcome: outcome.outcome })
-  return outcome.id
+interface Wish {
+  academyId: string
+  person: Person
+  wanted: Parsed<'enrolments.hold', 'body'>
 }
 
-async function tryHold(
+/** Shows an enrolment inside the transaction that made it. */
+type Show<View> = (trx: AcademyTrx, enrolmentId: string) => Promise<View>
+
+/**
+ * Holds places for the person, somebody they look after, or a new dependant, while payment is made.
+ * Pressing twice gives the same hold. Resolves to the enrolment, shown.
+ */
+export async function holdPlaces<View>(
   services: Services,
-  given: { academyId: string; person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
-): Promise<string> {
-  const { person, wanted } = given
+  wish: Wish,
+  show: Show<View>,
+): Promise<View> {
+  try {
+    const view = await inAcademy(services.db, wish.academyId, (trx) =>
+      tryHold(services, trx, { ...wish, show }),
+    )
+    services.metrics.holds.inc({ outcome: 'held' })
+    return view
+  } catch (error) {
+    services.metrics.holds.inc({ outcome: error instanceof Problem ? error.code : 'unexpected' })
+    throw error
+  }
+}
+
+async function tryHold<View>(
+  services: Services,
+  trx: AcademyTrx,
+  { person, wanted, show }: Wish & { show: Show<View> },
+): Promise<View> {
   const { for: whom, clinicId } = wanted
-  return inAcademy(services.db, given.academyId, async (trx) => {
-    const now = services.clock.now()
-    const golferId = whom.kind === 'golfer' ? whom.golferId : null
-    const [onSale, standing] = await together(
-      findOnSale(trx, wanted, now),
-      readStanding(trx, { accountId: person.id, golferId, clinicId }),
-    )
-    if (!standing.isMember) await joinAsGolfer(trx, { accountId: person.id, now })
-    const known = whom.kind === 'new' ? null : standing.golfer
-    const golfer = await golferFor(services, trx, { person, whom, known })
-    checkFit(golfer, onSale)
-    const sessionIds = onSale.taken.map(({ id }) => id)
-    const had = known
-      ? standing.active.find((active) => active.sessionIds.some((id) => sessionIds.includes(id)))
-      : await findActiveEnrolment(trx, { golferId: golfer.id, sessionIds })
-    if (had?.state === 'held' && had.takenBy === person.id && had.kind === onSale.kind) {
-      return had.id
-    }
-    if (had) throw new Problem('already-has-place', `${golfer.name} has a place there already.`)
-    refuseFull(onSale)
-    const { waiver, holdMinutes } = onSale.academy
-    const consent = { golferId: golfer.id, kind: 'waiver', wording: waiver } as const
-    const [, id] = await together(
-      recordConsent(trx, { ...consent, givenBy: person.id, now }),
-      takePlaces(services, trx, {
-        onSale,
-        golferId: golfer.id,
-        takenBy: person.id,
-        heldUntil: new Date(now.getTime() + holdMinutes * 60_000),
-        isOffer: false,
-      }),
-    )
-    return id
+  const now = services.clock.now()
+  const golferId = whom.kind === 'golfer' ? whom.golferId : null
+  const [onSale, standing] = await together(
+    findOnSale(trx, wanted, now),
+    readStanding(trx, { accountId: person.id, golferId, clinicId }),
+  )
+  if (!standing.isMember) await joinAsGolfer(trx, { accountId: person.id, now })
+  const known = whom.kind === 'new' ? null : standing.golfer
+  const golfer = await golferFor(services, trx, { person, whom, known })
+  checkFit(golfer, onSale)
+  const sessionIds = onSale.taken.map(({ id }) => id)
+  const had = known
+    ? standing.active.find((active) => active.sessionIds.some((id) => sessionIds.includes(id)))
+    : await findActiveEnrolment(trx, { golferId: golfer.id, sessionIds })
+  if (had?.state === 'held' && had.takenBy === person.id && had.kind === onSale.kind) {
+    return show(trx, had.id)
+  }
+  if (had) throw new Problem('already-has-place', `${golfer.name} has a place there already.`)
+  refuseFull(onSale)
+  const { waiver, holdMinutes } = onSale.academy
+  const consent = { golferId: golfer.id, kind: 'waiver', wording: waiver } as const
+  return takePlaces(services, trx, {
+    onSale,
+    golferId: golfer.id,
+    takenBy: person.id,
+    heldUntil: new Date(now.getTime() + holdMinutes * 60_000),
+    isOffer: false,
+    meanwhile: async (id) => {
+      const given = recordConsent(trx, { ...consent, givenBy: person.id, now })
+      const [, view] = await together(given, show(trx, id))
+      return view
+    },
   })
 }
 
@@ -136,6 +145,7 @@ export async function givePlaces(
       takenBy: golfer.accountId ?? golfer.guardianAccountId,
       heldUntil: new Date(now.getTime() + onSale.academy.holdMinutes * 60_000),
       isOffer: false,
+      meanwhile: (id) => Promise.resolve(id),
     })
     await alsoDo(trx, id)
     return id

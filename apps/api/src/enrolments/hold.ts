@@ -9,9 +9,10 @@ import { insertEnrolment, takeSeats } from './queries'
 /**
  * Takes places for a golfer: the enrolment and its places first, the seats last before commit, all
  * or nothing. What costs nothing is confirmed at once; the rest is held until `heldUntil`.
- * Resolves to the enrolment's id. Throws `session-full` and `already-has-place`.
+ * Resolves to what `meanwhile` makes of the enrolment's id: it asks what does not hang on the seats,
+ * and goes out before them. Throws `session-full` and `already-has-place`.
  */
-export async function takePlaces(
+export async function takePlaces<T>(
   services: Services,
   trx: AcademyTrx,
   given: {
@@ -20,8 +21,9 @@ export async function takePlaces(
     takenBy: string | null
     heldUntil: Date
     isOffer: boolean
+    meanwhile: (enrolmentId: string) => Promise<T>
   },
-): Promise<string> {
+): Promise<T> {
   const { onSale, golferId, takenBy, isOffer } = given
   const { clinic, academy, kind, taken, price } = onSale
   const now = services.clock.now()
@@ -46,13 +48,14 @@ export async function takePlaces(
   const places = price.places.map((place) => ({ id: newId(now), ...place }))
   const sessionIds = taken.map((session) => session.id)
   const event = { academyId: academy.academyId, enrolmentId: id }
-  const [, , seats] = await together(
+  const [, , answer, seats] = await together(
     sayDouble(insertEnrolment(trx, enrolment, places)),
     isFree ? services.outbox.emit(trx, 'enrolment.confirmed', event) : Promise.resolve(),
+    given.meanwhile(id),
     takeSeats(trx, { sessionIds, as: state }),
   )
   if (seats.length < sessionIds.length) throw sessionFull()
-  return id
+  return answer
 }
 
 /** A first look that spares the writes where the answer is plain already. Throws `session-full`. */

@@ -252,16 +252,12 @@ export interface EnrolmentRow extends Enrolment {
   golferAccountId: string | null
 }
 
-/** Enrolments with what a view says of their clinic and golfer, the newest first. */
+/** Enrolments with what is said of their clinic and golfer, the newest first. */
 export async function listEnrolments(
   trx: AcademyTrx,
-  by:
-    | { ids: readonly string[] }
-    | { accountId: string }
-    | { clinicId: string }
-    | { golferId: string },
+  ids: readonly string[],
 ): Promise<EnrolmentRow[]> {
-  const query = Enrolment.query(trx)
+  return Enrolment.query(trx)
     .join('clinics', (join) =>
       join.on('clinics.academyId', 'enrolments.academyId').on('clinics.id', 'enrolments.clinicId'),
     )
@@ -281,18 +277,9 @@ export async function listEnrolments(
       'golfers.name as golferName',
       'golfers.accountId as golferAccountId',
     )
+    .whereIn('enrolments.id', [...ids])
     .orderBy('enrolments.createdAt', 'desc')
-  if ('ids' in by) query.whereIn('enrolments.id', [...by.ids])
-  if ('clinicId' in by) query.where('enrolments.clinicId', by.clinicId)
-  if ('golferId' in by) query.where('enrolments.golferId', by.golferId)
-  if ('accountId' in by) {
-    query.where((either) => {
-      void either
-        .where('golfers.accountId', by.accountId)
-        .orWhere('golfers.guardianAccountId', by.accountId)
-    })
-  }
-  return query.castTo<EnrolmentRow[]>()
+    .castTo<EnrolmentRow[]>()
 }
 
 export interface PlaceRow extends Place {

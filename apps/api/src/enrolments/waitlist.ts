@@ -116,6 +116,7 @@ async function offer(
     takenBy: accountId,
     heldUntil: offerUntil({ now, offerHours, firstStartsAt: first.startsAt }),
     isOffer: true,
+    meanwhile: (id) => Promise.resolve(id),
   })
   const isFree = onSale.price.netMinor + onSale.price.taxMinor === 0
   await updateWaitlistEntry(trx, entry.id, { state: isFree ? 'taken' : 'offered', enrolmentId })
