@@ -161,7 +161,9 @@ function Slip(props: {
         <span
           className={`pl2 c${session.capacity > MOST_TICKS ? 14 : ticksClass(session.capacity)}`}
         >
-          <PlaceTicks taken={session.taken} capacity={session.capacity} />
+          {session.capacity <= MOST_TICKS && (
+            <PlaceTicks taken={session.taken} capacity={session.capacity} />
+          )}
           <span className="frac">
             {session.taken}/{session.capacity}
           </span>
