@@ -1,10 +1,10 @@
 import type { PaymentsFake } from '@marram/fakes'
 import type Stripe from 'stripe'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
+import { control } from '../support/control'
 import {
   checkoutParams,
   connectAccount,
-  control,
   movableClock,
   payFor,
   startPayments,
@@ -113,6 +113,19 @@ describe('a payout', () => {
     ).rejects.toThrow('failed already')
     const failures = await stripe.payouts.list({ status: 'failed' }, { stripeAccount })
     expect(failures.data.map(({ id }) => id)).toEqual([sent.id])
+  })
+})
+
+describe('a control', () => {
+  it.each<[string, object, string]>([
+    ['payout', { currency: 'eur' }, 'account is missing'],
+    ['payout', { account: 'acct', currency: 'eur', until: 'soon' }, 'until is no number'],
+    ['payout', { account: 'acct', currency: 'eur', outcome: 'lost' }, 'outcome is one of paid'],
+    ['settle-payout', { payout: 'po_nothing' }, 'No such record'],
+    ['finish-onboarding', { url: 'nowhere' }, 'url is no address'],
+    ['pay', { session: 'cs_nothing' }, 'No such record'],
+  ])('%s says what it does not understand of %j', async (name, body, sentence) => {
+    await expect(control(fake, name, body)).rejects.toThrow(sentence)
   })
 })
 

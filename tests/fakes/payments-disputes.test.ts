@@ -1,10 +1,10 @@
 import type { PaymentsFake } from '@marram/fakes'
 import Stripe from 'stripe'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
+import { control } from '../support/control'
 import {
   checkoutParams,
   connectAccount,
-  control,
   movableClock,
   payFor,
   startPayments,

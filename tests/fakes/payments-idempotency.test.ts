@@ -1,13 +1,8 @@
 import type { PaymentsFake } from '@marram/fakes'
 import Stripe from 'stripe'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import {
-  checkoutParams,
-  connectAccount,
-  control,
-  movableClock,
-  startPayments,
-} from '../support/payments'
+import { control } from '../support/control'
+import { checkoutParams, connectAccount, movableClock, startPayments } from '../support/payments'
 
 const clock = movableClock('2027-04-06T10:00:00Z')
 

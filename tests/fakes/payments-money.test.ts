@@ -86,9 +86,16 @@ describe('a payment', () => {
   it('is not found by the platform or another account', async () => {
     const { id } = await pay()
     await expect(stripe.paymentIntents.retrieve(id)).rejects.toMatchObject({ statusCode: 404 })
-    const wrongPath = stripe.paymentIntents.retrieve(id, { expand: ['amount'] }, { stripeAccount })
-    await expect(wrongPath).rejects.toMatchObject({ statusCode: 400, param: 'expand' })
   })
+
+  it.each(['amount', 'currency', 'nothing', 'latest_charge.currency'])(
+    'opens no %s, which leads to no other object',
+    async (path) => {
+      const { id } = await pay()
+      const wrong = stripe.paymentIntents.retrieve(id, { expand: [path] }, { stripeAccount })
+      await expect(wrong).rejects.toMatchObject({ statusCode: 400, param: 'expand' })
+    },
+  )
 
   it('takes no application fee above its amount', async () => {
     await expect(create({ amount: 1_000, applicationFee: 1_001 })).rejects.toMatchObject({

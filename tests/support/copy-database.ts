@@ -11,7 +11,7 @@ export interface TestDatabase {
 }
 
 /** A database of one's own, copied from the migrated template in well under a second. */
-export async function copyDatabase(from: Template): Promise<TestDatabase> {
+export async function copyDatabase(from: Omit<Template, 'bin'>): Promise<TestDatabase> {
   const { superuserUrl, databasePort: port } = from
   const name = `test_${randomBytes(6).toString('hex')}`
   const superuser = connect({ url: superuserUrl, poolSize: 1, name: 'tests' })

@@ -16,7 +16,7 @@ export async function startPayments(
   return { fake, stripe: sdkFor(fake) }
 }
 
-export function sdkFor(fake: PaymentsFake, key = SECRET_KEY): Stripe {
+export function sdkFor(fake: { port: number }, key = SECRET_KEY): Stripe {
   return new Stripe(key, {
     host: '127.0.0.1',
     port: fake.port,
@@ -91,18 +91,6 @@ export function movableClock(start: string) {
 export function payByForm(url: string, card: string): Promise<Response> {
   const body = new URLSearchParams({ card, expiry: '12 / 34', cvc: '123', name: 'Test Card' })
   return fetch(url, { method: 'POST', body, redirect: 'manual' })
-}
-
-/** A control over HTTP, as another process uses it. @throws Error where it is refused. */
-export async function control(fake: PaymentsFake, name: string, body: object = {}) {
-  const response = await fetch(`${fake.url}/_control/${name}`, {
-    method: 'POST',
-    headers: { 'content-type': 'application/json' },
-    body: JSON.stringify(body),
-  })
-  if (!response.ok) throw new Error(`${name} was refused: ${await response.text()}`)
-  // Every control answers in this shape.
-  return ((await response.json()) as { outcome: unknown }).outcome
 }
 
 /** Pays a new checkout by a card, and gives what its payment intent is now. */

@@ -14,6 +14,8 @@ export const TEST_PASSWORDS = { owner: 'owner', app: 'app', dispatch: 'dispatch'
 
 /** The migrated database that every test database is a copy of. */
 export interface Template {
+  /** Where PostgreSQL's programs are. */
+  bin: string
   superuserUrl: string
   databasePort: number
   template: string
@@ -21,6 +23,7 @@ export interface Template {
 
 declare module 'vitest' {
   export interface ProvidedContext {
+    postgresBin: Template['bin']
     superuserUrl: Template['superuserUrl']
     databasePort: Template['databasePort']
     template: Template['template']
@@ -36,7 +39,12 @@ export async function makeTemplate(): Promise<Template> {
   const { isNew } = await makeDatabase(superuser, template)
   if (isNew) await fill(cluster.url(template), { port: cluster.port, template })
   await superuser.destroy()
-  return { superuserUrl: cluster.url('postgres'), databasePort: cluster.port, template }
+  return {
+    bin: cluster.bin,
+    superuserUrl: cluster.url('postgres'),
+    databasePort: cluster.port,
+    template,
+  }
 }
 
 async function fill(
@@ -57,7 +65,7 @@ async function fill(
 function fingerprint(): string {
   const hash = createHash('sha256')
   for (const name of readdirSync(MIGRATIONS).sort()) {
-    if (name.endsWith('.sql')) hash.update(readFileSync(join(MIGRATIONS, name)))
+    if (/^\d{4}-.*\.sql$/.test(name)) hash.update(readFileSync(join(MIGRATIONS, name)))
   }
   hash.update(readFileSync(resolve('apps/api/src/platform/outbox/events.ts')))
   hash.update(readFileSync(resolve('apps/api/src/platform/outbox/outbox.ts')))
@@ -68,6 +76,7 @@ function fingerprint(): string {
 /** Vitest's global set-up. */
 export default async function setup(project: TestProject): Promise<void> {
   const made = await makeTemplate()
+  project.provide('postgresBin', made.bin)
   project.provide('superuserUrl', made.superuserUrl)
   project.provide('databasePort', made.databasePort)
   project.provide('template', made.template)

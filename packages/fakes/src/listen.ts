@@ -1,6 +1,6 @@
 import { createServer, type Server } from 'node:http'
 import express, { type Express } from 'express'
-import { isLoopback, refuseOtherNames } from './safety'
+import { UnsafeError, isLoopback, refuseOtherNames } from './safety'
 
 /** An app for a stand-in: it answers to names of this machine only. */
 export function makeApp(): Express {
@@ -10,12 +10,12 @@ export function makeApp(): Express {
   return app
 }
 
-/** Starts an app on loopback. @throws Error for any other host. */
+/** Starts an app on loopback. @throws UnsafeError for any other host. */
 export async function listenOnLoopback(
   app: Express,
   { host = '127.0.0.1', port = 0 }: { host?: string | undefined; port?: number | undefined },
 ): Promise<{ server: Server; url: string; port: number }> {
-  if (!isLoopback(host)) throw new Error('A stand-in listens on this machine only.')
+  if (!isLoopback(host)) throw new UnsafeError('A stand-in listens on this machine only.')
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {
     server.once('error', reject)

@@ -5,15 +5,18 @@ import type { RequestHandler } from 'express'
  * machine, and takes no key that opens anything real.
  */
 
+/** What a stand-in does not do, however it is configured. */
+export class UnsafeError extends Error {}
+
 /** The names of this machine to itself: localhost, 127.0.0.0/8 and ::1, with or without brackets. */
 export function isLoopback(host: string): boolean {
   return host === 'localhost' || /^127(\.\d{1,3}){3}$/.test(host) || /^\[?::1\]?$/.test(host)
 }
 
-/** @throws Error for an address that another machine, or no machine, answers to. */
+/** @throws UnsafeError for an address that another machine, or no machine, answers to. */
 export function requireLoopback(url: string, what: string): void {
   if (!URL.canParse(url) || !isLoopback(new URL(url).hostname)) {
-    throw new Error(`The stand-in refuses ${what} off this machine.`)
+    throw new UnsafeError(`The stand-in refuses ${what} off this machine.`)
   }
 }
 
@@ -32,9 +35,9 @@ const LIVE_KEYS: readonly RegExp[] = [
   /^GOCSPX-/,
 ]
 
-/** @throws Error for a key as the vendor gives them out for real use; the key is not repeated. */
+/** @throws UnsafeError for a key as the vendor gives them out for real use; the key is not repeated. */
 export function requireNoLiveKey(key: string, what: string): void {
   if (LIVE_KEYS.some((shape) => shape.test(key))) {
-    throw new Error(`The stand-in refuses a live ${what}.`)
+    throw new UnsafeError(`The stand-in refuses a live ${what}.`)
   }
 }

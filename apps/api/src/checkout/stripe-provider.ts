@@ -103,15 +103,14 @@ export function makeStripeProvider(config: Config['payments']): PaymentsProvider
       const age = ageSeconds(signature, now)
       if (age === null || Math.abs(age) > WEBHOOK_TOLERANCE_SECONDS) return null
       try {
-        // The age was checked above, both ways; the SDK's own check only looks back.
-        const seconds = Math.floor(now.getTime() / 1000)
+        // The age was checked above, both ways; the SDK's own check only looks back, in milliseconds.
         const event = stripe.webhooks.constructEvent(
           body,
           signature,
           config.webhookSecret,
           WEBHOOK_TOLERANCE_SECONDS,
           undefined,
-          seconds,
+          now.getTime(),
         )
         const { id: objectId } = event.data.object as { id?: string }
         const { id, type, account = null } = event

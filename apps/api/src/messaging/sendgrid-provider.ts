@@ -29,7 +29,8 @@ export function makeSendgridProvider(config: Config['mail']): MailProvider {
                 {
                   content: Buffer.from(calendar.text, 'utf8').toString('base64'),
                   filename: 'clinic.ics',
-                  type: `text/calendar; charset=utf-8; method=${calendar.method}`,
+                  // The provider refuses any other parameter beside the method, and adds UTF-8.
+                  type: `text/calendar; method=${calendar.method}`,
                   disposition: 'attachment',
                 },
               ],

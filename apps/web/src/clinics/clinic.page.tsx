@@ -17,7 +17,10 @@ import { SessionCard } from './session-card'
 export const loader =
   (client: QueryClient) =>
   ({ params }: LoaderFunctionArgs) =>
-    client.ensureQueryData(clinicPageQuery(params['academy'] ?? '', params['clinic'] ?? ''))
+    client.query({
+      ...clinicPageQuery(params['academy'] ?? '', params['clinic'] ?? ''),
+      staleTime: 'static',
+    })
 
 export default function ClinicPageView() {
   const { academy: slug = '', clinic: clinicSlug = '' } = useParams()
@@ -41,7 +44,7 @@ export default function ClinicPageView() {
               Take a place
             </a>
             <Facts facts={factsOf(page, format)} />
-            <h3 className="mt-7 mb-2">{headOfDates(clinic)}</h3>
+            <h2 className="mt-7 mb-2 text-title">{headOfDates(clinic)}</h2>
             <SessionCard sessions={clinic.sessions} format={format} />
           </div>
           <TakePlace page={page} format={format} />

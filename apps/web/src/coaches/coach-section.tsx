@@ -69,12 +69,25 @@ function CoachDialog(props: { slug: string; coach: Coach | null; onClose: () => 
     invite: '',
   })
   const set = (change: Partial<typeof wanted>) => setWanted((had) => ({ ...had, ...change }))
-  const keep = useAcademyMutation(slug, () => {
+  const keep = useAcademyMutation(slug, async () => {
     const { name, initials, about, invite } = wanted
     const body = { name, about, ...(initials ? { initials } : {}) }
-    return coach
-      ? call('coaches.change', { academy: slug, params: { coachId: coach.id }, body })
-      : call('coaches.add', { academy: slug, body: { ...body, ...(invite ? { invite } : {}) } })
+    if (!coach) {
+      return call('coaches.add', {
+        academy: slug,
+        body: { ...body, ...(invite ? { invite } : {}) },
+      })
+    }
+    const changed = await call('coaches.change', {
+      academy: slug,
+      params: { coachId: coach.id },
+      body,
+    })
+    if (invite) {
+      const invitation = { email: invite, role: 'coach', coachId: coach.id } as const
+      await call('invitations.send', { academy: slug, body: invitation })
+    }
+    return changed
   })
   const { form, errors, sentence, isSending } = useForm(async () => {
     await keep.mutateAsync(undefined)
@@ -105,14 +118,14 @@ function CoachDialog(props: { slug: string; coach: Coach | null; onClose: () => 
           onChange={(event) => set({ about: event.target.value })}
           error={errors['about']}
         />
-        {!coach && (
+        {!coach?.accountId && (
           <Field
             label="E-mail"
             type="email"
             hint="An invitation goes there, so that they can take the register. It can wait."
             value={wanted.invite}
             onChange={(event) => set({ invite: event.target.value })}
-            error={errors['invite']}
+            error={errors['invite'] ?? errors['email']}
           />
         )}
         <div className="actions">

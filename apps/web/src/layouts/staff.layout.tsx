@@ -13,7 +13,7 @@ import { useAccent } from './accent'
 export const loader =
   (client: QueryClient) =>
   async ({ request, params }: LoaderFunctionArgs) => {
-    const session = await client.ensureQueryData(sessionQuery)
+    const session = await client.query({ ...sessionQuery, staleTime: 'static' })
     const url = new URL(request.url)
     if (!session.account) return redirect(paths.signIn(url.pathname + url.search))
     const roles = rolesIn(session, params['academy'] ?? '')
@@ -57,7 +57,7 @@ export default function StaffLayout() {
             <Pennon />
             {academy?.name}
           </Link>
-          <Link className="who" to={paths.family(slug)}>
+          <Link className="who" to={paths.family(slug)} aria-label={name}>
             <Initials of={initialsOf(name)} />
             <span>{name}</span>
           </Link>

@@ -26,10 +26,10 @@ export function FigureDrawer(props: {
     >
       <div className="dh">
         <div>
-          <h3>
+          <h2>
             {open.title}
             {figure.data && `: ${format.money(figure.data.totalMinor)}`}
-          </h3>
+          </h2>
           <p className="soft">{figure.data && transfersInWords(figure.data.transfers.length)}</p>
         </div>
         <button type="button" className="linkish ml-auto" onClick={onClose}>

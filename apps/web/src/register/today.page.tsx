@@ -1,24 +1,27 @@
-import { useQuery, type QueryClient } from '@tanstack/react-query'
+import { useQuery, useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
 import { useState } from 'react'
 import { Link, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router'
 import { formatLocalDay, formatTime } from '@marram/schedule/format'
+import { academyQuery } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
+import { buttonClass } from '../ui/button'
 import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
 import { DaySheet } from './day-sheet'
 import { dayQuery, type Register } from './queries'
 
-const LOCALE = navigator.language.startsWith('en-') ? navigator.language : 'en-IE'
-
-/** Today on this device, as a local date. */
-const todayLocal = (): string => new Intl.DateTimeFormat('en-CA').format(new Date(Date.now()))
+/** Today where the academy is, as a local date. */
+const todayIn = (timeZone: string): string =>
+  new Intl.DateTimeFormat('en-CA', { timeZone }).format(new Date(Date.now()))
 
 export const loader =
   (client: QueryClient) =>
-  ({ params, request }: LoaderFunctionArgs) => {
-    const day = new URL(request.url).searchParams.get('day') ?? todayLocal()
-    void client.prefetchQuery(dayQuery(params['academy'] ?? '', day))
+  async ({ params, request }: LoaderFunctionArgs) => {
+    const slug = params['academy'] ?? ''
+    const { zone } = await client.query({ ...academyQuery(slug), staleTime: 'static' })
+    const day = new URL(request.url).searchParams.get('day') ?? todayIn(zone)
+    void client.query(dayQuery(slug, day)).catch(() => undefined)
     return null
   }
 
@@ -26,10 +29,12 @@ export const loader =
 export default function TodayPage() {
   const { academy: slug = '' } = useParams()
   const [query] = useSearchParams()
-  const date = query.get('day') ?? todayLocal()
+  const { data: academy } = useSuspenseQuery(academyQuery(slug))
+  const { locale } = academy
+  const date = query.get('day') ?? todayIn(academy.zone)
   const day = useQuery(dayQuery(slug, date))
   const [chosen, setChosen] = useState<string | null>(null)
-  const title = formatLocalDay({ dayLocal: date, locale: LOCALE, style: 'weekday-long' })
+  const title = formatLocalDay({ dayLocal: date, locale, style: 'weekday' })
   useTitle(title)
 
   if (day.isPending) {
@@ -53,9 +58,21 @@ export default function TodayPage() {
     <main id="main" className="hand">
       <div className="bar">
         <h1 className="text-name">{title}</h1>
-        <span className="actions note">
-          <Link to={paths.today(slug, shift(date, -1))}>Day before</Link>
-          <Link to={paths.today(slug, shift(date, 1))}>Day after</Link>
+        <span className="actions">
+          <Link
+            className={buttonClass()}
+            to={paths.today(slug, shift(date, -1))}
+            aria-label="The day before"
+          >
+            ‹
+          </Link>
+          <Link
+            className={buttonClass()}
+            to={paths.today(slug, shift(date, 1))}
+            aria-label="The day after"
+          >
+            ›
+          </Link>
         </span>
       </div>
       {registers.length > 1 && (
@@ -70,7 +87,7 @@ export default function TodayPage() {
                 setChosen(register.session.id)
               }}
             >
-              {formatTime({ at: register.session.startsAt, zone, locale: LOCALE })}
+              {formatTime({ at: register.session.startsAt, zone, locale })}
               <small>{stateOf(register)}</small>
             </a>
           ))}
@@ -82,7 +99,7 @@ export default function TodayPage() {
           academy={slug}
           date={date}
           register={current}
-          locale={LOCALE}
+          locale={locale}
         />
       ) : (
         <div className="p-4">

@@ -1,5 +1,12 @@
 import { escapeHtml, page } from '../page'
-import type { KeptMail } from './mail-fake'
+import type { Fate, KeptMail } from './message'
+
+const FATES: Readonly<Record<Fate, string>> = {
+  delivered: 'delivered',
+  bounce: 'came back: there is no such mailbox',
+  dropped: 'not sent on',
+  spamreport: 'delivered, and reported as spam',
+}
 
 /** The mailbox: everything that was sent, newest first. */
 export function mailboxPage(messages: readonly KeptMail[], to: string): string {
@@ -31,7 +38,8 @@ export function messagePage(message: KeptMail): string {
     message.subject,
     `<p><a href="/">All mail</a></p><h1>${escapeHtml(message.subject)}</h1>
      <table><tr><th>From</th><td>${escapeHtml(`${message.fromName} <${message.fromEmail}>`)}</td></tr>
-     <tr><th>To</th><td>${escapeHtml(message.to)}</td></tr></table>
+     <tr><th>To</th><td>${escapeHtml(message.to)}</td></tr>
+     <tr><th>What became of it</th><td>${FATES[message.fate]}</td></tr></table>
      <h2>As it looks</h2><iframe title="The message" sandbox="allow-popups" srcdoc="${escapeHtml(message.html.replace('<head>', '<head><base target="_blank">'))}"></iframe>
      <h2>As text</h2><pre>${linked(message.text)}</pre>${parts}`,
   )

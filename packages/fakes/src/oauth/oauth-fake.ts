@@ -1,108 +1,43 @@
-import { randomBytes } from 'node:crypto'
-import express, { urlencoded } from 'express'
-import { closeServer, listenOnLoopback } from '../listen'
-import { escapeHtml, page } from '../page'
-
-export interface FakePerson {
-  sub: string
-  name: string
-  email: string
-  isVerified: boolean
-}
+import { urlencoded, type Express, type Request, type Response } from 'express'
+import { closeServer, listenOnLoopback, makeApp } from '../listen'
+import { isLoopback, requireNoLiveKey } from '../safety'
+import { TOKEN_SECONDS, makeGrants, type Grants } from './grants'
+import { PEOPLE, personByEmail, type FakePerson } from './people'
+import { pickPage, refusalPage } from './pick-page'
 
 export interface OauthFakeOptions {
+  host?: string
   port?: number
   clientId: string
   clientSecret: string
-  people?: FakePerson[]
+  people?: readonly FakePerson[]
   now?: () => Date
 }
 
 export interface OauthFake {
   url: string
   port: number
-  close(): Promise<void>
+  close: () => Promise<void>
 }
 
-const CODE_SECONDS = 600
-
-const PEOPLE: FakePerson[] = [
-  { sub: '100001', name: 'Greta Maslow', email: 'greta.maslow@mail.example', isVerified: true },
-  { sub: '100002', name: 'Hugo Vandeleur', email: 'hugo.vandeleur@mail.example', isVerified: true },
-  { sub: '100003', name: 'Vera Quirke', email: 'vera.quirke@mail.example', isVerified: false },
-]
+interface Provider {
+  clientId: string
+  clientSecret: string
+  people: FakePerson[]
+  grants: Grants
+}
 
 /** Starts an identity provider's stand-in on loopback: a page to pick who signs in. */
 export async function startOauthFake(options: OauthFakeOptions): Promise<OauthFake> {
-  const now = options.now ?? (() => new Date())
+  const { clientId, clientSecret } = options
+  requireNoLiveKey(clientId, 'client')
+  requireNoLiveKey(clientSecret, 'client secret')
   const people = [...(options.people ?? PEOPLE)]
-  const codes = new Map<string, { sub: string; redirectUri: string; expires: number }>()
-  const tokens = new Map<string, string>()
-  const app = express()
-  app.disable('x-powered-by')
-  app.use(urlencoded({ extended: false }))
-
-  app.get('/authorize', (request, response) => {
-    const asked = request.query as Record<string, string>
-    if (asked['client_id'] !== options.clientId || asked['response_type'] !== 'code') {
-      return void response.status(400).send(page('Sign in', '<h1>This app is not known here</h1>'))
-    }
-    response.send(pickPage(people, asked))
-  })
-  app.post('/authorize', (request, response) => {
-    const body = request.body as Record<string, string>
-    const redirect = new URL(body['redirect_uri'] ?? '')
-    if (body['state']) redirect.searchParams.set('state', body['state'])
-    if (body['sub'] === 'nobody') redirect.searchParams.set('error', 'access_denied')
-    else {
-      const sub = body['sub'] || newPerson(people, body['email'] ?? '')
-      const code = randomBytes(16).toString('hex')
-      const expires = now().getTime() / 1000 + CODE_SECONDS
-      codes.set(code, { sub, redirectUri: body['redirect_uri'] ?? '', expires })
-      redirect.searchParams.set('code', code)
-    }
-    response.redirect(303, redirect.toString())
-  })
-  app.post('/token', (request, response) => {
-    const body = request.body as Record<string, string>
-    const refuse = (error: string) => response.status(400).json({ error })
-    if (body['client_id'] !== options.clientId || body['client_secret'] !== options.clientSecret) {
-      return void response.status(401).json({ error: 'invalid_client' })
-    }
-    if (body['grant_type'] !== 'authorization_code') return void refuse('unsupported_grant_type')
-    const code = codes.get(body['code'] ?? '')
-    // A code works once, whatever comes of it.
-    codes.delete(body['code'] ?? '')
-    const isGood =
-      code && code.redirectUri === body['redirect_uri'] && code.expires >= now().getTime() / 1000
-    if (!isGood) return void refuse('invalid_grant')
-    const token = randomBytes(16).toString('hex')
-    tokens.set(token, code.sub)
-    response.json({
-      access_token: token,
-      token_type: 'Bearer',
-      expires_in: 3600,
-      scope: 'openid email profile',
-    })
-  })
-  app.get('/userinfo', (request, response) => {
-    const given =
-      request.get('authorization')?.replace(/^Bearer /, '') ??
-      String(request.query['access_token'] ?? '')
-    const person = people.find(({ sub }) => sub === tokens.get(given))
-    if (!person) return void response.status(401).json({ error: 'invalid_token' })
-    const { sub, name, email, isVerified } = person
-    const [given_name, ...rest] = name.split(' ')
-    response.json({
-      sub,
-      name,
-      given_name,
-      family_name: rest.join(' '),
-      email,
-      email_verified: isVerified,
-    })
-  })
-
+  const grants = makeGrants(options.now ?? (() => new Date()))
+  const app = makeApp()
+  const provider: Provider = { clientId, clientSecret, people, grants }
+  authorizeRoutes(app, provider)
+  tokenRoutes(app, provider)
   const listening = await listenOnLoopback(app, options)
   return {
     url: listening.url,
@@ -111,30 +46,83 @@ export async function startOauthFake(options: OauthFakeOptions): Promise<OauthFa
   }
 }
 
-/** Somebody typed in by address; the same address is the same person next time. */
-function newPerson(people: FakePerson[], email: string): string {
-  const had = people.find((person) => person.email === email)
-  if (had) return had.sub
-  const sub = String(200_000 + people.length)
-  people.push({ sub, name: email.split('@')[0] ?? email, email, isVerified: true })
-  return sub
+/** The page, and what a person answers on it. */
+function authorizeRoutes(app: Express, { clientId, people, grants }: Provider): void {
+  const refuse = (response: Response, sentence: string) =>
+    void response.status(400).send(refusalPage(sentence))
+  const isOurs = (uri: string) => URL.canParse(uri) && isLoopback(new URL(uri).hostname)
+
+  app.get('/authorize', (request, response) => {
+    const asked = textsOf(request.query)
+    const { redirect_uri: redirectUri = '', state = '', scope = '' } = asked
+    if (asked['client_id'] !== clientId) return refuse(response, 'This app is not known here.')
+    if (asked['response_type'] !== 'code') return refuse(response, 'Only codes are given here.')
+    if (scope === '') return refuse(response, 'The app does not say what it wants to know.')
+    if (!isOurs(redirectUri)) return refuse(response, 'The way back leads off this machine.')
+    response.send(pickPage(people, { redirectUri, state, scope }))
+  })
+  app.post('/authorize', urlencoded({ extended: false }), (request, response) => {
+    const { redirect_uri: redirectUri = '', state, scope = '', sub, email } = textsOf(request.body)
+    if (!isOurs(redirectUri)) return refuse(response, 'The way back leads off this machine.')
+    const back = new URL(redirectUri)
+    if (state) back.searchParams.set('state', state)
+    if (sub === 'nobody') {
+      back.searchParams.set('error', 'access_denied')
+      return response.redirect(303, back.toString())
+    }
+    const person = email ? personByEmail(people, email) : people.find((one) => one.sub === sub)
+    if (!person) return refuse(response, 'There is no such person.')
+    back.searchParams.set('code', grants.makeCode({ sub: person.sub, scope, redirectUri }))
+    response.redirect(303, back.toString())
+  })
 }
 
-function pickPage(people: readonly FakePerson[], asked: Record<string, string>): string {
-  const hidden = ['redirect_uri', 'state']
-    .map((name) => `<input type="hidden" name="${name}" value="${escapeHtml(asked[name] ?? '')}">`)
-    .join('')
-  const buttons = people
-    .map(
-      ({ sub, name, email, isVerified }) =>
-        `<p><button name="sub" value="${sub}">${escapeHtml(name)}, ${escapeHtml(email)}${isVerified ? '' : ' (not confirmed)'}</button></p>`,
-    )
-    .join('')
-  return page(
-    'Who are you?',
-    `<h1>Who are you?</h1><p class="note">The local stand-in of an identity provider. All people are invented.</p>
-     <form method="post" action="/authorize">${hidden}${buttons}<p><button name="sub" value="nobody">Cancel</button></p></form>
-     <form method="post" action="/authorize">${hidden}<label for="email">Somebody else</label>
-     <input id="email" name="email" type="email" required><p><button>Sign in</button></p></form>`,
+/** What the app asks for behind the person's back: a token, and who they are. */
+function tokenRoutes(app: Express, provider: Provider): void {
+  const { clientId, clientSecret, people, grants } = provider
+  const refuse = (response: Response, status: number, error: string, description: string) =>
+    void response.status(status).json({ error, error_description: description })
+
+  app.post('/token', urlencoded({ extended: false }), (request, response) => {
+    const body = textsOf(request.body)
+    if (body['client_id'] !== clientId || body['client_secret'] !== clientSecret) {
+      return refuse(response, 401, 'invalid_client', 'Unauthorized')
+    }
+    if (body['grant_type'] !== 'authorization_code') {
+      return refuse(response, 400, 'unsupported_grant_type', 'Only codes are exchanged here.')
+    }
+    const granted = grants.exchange(body['code'] ?? '', body['redirect_uri'] ?? '')
+    if (!granted) return refuse(response, 400, 'invalid_grant', 'Bad Request')
+    const { token: access_token, scope } = granted
+    response.json({ access_token, token_type: 'Bearer', expires_in: TOKEN_SECONDS, scope })
+  })
+  app.get('/userinfo', (request, response) => {
+    const granted = grants.read(tokenOf(request))
+    const person = people.find(({ sub }) => sub === granted?.sub)
+    if (!granted || !person) return refuse(response, 401, 'invalid_request', 'Invalid Credentials')
+    response.json(claimsOf(person, granted.scope.split(' ')))
+  })
+}
+
+/** What a token may read of a person, as its scopes say. */
+function claimsOf({ sub, name, email, isVerified }: FakePerson, scopes: readonly string[]) {
+  const [given_name, ...rest] = name.split(' ')
+  return {
+    sub,
+    ...(scopes.includes('profile') ? { name, given_name, family_name: rest.join(' ') } : {}),
+    ...(scopes.includes('email') ? { email, email_verified: isVerified } : {}),
+  }
+}
+
+const tokenOf = (request: Request): string =>
+  request.get('authorization')?.replace(/^Bearer /, '') ??
+  textsOf(request.query)['access_token'] ??
+  ''
+
+/** The fields that are texts; a name given twice is none. */
+function textsOf(fields: unknown): Partial<Record<string, string>> {
+  const entries: [string, unknown][] = Object.entries(Object(fields) as object)
+  return Object.fromEntries(
+    entries.filter((entry): entry is [string, string] => typeof entry[1] === 'string'),
   )
 }

@@ -13,8 +13,6 @@ export interface Machine extends Accounts, Checkouts, Charges, Refunds, Disputes
   /** Lets everything happen whose time has come. */
   tick: () => void
   advance: (seconds: number) => void
-  /** Sets the provider's clock, which then goes on as the machine's own does. */
-  setClock: (unixSeconds: number) => void
 }
 
 /** The provider as a state machine. `tell` is called for everything that a webhook speaks of. */
@@ -52,5 +50,5 @@ export function makeMachine(given: {
     state.clockOffsetSeconds += seconds
     tick()
   }
-  return { ...parts, state, now, tick, advance, setClock: (to) => advance(to - now()) }
+  return { ...parts, state, now, tick, advance }
 }

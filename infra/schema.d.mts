@@ -1,0 +1,1 @@
+export function dumpSchema(options: { bin: string; url: string }): Promise<string>
