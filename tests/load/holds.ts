@@ -10,7 +10,7 @@ import { signGolfersIn } from './signed-in'
 import { answersPerSecond, type Call } from './traffic'
 import { forgetHolds } from './wishes'
 
-const ROUNDS = 9
+const ROUNDS = 7
 const HOLDS = 400
 const AT_ONCE = 8
 
