@@ -11,6 +11,8 @@ export default defineConfig({
             'apps/**/*.test.{ts,tsx}',
             'tests/{architecture,reference,fakes}/**/*.test.ts',
           ],
+          // Long enough for a machine that does other work meanwhile; nothing here measures time.
+          testTimeout: 60_000,
         },
       },
       {
@@ -18,8 +20,8 @@ export default defineConfig({
           name: 'api',
           include: ['tests/{api,tenancy}/**/*.test.ts'],
           globalSetup: ['tests/support/template.ts'],
-          testTimeout: 30_000,
-          hookTimeout: 30_000,
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
         },
       },
     ],

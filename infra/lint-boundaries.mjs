@@ -40,22 +40,48 @@ const databaseRule = {
 function above(level) {
   return FEATURES_UPWARDS.slice(level + 1)
     .flat()
-    .map((name) => `../${name}/**`)
+    .flatMap((name) => [`../${name}/**`, `../../${name}/**`])
 }
 
+/** Files that touch the database or a vendor; like all others they import downwards only. */
+const AT_THE_EDGE = [
+  '**/*-queries.ts',
+  '**/queries.ts',
+  '**/models.ts',
+  '**/*-provider.ts',
+  '**/webhooks.ts',
+  '**/*.test.ts',
+]
+
+// Where two rules fit a file the later counts, so it repeats what the earlier says.
 const perFeature = FEATURES_UPWARDS.flatMap((names, level) =>
-  names.map((name) => {
-    const patterns = [vendorRule, databaseRule]
+  names.flatMap((name) => {
+    const files = [`apps/api/src/${name}/**/*.ts`]
     const forbidden = above(level)
-    if (forbidden.length > 0) patterns.push(pattern(forbidden, 'Features import downwards only.'))
-    return rule([`apps/api/src/${name}/**/*.ts`], patterns, [
-      '**/*-queries.ts',
-      '**/queries.ts',
-      '**/models.ts',
-      '**/*-provider.ts',
-      '**/webhooks.ts',
-      '**/*.test.ts',
-    ])
+    const upwards =
+      forbidden.length > 0 ? [pattern(forbidden, 'Features import downwards only.')] : []
+    return [
+      ...(upwards.length > 0 ? [rule(files, upwards)] : []),
+      rule(files, [vendorRule, databaseRule, ...upwards], AT_THE_EDGE),
+    ]
+  }),
+)
+
+const webRule = pattern(
+  ['**/api/src/**', '@marram/fakes'],
+  'The web knows the API by its contract only.',
+)
+
+/** The web's features import downwards too; only a page may reach upwards, to compose. */
+const perWebFeature = FEATURES_UPWARDS.flatMap((names, level) =>
+  names.map((name) => {
+    const forbidden = above(level)
+    if (forbidden.length === 0) return {}
+    return rule(
+      [`apps/web/src/${name}/**/*.{ts,tsx}`],
+      [webRule, pattern(forbidden, 'Features import downwards only; a page composes them.')],
+      ['**/*.page.tsx', '**/*.test.ts'],
+    )
   }),
 )
 
@@ -89,6 +115,17 @@ export const boundaries = [
     ],
   ),
   ...perFeature,
+  rule(['apps/web/src/**/*.{ts,tsx}'], [webRule]),
+  ...perWebFeature,
+  rule(
+    ['apps/web/src/ui/**/*.{ts,tsx}'],
+    [
+      pattern(
+        ['../*', 'react-router', '@tanstack/*', '@marram/*'],
+        'A component knows no domain, router or query.',
+      ),
+    ],
+  ),
   {
     files: ['apps/api/src/**/*.ts'],
     ignores: ['apps/api/src/platform/clock.ts', '**/*.test.ts'],

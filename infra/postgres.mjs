@@ -10,6 +10,7 @@ import {
 } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { dirname, join } from 'node:path'
+import { step } from './console.mjs'
 import { findFreePort } from './ports.mjs'
 import { Problem, explain } from './problem.mjs'
 import { run } from './run.mjs'
@@ -23,7 +24,7 @@ const SUPERUSER = 'marram_root'
  */
 export async function ensurePostgres({ folder, say }) {
   try {
-    const bin = findPrograms() ?? (await installPostgres(say))
+    const bin = findPrograms() ?? (await installPostgres())
     const as = serverAccount()
     const cluster = await placeCluster({ folder, as })
     const password = readOrMakePassword(folder)
@@ -56,7 +57,7 @@ function isComplete(folder) {
   return ['postgres', 'initdb', 'pg_ctl'].every((name) => existsSync(join(folder, name)))
 }
 
-async function installPostgres(say) {
+async function installPostgres() {
   if (process.getuid() !== 0) {
     throw new Problem(
       'PostgreSQL is not installed and this account may not install it. ' +
@@ -66,14 +67,15 @@ async function installPostgres(say) {
   if (!existsSync('/usr/bin/apt-get')) {
     throw new Problem('PostgreSQL is not installed. Install version 15 or later, then start again.')
   }
-  say('Installing PostgreSQL from Debian packages (about a minute)')
   // Debian would otherwise make and start a cluster of its own beside ours.
   mkdirSync('/etc/postgresql-common/createcluster.d', { recursive: true })
   writeFileSync(
     '/etc/postgresql-common/createcluster.d/marram.conf',
     'create_main_cluster = false\n',
   )
-  await aptInstall(['postgresql'])
+  await step('Installing PostgreSQL from Debian packages (about a minute)', () =>
+    aptInstall(['postgresql']),
+  )
   const found = findPrograms()
   if (!found) throw new Problem('PostgreSQL was installed but its programs were not found.')
   return found

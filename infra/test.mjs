@@ -36,7 +36,9 @@ async function main() {
   const wanted = process.argv.slice(2).filter((name) => !name.startsWith('--'))
   const unknown = wanted.filter((name) => !PARTS.some((part) => part.name === name))
   if (unknown.length > 0) {
-    throw new Problem(`There is no part "${unknown[0]}". There are: ${PARTS.map(({ name }) => name).join(', ')}.`)
+    throw new Problem(
+      `There is no part "${unknown[0]}". There are: ${PARTS.map(({ name }) => name).join(', ')}.`,
+    )
   }
   const env = { ...process.env, ...(process.argv.includes('--deep') ? { MARRAM_DEEP: '1' } : {}) }
   await ensurePackages(root)
@@ -57,7 +59,9 @@ async function main() {
       const isBroken = code !== 0 && failed === 0
       total.passed += passed
       total.failed += failed + (isBroken ? 1 : 0)
-      line(`   ${part.name}: ${passed} passed, ${failed + (isBroken ? 1 : 0)} failed, ${seconds(began)} s`)
+      line(
+        `   ${part.name}: ${passed} passed, ${failed + (isBroken ? 1 : 0)} failed, ${seconds(began)} s`,
+      )
     }
   } finally {
     await cluster.stop().catch(() => {})
@@ -117,7 +121,9 @@ async function ensureDebian() {
   }
   if (missing.length === 0) return
   if (process.getuid() !== 0) {
-    throw new Problem(`The tests need ${missing.join(', ')}. Run "sudo apt-get install ${missing.join(' ')}" once.`)
+    throw new Problem(
+      `The tests need ${missing.join(', ')}. Run "sudo apt-get install ${missing.join(' ')}" once.`,
+    )
   }
   line(`Installing ${missing.join(', ')} from Debian packages`)
   await aptInstall(missing)

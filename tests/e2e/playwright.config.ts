@@ -21,7 +21,7 @@ export default defineConfig({
   outputDir: '../../.marram/results/browser',
   globalSetup: './template.setup.ts',
   workers: 2,
-  timeout: 120_000,
+  timeout: 240_000,
   expect: { timeout: 10_000 },
   reporter: [['line'], ['json']],
   use: {

@@ -33,16 +33,19 @@ export async function signUp(
 /** Confirms an address as a person does: with the link that was mailed to it. */
 export async function verify(world: World, person: Person, email: string): Promise<void> {
   await world.drain()
-  await person.must('accounts.verify', { body: { token: secretMailedTo(world, email) } })
+  await person.must('accounts.verify', { body: { token: secretMailedTo(world, email, 'verify') } })
 }
 
-/** The secret of the newest link that was mailed to an address. */
-export function secretMailedTo(world: World, email: string): string {
-  const secrets = world.mail
-    .messagesTo(email)
-    .flatMap(({ text }) => /#([A-Za-z0-9_-]{43})/.exec(text)?.[1] ?? [])
+/** The secret of the newest link of a kind that was mailed to an address. */
+export function secretMailedTo(
+  world: World,
+  email: string,
+  kind: 'verify' | 'reset' | 'invitation',
+): string {
+  const link = new RegExp(`/${kind}#([A-Za-z0-9_-]{43})`)
+  const secrets = world.mail.messagesTo(email).flatMap(({ text }) => link.exec(text)?.[1] ?? [])
   const newest = secrets.at(-1)
-  if (!newest) throw new Error(`No link was mailed to ${email}.`)
+  if (!newest) throw new Error(`No such link was mailed to ${email}: ${kind}.`)
   return newest
 }
 
@@ -59,7 +62,7 @@ export async function joinStaff(
     body: { email, role, ...(coachId ? { coachId } : {}) },
   })
   await world.drain()
-  const token = secretMailedTo(world, email)
+  const token = secretMailedTo(world, email, 'invitation')
   await joining.person.must('invitations.accept', { body: { token } })
   return joining
 }

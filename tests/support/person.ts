@@ -7,6 +7,8 @@ export interface Reply<T> {
   answer: T
   problem: ProblemDocument | null
   text: string
+  /** Where a redirect leads; empty without one. */
+  location: string
 }
 
 export interface CallOptions<K extends RouteKey> {
@@ -21,6 +23,7 @@ export interface CallOptions<K extends RouteKey> {
 export class Person {
   readonly #baseUrl: string
   readonly #cookies = new Map<string, string>()
+  readonly #lines = new Map<string, string>()
   #token = ''
 
   constructor(baseUrl: string) {
@@ -76,11 +79,22 @@ export class Person {
       answer: parsed,
       problem: isProblem ? (parsed as ProblemDocument) : null,
       text,
+      location: response.headers.get('location') ?? '',
     }
   }
 
   cookie(name: string): string | undefined {
     return this.#cookies.get(name)
+  }
+
+  /** The line in which a cookie was last set, with all that it says of it. */
+  cookieLine(name: string): string | undefined {
+    return this.#lines.get(name)
+  }
+
+  /** Puts a cookie there that somebody else was given. */
+  putCookie(name: string, value: string): void {
+    this.#cookies.set(name, value)
   }
 
   async #fetchToken(): Promise<void> {
@@ -92,6 +106,7 @@ export class Person {
     const [pair = ''] = line.split(';')
     const at = pair.indexOf('=')
     const value = pair.slice(at + 1)
+    this.#lines.set(pair.slice(0, at), line)
     if (value) this.#cookies.set(pair.slice(0, at), value)
     else this.#cookies.delete(pair.slice(0, at))
   }

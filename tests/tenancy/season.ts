@@ -62,6 +62,7 @@ export async function sellSeason(world: World): Promise<Season> {
 
   const putting = await publishClinic(academy, {
     title: 'Holing out',
+    capacity: 100,
     startsOnLocal: '2031-04-02',
     rrule: 'FREQ=WEEKLY;BYDAY=WE;COUNT=4',
   })

@@ -1,6 +1,4 @@
-import type { Role } from '@marram/contract'
 import express, { type Express } from 'express'
-import { rolesIn } from './academies/academies'
 import { academyHandlers } from './academies/routes'
 import { accountHandlers } from './accounts/routes'
 import { makePassport, providerRoutes } from './accounts/strategies'
@@ -60,20 +58,17 @@ export function makeApp(services: Services, options: AppOptions): Express {
   app.use('/api', readJsonBody)
   app.use(
     makeApiRouter(services, {
-      rolesOf: (place): Promise<Role[]> => rolesIn(services, place),
-      handlers: {
-        ...accountHandlers(services, passport),
-        ...academyHandlers(services),
-        ...venueHandlers(services),
-        ...coachHandlers(services),
-        ...golferHandlers(services),
-        ...clinicHandlers(services),
-        ...enrolmentHandlers(services, { show: showEnrolments, readCredit: readCreditOfAccount }),
-        ...registerHandlers(services),
-        ...checkoutHandlers(services, payments),
-        ...ledgerHandlers(services, readBooks(services)),
-        ...demoHandlers(services),
-      },
+      ...accountHandlers(services, passport),
+      ...academyHandlers(services),
+      ...venueHandlers(services),
+      ...coachHandlers(services),
+      ...golferHandlers(services),
+      ...clinicHandlers(services),
+      ...enrolmentHandlers(services, { show: showEnrolments, readCredit: readCreditOfAccount }),
+      ...registerHandlers(services),
+      ...checkoutHandlers(services, payments),
+      ...ledgerHandlers(services, readBooks(services)),
+      ...demoHandlers(services),
     }),
   )
   app.use('/api', noSuchRoute)

@@ -133,6 +133,16 @@ describe('the price of a run', () => {
     )
   })
 
+  it('is the allocation by equal weights, of any sign and size', () => {
+    const price = fc.oneof(totalMinor, fc.maxSafeInteger())
+    fc.assert(
+      fc.property(price, fc.integer({ min: 1, max: 60 }), (runPriceMinor, sessionCount) => {
+        const byWeights = allocateByLargestRemainder(runPriceMinor, Array(sessionCount).fill(1))
+        expect(splitRunPrice({ runPriceMinor, sessionCount })).toEqual(byWeights)
+      }),
+    )
+  })
+
   it('refuses a run without sessions, and more remaining than there are', () => {
     expect(() => splitRunPrice({ runPriceMinor: 1, sessionCount: 0 })).toThrow(RangeError)
     for (const remainingCount of [-1, 4, 1.5]) {

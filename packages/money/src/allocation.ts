@@ -47,7 +47,14 @@ export function splitRunPrice(run: { runPriceMinor: number; sessionCount: number
   if (!Number.isSafeInteger(sessionCount) || sessionCount < 1) {
     throw new RangeError(`A run of ${sessionCount} sessions has no price to split`)
   }
-  return allocateByLargestRemainder(runPriceMinor, Array<number>(sessionCount).fill(1))
+  // Equal weights need no fractions: every share is the same, and the first few carry the odd units.
+  const size = Math.abs(toMinor(runPriceMinor))
+  const odd = size % sessionCount
+  const even = (size - odd) / sessionCount
+  return Array.from({ length: sessionCount }, (_, index) => {
+    const share = index < odd ? even + 1 : even
+    return runPriceMinor < 0 ? 0 - share : share
+  })
 }
 
 /**

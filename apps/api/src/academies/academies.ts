@@ -1,4 +1,4 @@
-import type { Answer, Parsed, Role } from '@marram/contract'
+import type { Answer, Parsed } from '@marram/contract'
 import { Problem } from '../platform/errors'
 import { newId } from '../platform/ids'
 import type { Services } from '../platform/services'
@@ -14,7 +14,7 @@ import {
   startingSettings,
 } from './defaults'
 import type { Academy } from './models'
-import { addRole, insertAcademy, listRoles, readAcademy, updateAcademy } from './queries'
+import { addRole, insertAcademy, readAcademy, updateAcademy } from './queries'
 import { isReservedSlug, sortTiers, toSlug } from './rules'
 
 type AcademyView = Answer<'academies.read'>
@@ -103,14 +103,6 @@ export async function publishAcademy(
   })
 }
 
-/** The roles of a person in an academy; none for a stranger. */
-export async function rolesIn(
-  { db }: Services,
-  { academyId, accountId }: { academyId: string; accountId: string },
-): Promise<Role[]> {
-  return inAcademy(db, academyId, (trx) => listRoles(trx, accountId), { readOnly: true })
-}
-
 /** Makes sure that a person who takes a place here has the golfer's role. */
 export async function joinAsGolfer(
   trx: AcademyTrx,
@@ -134,5 +126,5 @@ export function viewAcademy(academy: Academy): AcademyView {
   }
 }
 
-export { readAcademy, updateAcademy, addRole, listRoles } from './queries'
+export { readAcademy, updateAcademy, addRole } from './queries'
 export type { Academy, RefundTier } from './models'

@@ -21,11 +21,6 @@ export async function updateAcademy(trx: AcademyTrx, change: Partial<Academy>): 
   return readAcademy(trx)
 }
 
-export async function listRoles(trx: AcademyTrx, accountId: string): Promise<Role[]> {
-  const rows = await MembershipRow.query(trx).where({ accountId }).select('role')
-  return rows.map(({ role }) => role)
-}
-
 export async function addRole(
   trx: AcademyTrx,
   row: { accountId: string; role: Role; createdAt: Date },

@@ -1,10 +1,9 @@
 import type { Handlers } from '../platform/http/context'
-import { asAcademy, asPerson, asStaff } from '../platform/http/narrow'
+import { asAcademy, asPerson } from '../platform/http/narrow'
 import type { Services } from '../platform/services'
 import { listPublishedAcademies } from '../platform/tenancy/look-ups'
-import { inAcademy } from '../platform/tenancy/transaction'
 import { changeSettings, checkSlug, openAcademy, publishAcademy, readSettings } from './academies'
-import { invite, readInvitation, readStaff, removeStaff } from './staff'
+import { readInvitation, readStaff, removeStaff } from './staff'
 
 export function academyHandlers(services: Services): Handlers {
   return {
@@ -26,12 +25,6 @@ export function academyHandlers(services: Services): Handlers {
     'staff.remove': async ({ params }, context) => {
       await removeStaff(services, { academyId: asAcademy(context).academyId, ...params })
       return null
-    },
-    'invitations.send': ({ body }, context) => {
-      const { academyId, account } = asStaff(context)
-      return inAcademy(services.db, academyId, (trx) =>
-        invite(services, trx, { ...body, academyId, invitedBy: account.id }),
-      )
     },
     'invitations.read': ({ body }) => readInvitation(services, body.token),
   }

@@ -128,7 +128,7 @@ export async function takeUpInvitation(
   alsoDo: (trx: AcademyTrx, accepted: Accepted) => Promise<void>,
 ): Promise<Accepted> {
   return inInvitation(services, secret, async (trx, invitation) => {
-    const account = await findAccountById(services.db, accountId)
+    const account = await findAccountById(trx, accountId)
     if (account?.email !== invitation.email) {
       throw new Problem('not-allowed', `This invitation is for ${invitation.email}.`)
     }

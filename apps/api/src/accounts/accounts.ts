@@ -12,6 +12,7 @@ import {
   insertAccount,
   insertIdentity,
   insertLink,
+  lockAccountByEmail,
   updateAccount,
   useLink,
   type Account,
@@ -49,24 +50,32 @@ export async function signIn(
   { db, clock }: Services,
   { email, password }: { email: string; password: string },
 ): Promise<string> {
-  const account = await findAccountByEmail(db, email)
   const now = clock.now()
-  if (account?.mayTryAt && now < account.mayTryAt) {
+  const account = await inPlain(db, (trx) => countTry(trx, { email, now }))
+  const fits = await isPassword(account?.passwordHash ?? null, password)
+  if (!account || !fits) throw wrongCredentials()
+  await updateAccount(db, account.id, { failedSignIns: 0, mayTryAt: null })
+  return account.id
+}
+
+/**
+ * Counts a try as a failure before the password is looked at, and lets a good one take it back:
+ * guesses that come at the same moment are counted each.
+ */
+async function countTry(
+  trx: PlainTrx,
+  { email, now }: { email: string; now: Date },
+): Promise<Account | undefined> {
+  const account = await lockAccountByEmail(trx, email)
+  if (!account) return undefined
+  if (account.mayTryAt && now < account.mayTryAt) {
     const seconds = Math.ceil((account.mayTryAt.getTime() - now.getTime()) / 1000)
     throw new Problem('too-many-attempts', `Please wait ${seconds} seconds and try again.`)
   }
-  const fits = await isPassword(account?.passwordHash ?? null, password)
-  if (!account) throw wrongCredentials()
-  if (!fits) {
-    const failedSignIns = account.failedSignIns + 1
-    const mayTryAt = nextTryAt(failedSignIns, now)
-    await updateAccount(db, account.id, { failedSignIns, mayTryAt })
-    throw wrongCredentials()
-  }
-  if (account.failedSignIns > 0) {
-    await updateAccount(db, account.id, { failedSignIns: 0, mayTryAt: null })
-  }
-  return account.id
+  const failedSignIns = account.failedSignIns + 1
+  const mayTryAt = nextTryAt(failedSignIns, now)
+  await updateAccount(trx, account.id, { failedSignIns, mayTryAt })
+  return account
 }
 
 export async function signOutEverywhere({ db }: Services, accountId: string): Promise<void> {

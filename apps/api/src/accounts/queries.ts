@@ -28,6 +28,14 @@ export async function findAccountByEmail(trx: Knex, email: string): Promise<Acco
   return trx('accounts').where({ email }).first<Account | undefined>()
 }
 
+/** Locks an account against others who try it; rows that refer to it go on. */
+export async function lockAccountByEmail(
+  trx: PlainTrx,
+  email: string,
+): Promise<Account | undefined> {
+  return trx('accounts').where({ email }).forNoKeyUpdate().first<Account | undefined>()
+}
+
 export async function findAccountByIdentity(
   trx: Knex,
   identity: { issuer: string; subject: string },

@@ -3,7 +3,7 @@ import type passport from 'passport'
 import { countAttempt } from '../platform/attempts'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asPerson } from '../platform/http/narrow'
-import { currentAccount } from '../platform/http/sign-in-session'
+import { readCaller } from '../platform/http/caller'
 import type { Services } from '../platform/services'
 import { listMembershipsOf, type Membership } from '../platform/tenancy/look-ups'
 import {
@@ -82,7 +82,7 @@ async function viewSession(
   context: RequestContext,
 ): Promise<Answer<'session.read'>> {
   // Asked anew: the request may have signed somebody in since it came.
-  const account = await currentAccount(services, context.http.request)
+  const { account } = await readCaller(services, context.http.request, null)
   const memberships = account ? await listMembershipsOf(services.db, account.id) : []
   return { token: context.token(), account, memberships: gather(memberships) }
 }

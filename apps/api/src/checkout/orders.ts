@@ -101,7 +101,7 @@ async function begin(services: Services, trx: AcademyTrx, own: Own) {
     order.attempt += 1
   }
   const clinic = await findClinic(trx, enrolment.clinicId)
-  const account = await findAccountById(services.db, own.accountId)
+  const account = await findAccountById(trx, own.accountId)
   return {
     order,
     academy,

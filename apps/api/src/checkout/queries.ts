@@ -30,15 +30,6 @@ export async function updateOrder(
   await Order.query(trx).patch(change).where({ id })
 }
 
-export async function listOrdersOf(
-  trx: AcademyTrx,
-  enrolmentIds: readonly string[],
-): Promise<Order[]> {
-  return Order.query(trx)
-    .whereIn('enrolmentId', [...enrolmentIds])
-    .orderBy('createdAt')
-}
-
 /** Resolves to false when this payment of the provider's was written down before. */
 export async function insertPayment(trx: AcademyTrx, row: Partial<Payment>): Promise<boolean> {
   const written = await Payment.query(trx)
@@ -101,13 +92,6 @@ export async function updateOwedPlace(
   change: Partial<OwedPlace>,
 ): Promise<void> {
   await OwedPlace.query(trx).patch(change).where({ placeId })
-}
-
-export async function listOwedPlaces(
-  trx: AcademyTrx,
-  placeIds: readonly string[],
-): Promise<OwedPlace[]> {
-  return OwedPlace.query(trx).whereIn('placeId', [...placeIds])
 }
 
 export async function insertCredit(trx: AcademyTrx, row: Partial<CreditChange>): Promise<void> {

@@ -1,8 +1,8 @@
 import { readAcademy } from '../academies/academies'
-import { isCoachOfClinic } from '../clinics/clinics'
+import { findClinic, isCoachOfClinic } from '../clinics/clinics'
 import { givePlaces, listWaitlist, lockEnrolment } from '../enrolments/enrolments'
 import { viewEntry } from '../enrolments/waitlist'
-import { changeGolfer, readGolfer } from '../golfers/golfers'
+import { changeGolfer, findGolfer, readGolfer } from '../golfers/golfers'
 import { notFound } from '../platform/errors'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
@@ -63,7 +63,8 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
       return inAcademy(services.db, academyId, async (trx) => {
         const { clinicId } = params
         const isTheirs = await isCoachOfClinic(trx, { clinicId, accountId: account.id })
-        if (scope === 'own' && !isTheirs) throw notFound('clinic')
+        const isHidden = scope === 'own' && !isTheirs
+        if (isHidden || !(await findClinic(trx, clinicId))) throw notFound('clinic')
         return {
           enrolments: await showEnrolments(trx, { clinicId }),
           waitlist: (await listWaitlist(trx, { clinicId })).map(viewEntry),
@@ -71,9 +72,11 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
       })
     },
     'enrolments.of-golfer': ({ params }, context) =>
-      inAcademy(services.db, asAcademy(context).academyId, async (trx) => ({
-        enrolments: await showEnrolments(trx, { golferId: params.golferId }),
-      })),
+      inAcademy(services.db, asAcademy(context).academyId, async (trx) => {
+        const { golferId } = params
+        if (!(await findGolfer(trx, golferId))) throw notFound('golfer')
+        return { enrolments: await showEnrolments(trx, { golferId }) }
+      }),
     'checkout.quote-giving-up': ({ params }, context) =>
       quoteGivingUp(services, own(context, params.enrolmentId)),
     'checkout.give-up': async ({ params, body }, context) => {

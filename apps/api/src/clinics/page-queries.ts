@@ -1,4 +1,4 @@
-import type { Knex } from 'knex'
+import type { Question } from '../platform/tenancy/ask'
 
 /** The academy of the transaction as the public sees it. */
 export interface FaceRow {
@@ -24,7 +24,6 @@ export interface FaceRow {
 }
 
 export interface PageClinicRow {
-  id: string
   slug: string
   title: string
   summary: string
@@ -36,8 +35,8 @@ export interface PageClinicRow {
   areas: string[]
   coaches: string[]
   capacity: number
-  fullestTaken: number
-  nextTaken: number
+  /** In the fullest session still to come, of a run; in the next one, of drop-in. */
+  taken: number
   waiting: number
   saleMode: 'run' | 'drop-in' | 'both'
   payMode: 'card' | 'desk' | 'free'
@@ -70,56 +69,60 @@ const FACE = `
 const iso = (column: string): string =>
   `to_char(${column} AT TIME ZONE 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"')`
 
-/** Published clinics with a session still to come; one clinic when its address is given. */
+const isAhead = "s.state = 'planned' AND s.starts_at > $1"
+
+/**
+ * Published clinics with a session still to come: what the next one and the fullest one say, each
+ * found through the clinic's own index entries, which costs the same beside a thousand academies.
+ */
 const CLINICS = `
-  WITH ahead AS (
-    SELECT clinic_id, count(*) AS sessions_ahead, min(starts_at) AS starts_at,
-      max(held + confirmed) AS fullest_taken,
-      (array_agg(held + confirmed ORDER BY starts_at))[1] AS next_taken,
-      (array_agg(ends_at ORDER BY starts_at))[1] AS ends_at,
-      (array_agg(id ORDER BY starts_at))[1] AS next_id,
-      (array_agg(capacity ORDER BY held + confirmed DESC))[1] AS capacity
-    FROM sessions WHERE state = 'planned' AND starts_at > :now GROUP BY clinic_id
-  )
-  SELECT json_build_object(
-    'id', c.id, 'slug', c.slug, 'title', c.title, 'summary', c.summary,
-    'startsAt', ${iso('a.starts_at')}, 'endsAt', ${iso('a.ends_at')}, 'zone', c.zone,
-    'sessionsAhead', a.sessions_ahead,
-    'sessionsTotal', (SELECT count(*) FROM sessions s
-      WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id),
+  SELECT next.starts_at, c.slug, json_build_object(
+    'slug', c.slug, 'title', c.title, 'summary', c.summary,
+    'startsAt', ${iso('next.starts_at')}, 'endsAt', ${iso('next.ends_at')}, 'zone', c.zone,
+    'sessionsAhead', run.sessions_ahead, 'sessionsTotal', run.sessions_total,
     'areas', (SELECT coalesce(json_agg(ar.name ORDER BY sa.position), '[]') FROM session_areas sa
       JOIN areas ar ON ar.academy_id = sa.academy_id AND ar.id = sa.area_id
-      WHERE sa.academy_id = c.academy_id AND sa.session_id = a.next_id),
+      WHERE sa.academy_id = c.academy_id AND sa.session_id = next.id),
     'coaches', (SELECT coalesce(json_agg(co.name ORDER BY sc.position), '[]')
       FROM session_coaches sc
       JOIN coaches co ON co.academy_id = sc.academy_id AND co.id = sc.coach_id
-      WHERE sc.academy_id = c.academy_id AND sc.session_id = a.next_id),
-    'capacity', a.capacity, 'fullestTaken', a.fullest_taken, 'nextTaken', a.next_taken,
+      WHERE sc.academy_id = c.academy_id AND sc.session_id = next.id),
+    'capacity', fullest.capacity,
+    'taken', CASE WHEN c.sale_mode = 'drop-in' THEN next.taken ELSE fullest.taken END,
     'waiting', (SELECT count(*) FROM waitlist_entries w
       WHERE w.academy_id = c.academy_id AND w.clinic_id = c.id AND w.state = 'waiting'),
     'saleMode', c.sale_mode, 'payMode', c.pay_mode, 'runPriceMinor', c.run_price_minor,
     'dropInPriceMinor', c.drop_in_price_minor, 'handicapMin', c.handicap_min,
-    'handicapMax', c.handicap_max, 'ageMin', c.age_min, 'ageMax', c.age_max) AS clinic,
-    a.starts_at
-  FROM clinics c JOIN ahead a ON a.clinic_id = c.id
+    'handicapMax', c.handicap_max, 'ageMin', c.age_min, 'ageMax', c.age_max) AS shown
+  FROM clinics c
+  CROSS JOIN LATERAL (
+    SELECT id, starts_at, ends_at, held + confirmed AS taken FROM sessions s
+    WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id AND ${isAhead}
+    ORDER BY starts_at LIMIT 1) next
+  CROSS JOIN LATERAL (
+    SELECT capacity, held + confirmed AS taken FROM sessions s
+    WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id AND ${isAhead}
+    ORDER BY held + confirmed DESC LIMIT 1) fullest
+  CROSS JOIN LATERAL (
+    SELECT count(*) AS sessions_total, count(*) FILTER (WHERE ${isAhead}) AS sessions_ahead
+    FROM sessions s WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id) run
   WHERE c.state = 'published'`
 
-/** The whole public page in one question. */
-export async function readPage(trx: Knex.Transaction, now: Date): Promise<PageRow> {
-  const { rows } = await trx.raw<{ rows: PageRow[] }>(
-    `SELECT (${FACE}) AS academy,
-       (SELECT coalesce(json_agg(p.clinic ORDER BY p.starts_at, p.clinic ->> 'slug'), '[]')
-          FROM (${CLINICS}) p) AS clinics,
-       (SELECT coalesce(json_agg(json_build_object(
-            'name', name, 'initials', initials, 'about', about) ORDER BY created_at), '[]')
-          FROM coaches) AS coaches,
-       (SELECT coalesce(json_agg(json_build_object(
-            'name', name, 'address', address, 'gettingHere', getting_here) ORDER BY created_at), '[]')
-          FROM venues) AS venues`,
-    { now },
-  )
-  return rows[0] ?? { academy: null, clinics: [], coaches: [], venues: [] }
-}
+/** The whole public page in one question: what is on it at this moment. */
+export const pageAt = (now: Date): Question => ({
+  name: 'public-page',
+  text: `
+    SELECT (${FACE}) AS academy,
+      (SELECT coalesce(json_agg(p.shown ORDER BY p.starts_at, p.slug), '[]')
+         FROM (${CLINICS}) p) AS clinics,
+      (SELECT coalesce(json_agg(json_build_object(
+           'name', name, 'initials', initials, 'about', about) ORDER BY created_at), '[]')
+         FROM coaches) AS coaches,
+      (SELECT coalesce(json_agg(json_build_object(
+           'name', name, 'address', address, 'gettingHere', getting_here) ORDER BY created_at), '[]')
+         FROM venues) AS venues`,
+  values: [now],
+})
 
 export interface ClinicDetailRow {
   id: string
@@ -162,15 +165,16 @@ export interface ClinicDetailRow {
   }[]
 }
 
+export interface ClinicPageRow {
+  academy: FaceRow | null
+  clinic: ClinicDetailRow | null
+}
+
 /** One clinic on the page, with every session and the places left in it at this moment. */
-export async function readClinicPage(
-  trx: Knex.Transaction,
-  slug: string,
-): Promise<{ academy: FaceRow | null; clinic: ClinicDetailRow | null }> {
-  const { rows } = await trx.raw<{
-    rows: { academy: FaceRow | null; clinic: ClinicDetailRow | null }[]
-  }>(
-    `SELECT (${FACE}) AS academy, (
+export const clinicPageOf = (slug: string): Question => ({
+  name: 'public-clinic-page',
+  text: `
+    SELECT (${FACE}) AS academy, (
        SELECT json_build_object(
          'id', c.id, 'slug', c.slug, 'title', c.title, 'summary', c.summary, 'about', c.about,
          'bring', c.bring, 'zone', c.zone, 'rrule', c.rrule, 'startsOnLocal', c.starts_on_local,
@@ -196,8 +200,6 @@ export async function readClinicPage(
                FROM session_areas sa JOIN areas ar ON ar.id = sa.area_id
                WHERE sa.session_id = s.id)) ORDER BY s.number), '[]')
             FROM sessions s WHERE s.clinic_id = c.id))
-       FROM clinics c WHERE c.slug = :slug AND c.state = 'published') AS clinic`,
-    { slug },
-  )
-  return rows[0] ?? { academy: null, clinic: null }
-}
+       FROM clinics c WHERE c.slug = $1 AND c.state = 'published') AS clinic`,
+  values: [slug],
+})

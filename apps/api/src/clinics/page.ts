@@ -1,15 +1,18 @@
 import type { Answer } from '@marram/contract'
 import { priceOfRemaining } from '@marram/money'
 import { notFound } from '../platform/errors'
+import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
-import { readPageOf } from '../platform/tenancy/transaction'
+import { askPageOf } from '../platform/tenancy/transaction'
 import { darkMinutesIn } from './light'
 import {
-  readClinicPage,
-  readPage,
+  clinicPageOf,
+  pageAt,
   type ClinicDetailRow,
+  type ClinicPageRow,
   type FaceRow,
   type PageClinicRow,
+  type PageRow,
 } from './page-queries'
 import { describeRule } from './rules'
 
@@ -26,9 +29,10 @@ export async function readAcademyPage(
   { db, clock }: Services,
   reader: PageReader,
 ): Promise<Answer<'page.read'>> {
-  const page = await readPageOf(db, reader.slug, (trx) => readPage(trx, clock.now()))
+  const [page] = await askPageOf<PageRow>(db, reader.slug, pageAt(clock.now()))
+  invariant(page, 'the page is one row, whatever is on it')
   const academy = checkFace(page.academy, reader)
-  return { ...page, academy, clinics: page.clinics.map(toPageClinic) }
+  return { ...page, academy, clinics: page.clinics.map(withPriceNow) }
 }
 
 function checkFace(academy: FaceRow | null, reader: PageReader): FaceRow {
@@ -36,13 +40,8 @@ function checkFace(academy: FaceRow | null, reader: PageReader): FaceRow {
   return academy
 }
 
-function toPageClinic(row: PageClinicRow): PageClinic {
-  const { id: _, fullestTaken, nextTaken, ...shown } = row
-  return {
-    ...shown,
-    taken: row.saleMode === 'drop-in' ? nextTaken : fullestTaken,
-    runPriceMinor: priceNow(row),
-  }
+function withPriceNow(clinic: PageClinicRow): PageClinic {
+  return { ...clinic, runPriceMinor: priceNow(clinic) }
 }
 
 /** What a golfer who joins a run now pays: the share of the sessions still to come. */
@@ -62,7 +61,8 @@ export async function readClinicOnPage(
   reader: PageReader & { clinic: string },
 ): Promise<Answer<'page.clinic'>> {
   const now = clock.now()
-  const row = await readPageOf(db, reader.slug, (trx) => readClinicPage(trx, reader.clinic))
+  const [row] = await askPageOf<ClinicPageRow>(db, reader.slug, clinicPageOf(reader.clinic))
+  invariant(row, 'the page is one row, whatever is on it')
   const academy = checkFace(row.academy, reader)
   if (!row.clinic) throw notFound('clinic')
   return { academy, clinic: toDetail(row.clinic, now) }

@@ -1,6 +1,6 @@
-import { rolesIn } from '../academies/academies'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
+import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import {
   changeClinic,
@@ -23,17 +23,15 @@ export function sessionReach(context: RequestContext): SessionReach {
 export function clinicHandlers(services: Services): Handlers {
   const academyIdOf = (context: RequestContext) => asAcademy(context).academyId
 
-  const readerOf = async (context: RequestContext): Promise<PageReader> => {
-    const { academyId, academySlug: slug, account } = asAcademy(context)
-    if (!account) return { slug, maySeeUnpublished: false }
-    const roles = await rolesIn(services, { academyId, accountId: account.id })
+  const readerOf = ({ academySlug: slug, roles }: RequestContext): PageReader => {
+    invariant(slug, 'a public page has an address')
     return { slug, maySeeUnpublished: roles.some((role) => role !== 'golfer') }
   }
 
   return {
-    'page.read': async (_input, context) => readAcademyPage(services, await readerOf(context)),
-    'page.clinic': async ({ params }, context) =>
-      readClinicOnPage(services, { ...(await readerOf(context)), clinic: params.clinic }),
+    'page.read': (_input, context) => readAcademyPage(services, readerOf(context)),
+    'page.clinic': ({ params }, context) =>
+      readClinicOnPage(services, { ...readerOf(context), clinic: params.clinic }),
     'clinics.preview': ({ body }, context) =>
       previewClinic(services, { academyId: academyIdOf(context), wanted: body }),
     'clinics.list': (_input, context) => readClinics(services, academyIdOf(context)),

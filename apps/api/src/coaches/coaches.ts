@@ -2,7 +2,7 @@ import type { Answer, Parsed } from '@marram/contract'
 import { findAccountById } from '../accounts/accounts'
 import { addRole } from '../academies/academies'
 import { invite, takeUpInvitation } from '../academies/staff'
-import { notFound } from '../platform/errors'
+import { Problem, notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
@@ -32,7 +32,7 @@ export async function addCoach(
   return inAcademy(services.db, wanted.academyId, async (trx) => {
     const now = services.clock.now()
     const id = newId(now)
-    const me = await findAccountById(services.db, wanted.addedBy)
+    const me = await findAccountById(trx, wanted.addedBy)
     const isMe = email !== undefined && me?.email === email
     const isFree = isMe && !(await findCoachOf(trx, wanted.addedBy))
     const accountId = isFree ? wanted.addedBy : null
@@ -60,6 +60,27 @@ export async function changeCoach(
   })
 }
 
+/** Invites somebody to the staff; a coach as the one of this academy that they are to be. */
+export async function inviteStaff(
+  services: Services,
+  given: { academyId: string; invitedBy: string; wanted: Parsed<'invitations.send', 'body'> },
+): Promise<{ id: string }> {
+  const { academyId, invitedBy, wanted } = given
+  return inAcademy(services.db, academyId, async (trx) => {
+    if (wanted.coachId) await checkIsFree(trx, wanted.coachId)
+    return invite(services, trx, { ...wanted, academyId, invitedBy })
+  })
+}
+
+async function checkIsFree(trx: AcademyTrx, coachId: string): Promise<void> {
+  const [coach] = await findCoaches(trx, [coachId])
+  if (coach?.accountId === null) return
+  const sentence = coach
+    ? `${coach.name} signs in already.`
+    : 'Please choose a coach of this academy.'
+  throw new Problem('invalid-fields', sentence, { coachId: sentence })
+}
+
 /** Takes an invitation up, and ties the person to the coach that they were invited as. */
 export async function acceptInvitation(
   services: Services,
@@ -74,7 +95,7 @@ export async function acceptInvitation(
         await updateCoach(trx, coachId, { accountId })
         return
       }
-      const account = await findAccountById(services.db, accountId)
+      const account = await findAccountById(trx, accountId)
       const name = account?.name ?? 'Coach'
       const now = services.clock.now()
       const own = { id: newId(now), name, initials: initialsOf(name), accountId, createdAt: now }

@@ -113,17 +113,16 @@ async function buy(
   const { person, handicap } = seat.golfer
   const what = { clinicId: clinic.view.id, ...(sessionId ? { sessionId } : {}) }
   try {
-    const enrolmentId = await holdPlaces(services, {
-      academyId,
-      person,
-      wanted: {
-        ...what,
-        for: seat.child
-          ? { kind: 'golfer', golferId: seat.child.golferId }
-          : { kind: 'me', handicap },
-        hasAcceptedWaiver: true,
-      },
-    })
+    const wanted = {
+      ...what,
+      for: seat.child
+        ? { kind: 'golfer' as const, golferId: seat.child.golferId }
+        : { kind: 'me' as const, handicap },
+      hasAcceptedWaiver: true as const,
+    }
+    const enrolmentId = await holdPlaces(services, { academyId, person, wanted }, (_, id) =>
+      Promise.resolve(id),
+    )
     const own = { academyId, enrolmentId, accountId: person.id }
     if (clinic.script.payMode === 'free') return
     if (clinic.script.payMode === 'desk') {

@@ -2,18 +2,21 @@ import type { Parsed } from '@marram/contract'
 import { joinAsGolfer } from '../academies/academies'
 import {
   addDependant,
+  checkOwnGolfer,
   ensureOwnGolfer,
   findGolfer,
   findOwnGolfer,
   recordConsent,
-  type Golfer,
   type Person,
 } from '../golfers/golfers'
 import { Problem, notFound } from '../platform/errors'
 import type { Services } from '../platform/services'
+import { together } from '../platform/tenancy/together'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
-import { checkFit, findOnSale, takePlaces } from './hold'
+import { refuseFull, takePlaces } from './hold'
 import type { EndedBecause, Enrolment, Place } from './models'
+import { checkFit, findOnSale } from './on-sale'
+import { readStanding, type GolferToPlace } from './on-sale-queries'
 import {
   confirmSeats,
   findActiveEnrolment,
@@ -27,72 +30,96 @@ import {
 } from './queries'
 import { offerFreedPlaces } from './waitlist'
 
-/**
- * Holds places for the person, somebody they look after, or a new dependant, while payment is made.
- * Pressing twice gives the same hold. Resolves to the enrolment's id.
- */
-export async function holdPlaces(
-  services: Services,
-  given: { academyId: string; person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
-): Promise<string> {
-  const outcome = await tryHold(services, given).then(
-    (id) => ({ id, outcome: 'held' }),
-    (error: unknown) => {
-      const code = error instanceof Problem ? error.code : 'unexpected'
-      services.metrics.holds.inc({ outcome: code })
-      throw error
-    },
-  )
-  services.metrics.holds.inc({ outcome: outcome.outcome })
-  return outcome.id
+interface Wish {
+  academyId: string
+  person: Person
+  wanted: Parsed<'enrolments.hold', 'body'>
 }
 
-async function tryHold(
+/** Shows an enrolment inside the transaction that made it. */
+type Show<View> = (trx: AcademyTrx, enrolmentId: string) => Promise<View>
+
+/**
+ * Holds places for the person, somebody they look after, or a new dependant, while payment is made.
+ * Pressing twice gives the same hold. Resolves to the enrolment, shown.
+ */
+export async function holdPlaces<View>(
   services: Services,
-  given: { academyId: string; person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
-): Promise<string> {
-  const { person, wanted } = given
-  return inAcademy(services.db, given.academyId, async (trx) => {
-    const now = services.clock.now()
-    const onSale = await findOnSale(trx, wanted, now)
-    await joinAsGolfer(trx, { accountId: person.id, now })
-    const golfer = await golferFor(services, trx, given)
-    checkFit(golfer, onSale)
-    const sessionIds = onSale.taken.map(({ id }) => id)
-    const had = await findActiveEnrolment(trx, { golferId: golfer.id, sessionIds })
-    if (had?.state === 'held' && had.takenBy === person.id && had.kind === onSale.kind) {
-      return had.id
-    }
-    if (had) throw new Problem('already-has-place', `${golfer.name} has a place there already.`)
-    const { waiver, holdMinutes } = onSale.academy
-    const consent = { golferId: golfer.id, kind: 'waiver', wording: waiver } as const
-    await recordConsent(trx, { ...consent, givenBy: person.id, now })
-    return takePlaces(services, trx, {
-      onSale,
-      golferId: golfer.id,
-      takenBy: person.id,
-      heldUntil: new Date(now.getTime() + holdMinutes * 60_000),
-      isOffer: false,
-    })
+  wish: Wish,
+  show: Show<View>,
+): Promise<View> {
+  try {
+    const view = await inAcademy(services.db, wish.academyId, (trx) =>
+      tryHold(services, trx, { ...wish, show }),
+    )
+    services.metrics.holds.inc({ outcome: 'held' })
+    return view
+  } catch (error) {
+    services.metrics.holds.inc({ outcome: error instanceof Problem ? error.code : 'unexpected' })
+    throw error
+  }
+}
+
+async function tryHold<View>(
+  services: Services,
+  trx: AcademyTrx,
+  { person, wanted, show }: Wish & { show: Show<View> },
+): Promise<View> {
+  const { for: whom, clinicId } = wanted
+  const now = services.clock.now()
+  const golferId = whom.kind === 'golfer' ? whom.golferId : null
+  const [onSale, standing] = await together(
+    findOnSale(trx, wanted, now),
+    readStanding(trx, { accountId: person.id, golferId, clinicId }),
+  )
+  if (!standing.isMember) await joinAsGolfer(trx, { accountId: person.id, now })
+  const known = whom.kind === 'new' ? null : standing.golfer
+  const golfer = await golferFor(services, trx, { person, whom, known })
+  checkFit(golfer, onSale)
+  const sessionIds = onSale.taken.map(({ id }) => id)
+  const had = known
+    ? standing.active.find((active) => active.sessionIds.some((id) => sessionIds.includes(id)))
+    : await findActiveEnrolment(trx, { golferId: golfer.id, sessionIds })
+  if (had?.state === 'held' && had.takenBy === person.id && had.kind === onSale.kind) {
+    return show(trx, had.id)
+  }
+  if (had) throw new Problem('already-has-place', `${golfer.name} has a place there already.`)
+  refuseFull(onSale)
+  const { waiver, holdMinutes } = onSale.academy
+  const consent = { golferId: golfer.id, kind: 'waiver', wording: waiver } as const
+  return takePlaces(services, trx, {
+    onSale,
+    golferId: golfer.id,
+    takenBy: person.id,
+    heldUntil: new Date(now.getTime() + holdMinutes * 60_000),
+    isOffer: false,
+    meanwhile: async (id) => {
+      const given = recordConsent(trx, { ...consent, givenBy: person.id, now })
+      const [, view] = await together(given, show(trx, id))
+      return view
+    },
   })
 }
 
 async function golferFor(
   services: Services,
   trx: AcademyTrx,
-  { person, wanted }: { person: Person; wanted: Parsed<'enrolments.hold', 'body'> },
-): Promise<Golfer> {
-  const { for: whom } = wanted
+  given: {
+    person: Person
+    whom: Parsed<'enrolments.hold', 'body'>['for']
+    known: GolferToPlace | null
+  },
+): Promise<GolferToPlace> {
+  const { person, whom, known } = given
   switch (whom.kind) {
     case 'me': {
-      const handicap = whom.handicap
-      return ensureOwnGolfer(services, trx, {
-        person,
-        ...(handicap === undefined ? {} : { handicap }),
-      })
+      const { handicap } = whom
+      const isNews = handicap !== undefined && handicap !== known?.handicap
+      if (known && !isNews) return known
+      return ensureOwnGolfer(services, trx, { person, ...(isNews ? { handicap } : {}) })
     }
     case 'golfer':
-      return findOwnGolfer(trx, { golferId: whom.golferId, accountId: person.id })
+      return checkOwnGolfer(known, person.id)
     case 'new':
       return addDependant(services, trx, { guardianId: person.id, dependant: whom.dependant })
   }
@@ -111,12 +138,14 @@ export async function givePlaces(
     const golfer = await findGolfer(trx, wanted.golferId)
     if (!golfer) throw notFound('golfer')
     if (!wanted.isException) checkFit(golfer, onSale)
+    refuseFull(onSale)
     const id = await takePlaces(services, trx, {
       onSale,
       golferId: golfer.id,
       takenBy: golfer.accountId ?? golfer.guardianAccountId,
       heldUntil: new Date(now.getTime() + onSale.academy.holdMinutes * 60_000),
       isOffer: false,
+      meanwhile: (id) => Promise.resolve(id),
     })
     await alsoDo(trx, id)
     return id

@@ -1,84 +1,18 @@
-import { readAcademy, type Academy } from '../academies/academies'
-import { findClinic, listSessionsOf, type Clinic, type Session } from '../clinics/clinics'
-import { misfitOf, misfitSentence, type Golfer } from '../golfers/golfers'
-import { Problem, notFound } from '../platform/errors'
+import { Problem } from '../platform/errors'
 import { newId } from '../platform/ids'
-import { localDayOf } from '../platform/local-day'
 import type { Services } from '../platform/services'
+import { together } from '../platform/tenancy/together'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
-import { endWaitingOf, insertEnrolment, takeSeats } from './queries'
-import { agreePrice, sessionsAhead, type AgreedPrice } from './rules'
-
-export interface WantedPlaces {
-  clinicId: string
-  /** Left out for the whole run. */
-  sessionId?: string | undefined
-}
-
-export interface OnSale {
-  academy: Academy
-  clinic: Clinic
-  kind: 'run' | 'session'
-  taken: Session[]
-  price: AgreedPrice
-}
-
-/** What is for sale at this moment of what is wanted, and for how much. Throws `not-on-sale`. */
-export async function findOnSale(
-  trx: AcademyTrx,
-  wanted: WantedPlaces,
-  now: Date,
-): Promise<OnSale> {
-  const clinic = await findClinic(trx, wanted.clinicId)
-  if (!clinic || clinic.state === 'draft') throw notFound('clinic')
-  if (clinic.state !== 'published') throw notOnSale('This clinic is no longer on the page.')
-  const kind = wanted.sessionId ? 'session' : 'run'
-  if (kind === 'run' && clinic.saleMode === 'drop-in') {
-    throw notOnSale('This clinic is sold session by session. Please choose a date.')
-  }
-  if (kind === 'session' && clinic.saleMode === 'run') {
-    throw notOnSale('This clinic is sold as a whole run.')
-  }
-  const academy = await readAcademy(trx)
-  const sessions = await listSessionsOf(trx, clinic.id)
-  if (wanted.sessionId && !sessions.some(({ id }) => id === wanted.sessionId)) {
-    throw notFound('session')
-  }
-  const ahead = sessionsAhead(sessions, now)
-  const taken = wanted.sessionId ? ahead.filter(({ id }) => id === wanted.sessionId) : ahead
-  if (taken.length === 0) throw notOnSale('This has begun or was called off.')
-  const price = agreePrice({
-    wanted: wanted.sessionId
-      ? { kind: 'session', sessionId: wanted.sessionId }
-      : { kind: 'run', sessions },
-    taken,
-    runPriceMinor: clinic.runPriceMinor,
-    dropInPriceMinor: clinic.dropInPriceMinor,
-    isFree: clinic.payMode === 'free',
-    tax: { mode: academy.taxMode, basisPoints: academy.taxBasisPoints },
-  })
-  return { academy, clinic, kind, taken, price }
-}
-
-const notOnSale = (sentence: string) => new Problem('not-on-sale', sentence)
-
-/** Throws `golfer-does-not-fit` with the reason in words. */
-export function checkFit(golfer: Golfer, { clinic, taken }: OnSale): void {
-  const [first] = taken
-  const day = first ? localDayOf(first.startsAt, clinic.zone) : ''
-  const isAccountHolder = golfer.accountId !== null
-  const misfit = misfitOf({ ...golfer, isAccountHolder }, clinic, day)
-  if (misfit) {
-    throw new Problem('golfer-does-not-fit', misfitSentence(misfit, golfer.name, clinic))
-  }
-}
+import type { OnSale } from './on-sale'
+import { insertEnrolment, takeSeats } from './queries'
 
 /**
  * Takes places for a golfer: the enrolment and its places first, the seats last before commit, all
  * or nothing. What costs nothing is confirmed at once; the rest is held until `heldUntil`.
- * Resolves to the enrolment's id. Throws `session-full` and `already-has-place`.
+ * Resolves to what `meanwhile` makes of the enrolment's id: it asks what does not hang on the seats,
+ * and goes out before them. Throws `session-full` and `already-has-place`.
  */
-export async function takePlaces(
+export async function takePlaces<T>(
   services: Services,
   trx: AcademyTrx,
   given: {
@@ -87,12 +21,12 @@ export async function takePlaces(
     takenBy: string | null
     heldUntil: Date
     isOffer: boolean
+    meanwhile: (enrolmentId: string) => Promise<T>
   },
-): Promise<string> {
+): Promise<T> {
   const { onSale, golferId, takenBy, isOffer } = given
   const { clinic, academy, kind, taken, price } = onSale
   const now = services.clock.now()
-  if (!isOffer) refuseFull(taken)
   const isFree = price.netMinor + price.taxMinor === 0
   const state = isFree ? 'confirmed' : 'held'
   const id = newId(now)
@@ -112,22 +46,20 @@ export async function takePlaces(
     createdAt: now,
   } as const
   const places = price.places.map((place) => ({ id: newId(now), ...place }))
-  await sayDouble(() => insertEnrolment(trx, enrolment, places))
-  const [only] = taken
-  const waitedFor = kind === 'session' && only ? { sessionId: only.id } : {}
-  if (!isOffer) await endWaitingOf(trx, { golferId, clinicId: clinic.id, ...waitedFor })
-  if (isFree) {
-    const event = { academyId: academy.academyId, enrolmentId: id }
-    await services.outbox.emit(trx, 'enrolment.confirmed', event)
-  }
   const sessionIds = taken.map((session) => session.id)
-  const seats = await takeSeats(trx, { sessionIds, as: state })
+  const event = { academyId: academy.academyId, enrolmentId: id }
+  const [, , answer, seats] = await together(
+    sayDouble(insertEnrolment(trx, enrolment, places)),
+    isFree ? services.outbox.emit(trx, 'enrolment.confirmed', event) : Promise.resolve(),
+    given.meanwhile(id),
+    takeSeats(trx, { sessionIds, as: state }),
+  )
   if (seats.length < sessionIds.length) throw sessionFull()
-  return id
+  return answer
 }
 
-/** A first look that spares the writes where the answer is plain already. */
-function refuseFull(taken: readonly Session[]): void {
+/** A first look that spares the writes where the answer is plain already. Throws `session-full`. */
+export function refuseFull({ taken }: OnSale): void {
   if (taken.some(({ held, confirmed, capacity }) => held + confirmed >= capacity)) {
     throw sessionFull()
   }
@@ -138,9 +70,9 @@ const sessionFull = () =>
 
 const UNIQUE_VIOLATION = '23505'
 
-async function sayDouble(work: () => Promise<void>): Promise<void> {
+async function sayDouble<T>(writing: Promise<T>): Promise<T> {
   try {
-    await work()
+    return await writing
   } catch (error) {
     const { code, constraint } = Object(error) as { code?: string; constraint?: string }
     if (code === UNIQUE_VIOLATION && constraint === 'places_one_while_active') {

@@ -1,3 +1,4 @@
+import { ask } from '../platform/tenancy/ask'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 import { Enrolment, Place, WaitlistEntry, type EndedBecause } from './models'
 
@@ -48,33 +49,49 @@ export interface NewPlace {
   taxMinor: number
 }
 
-/** Writes an enrolment and its places in one statement. */
+/**
+ * Writes an enrolment and its places in one statement, in which a golfer who waited for them stops
+ * waiting. Who takes an offer is no longer waiting, and the offer ends another way.
+ */
 export async function insertEnrolment(
   trx: AcademyTrx,
   enrolment: NewEnrolment,
   places: readonly NewPlace[],
 ): Promise<void> {
-  await trx.raw(
-    `WITH enrolment AS (
-       INSERT INTO enrolments (academy_id, id, clinic_id, golfer_id, taken_by, kind, state,
-         is_offer, held_until, currency, net_minor, tax_minor, pay_mode, created_at)
-       VALUES (current_setting('app.academy_id')::uuid, :id, :clinicId, :golferId, :takenBy, :kind,
-         :state, :isOffer, :heldUntil, :currency, :netMinor, :taxMinor, :payMode, :createdAt)
-       RETURNING academy_id)
-     INSERT INTO places (academy_id, id, enrolment_id, session_id, golfer_id, state, net_minor,
-       tax_minor)
-     SELECT e.academy_id, p.id, :id, p.session_id, :golferId, :state, p.net_minor, p.tax_minor
-     FROM enrolment e, unnest(:placeIds::uuid[], :sessionIds::uuid[], :nets::bigint[],
-       :taxes::bigint[]) AS p (id, session_id, net_minor, tax_minor)`,
-    {
-      ...enrolment,
-      placeIds: places.map(({ id }) => id),
-      sessionIds: places.map(({ sessionId }) => sessionId),
-      nets: places.map(({ netMinor }) => netMinor),
-      taxes: places.map(({ taxMinor }) => taxMinor),
-    },
-  )
+  const { id, clinicId, golferId, takenBy, kind, state, isOffer, heldUntil } = enrolment
+  const { currency, netMinor, taxMinor, payMode, createdAt } = enrolment
+  await ask(trx, {
+    name: 'insert-enrolment',
+    text: INSERT_ENROLMENT,
+    values: [
+      ...[id, clinicId, golferId, takenBy, kind, state, isOffer, heldUntil],
+      ...[currency, netMinor, taxMinor, payMode, createdAt],
+      places.map((place) => place.id),
+      places.map(({ sessionId }) => sessionId),
+      places.map((place) => place.netMinor),
+      places.map((place) => place.taxMinor),
+    ],
+  })
 }
+
+const INSERT_ENROLMENT = `
+  WITH enrolment AS (
+    INSERT INTO enrolments (academy_id, id, clinic_id, golfer_id, taken_by, kind, state,
+      is_offer, held_until, currency, net_minor, tax_minor, pay_mode, created_at)
+    VALUES (current_setting('app.academy_id')::uuid, $1, $2, $3, $4, $5, $6, $7, $8, $9, $10, $11,
+      $12, $13)
+    RETURNING academy_id, id, clinic_id, golfer_id, kind, state, is_offer
+  ), waiting AS (
+    UPDATE waitlist_entries w SET state = 'taken' FROM enrolment e
+    WHERE w.academy_id = e.academy_id AND w.clinic_id = e.clinic_id
+      AND w.golfer_id = e.golfer_id AND w.state = 'waiting' AND NOT e.is_offer
+      AND (e.kind = 'run' OR w.session_id = ANY($15::uuid[]))
+  )
+  INSERT INTO places (academy_id, id, enrolment_id, session_id, golfer_id, state, net_minor,
+    tax_minor)
+  SELECT e.academy_id, p.id, e.id, p.session_id, e.golfer_id, e.state, p.net_minor, p.tax_minor
+  FROM enrolment e, unnest($14::uuid[], $15::uuid[], $16::bigint[], $17::bigint[])
+    AS p (id, session_id, net_minor, tax_minor)`
 
 /**
  * Takes one place in each session, where there is one: the whole guard against overselling is this
@@ -85,17 +102,19 @@ export async function takeSeats(
   trx: AcademyTrx,
   { sessionIds, as }: { sessionIds: readonly string[]; as: 'held' | 'confirmed' },
 ): Promise<string[]> {
-  const { rows } = await trx.raw<{ rows: { id: string }[] }>(
-    sessionIds.length === 1
+  const isOne = sessionIds.length === 1
+  const rows = await ask<{ id: string }>(trx, {
+    name: `take-seats-${as}-${isOne ? 'in-one' : 'in-order'}`,
+    text: isOne
       ? `UPDATE sessions SET ${as} = ${as} + 1
-         WHERE id = ANY(?) AND state = 'planned' AND held + confirmed < capacity RETURNING id`
+         WHERE id = ANY($1) AND state = 'planned' AND held + confirmed < capacity RETURNING id`
       : `WITH in_order AS (
-           SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+           SELECT id FROM sessions WHERE id = ANY($1) ORDER BY id FOR UPDATE)
          UPDATE sessions s SET ${as} = ${as} + 1 FROM in_order
          WHERE s.id = in_order.id AND s.state = 'planned' AND s.held + s.confirmed < s.capacity
          RETURNING s.id`,
-    [[...sessionIds]],
-  )
+    values: [[...sessionIds]],
+  })
   return rows.map(({ id }) => id)
 }
 
@@ -189,18 +208,6 @@ export async function settleOffer(
   await WaitlistEntry.query(trx).patch({ state }).where({ enrolmentId, state: 'offered' })
 }
 
-/** A golfer who has a place no longer waits for it. */
-export async function endWaitingOf(
-  trx: AcademyTrx,
-  { golferId, clinicId, sessionId }: { golferId: string; clinicId: string; sessionId?: string },
-): Promise<void> {
-  const query = WaitlistEntry.query(trx)
-    .patch({ state: 'taken' })
-    .where({ golferId, clinicId, state: 'waiting' })
-  if (sessionId) query.where({ sessionId })
-  await query
-}
-
 export interface WaitlistRow extends WaitlistEntry {
   clinicSlug: string
   clinicTitle: string
@@ -245,16 +252,12 @@ export interface EnrolmentRow extends Enrolment {
   golferAccountId: string | null
 }
 
-/** Enrolments with what a view says of their clinic and golfer, the newest first. */
+/** Enrolments with what is said of their clinic and golfer, the newest first. */
 export async function listEnrolments(
   trx: AcademyTrx,
-  by:
-    | { ids: readonly string[] }
-    | { accountId: string }
-    | { clinicId: string }
-    | { golferId: string },
+  ids: readonly string[],
 ): Promise<EnrolmentRow[]> {
-  const query = Enrolment.query(trx)
+  return Enrolment.query(trx)
     .join('clinics', (join) =>
       join.on('clinics.academyId', 'enrolments.academyId').on('clinics.id', 'enrolments.clinicId'),
     )
@@ -274,18 +277,9 @@ export async function listEnrolments(
       'golfers.name as golferName',
       'golfers.accountId as golferAccountId',
     )
+    .whereIn('enrolments.id', [...ids])
     .orderBy('enrolments.createdAt', 'desc')
-  if ('ids' in by) query.whereIn('enrolments.id', [...by.ids])
-  if ('clinicId' in by) query.where('enrolments.clinicId', by.clinicId)
-  if ('golferId' in by) query.where('enrolments.golferId', by.golferId)
-  if ('accountId' in by) {
-    query.where((either) => {
-      void either
-        .where('golfers.accountId', by.accountId)
-        .orWhere('golfers.guardianAccountId', by.accountId)
-    })
-  }
-  return query.castTo<EnrolmentRow[]>()
+    .castTo<EnrolmentRow[]>()
 }
 
 export interface PlaceRow extends Place {

@@ -28,12 +28,11 @@ export function enrolmentHandlers(
   services: Services,
   { show, readCredit }: { show: ShowEnrolments; readCredit: ReadCredit },
 ): Handlers {
-  const showOne = (academyId: string, id: string) =>
-    inAcademy(services.db, academyId, async (trx) => {
-      const [view] = await show(trx, { ids: [id] })
-      invariant(view, 'the enrolment to be shown exists')
-      return view
-    })
+  const showOne = async (trx: AcademyTrx, id: string): Promise<EnrolmentView> => {
+    const [view] = await show(trx, { ids: [id] })
+    invariant(view, 'the enrolment to be shown exists')
+    return view
+  }
 
   return {
     'enrolments.mine': (_input, context) => {
@@ -44,18 +43,15 @@ export function enrolmentHandlers(
         creditMinor: await readCredit(trx, account.id),
       }))
     },
-    'enrolments.hold': async ({ body }, context) => {
+    'enrolments.hold': ({ body }, context) => {
       const { academyId, account: person } = asStaff(context)
-      const id = await holdPlaces(services, { academyId, person, wanted: body })
-      return showOne(academyId, id)
+      return holdPlaces(services, { academyId, person, wanted: body }, showOne)
     },
     'enrolments.read': ({ params }, context) => {
       const { academyId, account } = asStaff(context)
       return inAcademy(services.db, academyId, async (trx) => {
         await lockOwnEnrolment(trx, { ...params, accountId: account.id })
-        const [view] = await show(trx, { ids: [params.enrolmentId] })
-        invariant(view, 'the enrolment was just found')
-        return view
+        return showOne(trx, params.enrolmentId)
       })
     },
     'waitlist.join': ({ body }, context) => {

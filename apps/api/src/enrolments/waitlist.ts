@@ -6,8 +6,9 @@ import { newId } from '../platform/ids'
 import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
-import { checkFit, findOnSale, takePlaces, type WantedPlaces } from './hold'
+import { takePlaces } from './hold'
 import type { WaitlistEntry } from './models'
+import { checkFit, findOnSale, type WantedPlaces } from './on-sale'
 import {
   findActiveEnrolment,
   findWaitlistEntry,
@@ -115,6 +116,7 @@ async function offer(
     takenBy: accountId,
     heldUntil: offerUntil({ now, offerHours, firstStartsAt: first.startsAt }),
     isOffer: true,
+    meanwhile: (id) => Promise.resolve(id),
   })
   const isFree = onSale.price.netMinor + onSale.price.taxMinor === 0
   await updateWaitlistEntry(trx, entry.id, { state: isFree ? 'taken' : 'offered', enrolmentId })

@@ -139,7 +139,14 @@ export async function findOwnGolfer(
   trx: AcademyTrx,
   { golferId, accountId }: { golferId: string; accountId: string },
 ): Promise<Golfer> {
-  const golfer = await findGolfer(trx, golferId)
+  return checkOwnGolfer(await findGolfer(trx, golferId), accountId)
+}
+
+/** As `findOwnGolfer`, for one who was read already. */
+export function checkOwnGolfer<G extends Pick<Golfer, 'accountId' | 'guardianAccountId'>>(
+  golfer: G | null | undefined,
+  accountId: string,
+): G {
   const isTheirs = golfer?.accountId === accountId || golfer?.guardianAccountId === accountId
   if (!golfer || !isTheirs) throw notFound('golfer')
   return golfer

@@ -1,4 +1,5 @@
 import { raw } from 'objection'
+import { ask } from '../platform/tenancy/ask'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 import { Consent, Golfer, MinorLookUp } from './models'
 
@@ -47,8 +48,18 @@ export async function updateGolfer(
   return Golfer.query(trx).patch(change).where({ id })
 }
 
-export async function insertConsent(trx: AcademyTrx, row: Partial<Consent>): Promise<void> {
-  await Consent.query(trx).insert(row)
+export async function insertConsent(
+  trx: AcademyTrx,
+  row: Pick<Consent, 'id' | 'golferId' | 'kind' | 'wording' | 'givenBy' | 'givenAt'>,
+): Promise<void> {
+  const { id, golferId, kind, wording, givenBy, givenAt } = row
+  await ask(trx, {
+    name: 'insert-consent',
+    text: `
+      INSERT INTO consents (academy_id, id, golfer_id, kind, wording, given_by, given_at)
+      VALUES (current_setting('app.academy_id')::uuid, $1, $2, $3, $4, $5, $6)`,
+    values: [id, golferId, kind, wording, givenBy, givenAt],
+  })
 }
 
 export interface ConsentRow {

@@ -30,7 +30,7 @@ export async function readEnrolmentFacts(
   trx: AcademyTrx,
   enrolmentId: string,
 ): Promise<EnrolmentFacts | null> {
-  const [enrolment] = await listEnrolments(trx, { ids: [enrolmentId] })
+  const [enrolment] = await listEnrolments(trx, [enrolmentId])
   if (!enrolment) return null
   const addressee = await findAddressee(trx, enrolment.golferId)
   const clinic = await findClinic(trx, enrolment.clinicId)

@@ -12,7 +12,10 @@ import { Drawing } from '../ui/drawing'
 const publishedQuery = () => routeQuery('academies.published', {})
 
 export const loader = (client: QueryClient) => () =>
-  Promise.all([client.ensureQueryData(publishedQuery()), client.prefetchQuery(sessionQuery)])
+  Promise.all([
+    client.query({ ...publishedQuery(), staleTime: 'static' }),
+    client.query(sessionQuery).catch(() => undefined),
+  ])
 
 export default function FrontPage() {
   useTitle('Marram')

@@ -1,5 +1,5 @@
 import { useQueryClient } from '@tanstack/react-query'
-import { useDeferredValue, useState, type FormEvent } from 'react'
+import { useDeferredValue, useState, type SubmitEvent } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { call } from '../api/client'
 import { ApiProblem } from '../api/problem'
@@ -39,7 +39,7 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
   const address = useAddress(wanted.slug || wanted.name, session?.account !== null)
   const slug = wanted.slug || address.suggestion
 
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault()
     setProblem(null)
     setIsWorking(true)

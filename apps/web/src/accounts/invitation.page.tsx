@@ -1,5 +1,5 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
-import { useState, type FormEvent } from 'react'
+import { useState, type SubmitEvent } from 'react'
 import { useNavigate } from 'react-router'
 import { call } from '../api/client'
 import { sentenceOf } from '../api/problem'
@@ -36,7 +36,7 @@ export default function InvitationPage() {
     },
     onError: (caught) => setError(sentenceOf(caught)),
   })
-  const submit = (event: FormEvent) => {
+  const submit = (event: SubmitEvent) => {
     event.preventDefault()
     setError('')
     accept.mutate()

@@ -1,4 +1,4 @@
-import { useState, type FormEvent } from 'react'
+import { useState, type SubmitEvent } from 'react'
 import { useNavigate } from 'react-router'
 import { useMutation } from '@tanstack/react-query'
 import { call } from '../api/client'
@@ -26,7 +26,7 @@ export default function ResetPage() {
 function Ask() {
   const [email, setEmail] = useState('')
   const ask = useMutation({ mutationFn: () => call('accounts.ask-reset', { body: { email } }) })
-  const submit = (event: FormEvent) => {
+  const submit = (event: SubmitEvent) => {
     event.preventDefault()
     ask.mutate()
   }
@@ -65,7 +65,7 @@ function Choose({ secret }: { secret: string }) {
       await navigate(paths.home())
     },
   })
-  const submit = (event: FormEvent) => {
+  const submit = (event: SubmitEvent) => {
     event.preventDefault()
     reset.mutate()
   }

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useRef, useState, type FormEvent } from 'react'
+import { useRef, useState, type SubmitEvent } from 'react'
 import { Link, useNavigate, useSearchParams } from 'react-router'
 import { routeQuery } from '../api/query'
 import { ApiProblem } from '../api/problem'
@@ -39,7 +39,7 @@ export default function SignInPage() {
       focusFirstWrong(form.current)
     }
   }
-  const submit = (event: FormEvent) => {
+  const submit = (event: SubmitEvent) => {
     event.preventDefault()
     void go({ email, password })
   }

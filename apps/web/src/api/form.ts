@@ -1,4 +1,4 @@
-import { useRef, useState, type FormEvent } from 'react'
+import { useRef, useState, type SubmitEvent } from 'react'
 import { focusFirstWrong } from '../ui/field'
 import { ApiProblem } from './problem'
 
@@ -34,7 +34,7 @@ export function useForm(send: () => Promise<unknown>) {
     form: {
       ref,
       noValidate: true,
-      onSubmit: (event: FormEvent) => {
+      onSubmit: (event: SubmitEvent) => {
         event.preventDefault()
         void submit()
       },

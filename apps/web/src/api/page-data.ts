@@ -1,7 +1,7 @@
 let waiting: { key: string; answer: unknown } | null | undefined
 
 /** The answer that the server put into the page, for the address it is of; taken once. */
-export function takePageData<T>(address: string): T | undefined {
+export function takePageData(address: string): unknown {
   if (waiting === undefined) {
     const text = document.getElementById('page-data')?.textContent
     waiting = text ? (JSON.parse(text) as { key: string; answer: unknown }) : null
@@ -9,6 +9,5 @@ export function takePageData<T>(address: string): T | undefined {
   if (waiting?.key !== address) return undefined
   const { answer } = waiting
   waiting = null
-  // The server wrote what this route answers.
-  return answer as T
+  return answer
 }

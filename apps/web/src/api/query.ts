@@ -14,7 +14,7 @@ export function routeQuery<K extends RouteKey>(key: K, input: CallInput<K>) {
   return queryOptions({
     queryKey: [loose.academy ?? '', key, address],
     queryFn: ({ signal }) => call(key, { ...input, signal }),
-    // What came inside the page's HTML was true a moment ago.
-    initialData: () => takePageData<Answer<K>>(address),
+    // What came inside the page's HTML was true a moment ago; the server wrote what the route answers.
+    initialData: () => takePageData(address) as Answer<K> | undefined,
   })
 }

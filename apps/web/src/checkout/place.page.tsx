@@ -16,8 +16,8 @@ export const loader =
   ({ params }: LoaderFunctionArgs) => {
     const slug = params['academy'] ?? ''
     return Promise.all([
-      client.ensureQueryData(academyPageQuery(slug)),
-      client.prefetchQuery(enrolmentQuery(slug, params['enrolmentId'] ?? '')),
+      client.query({ ...academyPageQuery(slug), staleTime: 'static' }),
+      client.query(enrolmentQuery(slug, params['enrolmentId'] ?? '')).catch(() => undefined),
     ])
   }
 

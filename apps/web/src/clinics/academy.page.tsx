@@ -18,7 +18,7 @@ import { academyPageQuery, type AcademyPage, type PageClinic } from './queries'
 export const loader =
   (client: QueryClient) =>
   ({ params }: LoaderFunctionArgs) =>
-    client.ensureQueryData(academyPageQuery(params['academy'] ?? ''))
+    client.query({ ...academyPageQuery(params['academy'] ?? ''), staleTime: 'static' })
 
 export default function AcademyPageView() {
   const { academy: slug = '' } = useParams()
@@ -82,12 +82,10 @@ function PageTop({ page, format }: { page: AcademyPage; format: Format }) {
             >
               Take a place
             </Link>
-            <span>
-              <b>
-                {next.title}, {format.day(next.startsAt, 'weekday')}
-              </b>
+            <span className="max-w-[9rem] leading-tight">
+              <b>{next.title}</b>
               <br />
-              {placesLeft(next)}
+              {format.day(next.startsAt, 'weekday')}, {placesLeft(next)}
             </span>
           </p>
         )}

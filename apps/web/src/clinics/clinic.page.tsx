@@ -17,7 +17,10 @@ import { SessionCard } from './session-card'
 export const loader =
   (client: QueryClient) =>
   ({ params }: LoaderFunctionArgs) =>
-    client.ensureQueryData(clinicPageQuery(params['academy'] ?? '', params['clinic'] ?? ''))
+    client.query({
+      ...clinicPageQuery(params['academy'] ?? '', params['clinic'] ?? ''),
+      staleTime: 'static',
+    })
 
 export default function ClinicPageView() {
   const { academy: slug = '', clinic: clinicSlug = '' } = useParams()

@@ -7,11 +7,12 @@ import { PlaceTicks } from '../ui/place-ticks'
 import { Tag } from '../ui/tag'
 import { dayOfInstant, type Board } from './board-times'
 import { listOf } from './list-of'
+import { useNow } from '../ui/use-now'
 
 /** The week in the hand: one day at a time, in order of time. */
 export function DayBoard(props: { academy: string; board: Board; format: Format }) {
   const { academy, board, format } = props
-  const today = dayOfInstant(new Date(Date.now()).toISOString(), board.zone)
+  const today = dayOfInstant(new Date(useNow()).toISOString(), board.zone)
   const isThisWeek = board.days.some(({ dayLocal }) => dayLocal === today)
   const [day, setDay] = useState(isThisWeek ? today : (board.days[0]?.dayLocal ?? today))
   const sessions = board.sessions.filter(

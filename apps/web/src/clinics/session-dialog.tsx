@@ -1,19 +1,17 @@
 import { useState } from 'react'
-import type { Sent } from '@marram/contract'
-import { useQuery } from '@tanstack/react-query'
 import type { Format } from '../academies/format'
-import { coachesQuery } from '../academies/queries'
 import { call } from '../api/client'
 import { useAcademyMutation } from '../api/mutation'
 import { sentenceOf } from '../api/problem'
 import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
-import { Field, SelectField } from '../ui/field'
+import { Field } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
+import { ChangeSession } from './change-session'
 import type { Session } from './queries'
 
-/** One session: change its time, coach or capacity, or call it off. */
+/** One session: change it, or call it off. */
 export function SessionDialog(props: {
   academy: string
   clinicId: string
@@ -37,7 +35,7 @@ export function SessionDialog(props: {
         <CallOff academy={academy} session={session} onDone={onClose} />
       ) : (
         <>
-          <Change academy={academy} session={session} format={format} onDone={onClose} />
+          <ChangeSession academy={academy} session={session} format={format} onDone={onClose} />
           <div className="mt-5">
             <Button kind="danger" onClick={() => setIsCallingOff(true)}>
               Call this session off
@@ -46,79 +44,6 @@ export function SessionDialog(props: {
         </>
       )}
     </Dialog>
-  )
-}
-
-function Change(props: { academy: string; session: Session; format: Format; onDone: () => void }) {
-  const { academy, session, format, onDone } = props
-  const coaches = useQuery(coachesQuery(academy))
-  const had = localOf(session.startsAt, format.zone)
-  const minutes = (Date.parse(session.endsAt) - Date.parse(session.startsAt)) / 60_000
-  const [day, setDay] = useState(had.day)
-  const [time, setTime] = useState(had.time)
-  const [duration, setDuration] = useState(String(minutes))
-  const [coachId, setCoachId] = useState(session.coaches[0]?.id ?? '')
-  const [capacity, setCapacity] = useState(String(session.capacity))
-  const change = useAcademyMutation(academy, (body: Sent<'sessions.change', 'body'>) =>
-    call('sessions.change', { academy, params: { sessionId: session.id }, body }),
-  )
-  const press = () =>
-    change.mutate(
-      {
-        startsOnLocal: day,
-        startsAtLocal: time,
-        durationMinutes: Number(duration),
-        capacity: Number(capacity),
-        ...(coachId === session.coaches[0]?.id ? {} : { coachIds: [coachId] }),
-      },
-      {
-        onSuccess: () => {
-          toast('Changed. Golfers get a mail with the new time.')
-          onDone()
-        },
-      },
-    )
-  return (
-    <>
-      {change.error && <Notice kind="flag">{sentenceOf(change.error)}</Notice>}
-      <div className="f two">
-        <Field
-          label="Day"
-          type="date"
-          value={day}
-          onChange={(event) => setDay(event.target.value)}
-        />
-        <Field
-          label="Starts at"
-          type="time"
-          value={time}
-          onChange={(event) => setTime(event.target.value)}
-        />
-      </div>
-      <div className="f two">
-        <Field
-          label="Minutes"
-          type="number"
-          value={duration}
-          onChange={(event) => setDuration(event.target.value)}
-        />
-        <Field
-          label="Places"
-          type="number"
-          value={capacity}
-          onChange={(event) => setCapacity(event.target.value)}
-        />
-      </div>
-      <SelectField
-        label="Coach"
-        value={coachId}
-        onChange={setCoachId}
-        options={(coaches.data?.coaches ?? []).map(({ id, name }) => ({ value: id, label: name }))}
-      />
-      <Button kind="go" waiting={change.isPending && 'Changing…'} onClick={press}>
-        Change this session
-      </Button>
-    </>
   )
 }
 
@@ -165,14 +90,4 @@ function CallOff({
       </Button>
     </>
   )
-}
-
-function localOf(at: string, zone: string): { day: string; time: string } {
-  const day = new Intl.DateTimeFormat('en-CA', { timeZone: zone }).format(new Date(at))
-  const time = new Intl.DateTimeFormat('en-GB', {
-    timeZone: zone,
-    hour: '2-digit',
-    minute: '2-digit',
-  }).format(new Date(at))
-  return { day, time }
 }

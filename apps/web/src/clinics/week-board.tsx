@@ -6,6 +6,7 @@ import { paths } from '../paths'
 import { Drawing } from '../ui/drawing'
 import { PlaceTicks } from '../ui/place-ticks'
 import { dayOfInstant, hoursOf, minutesOfDay, type Board, type BoardSession } from './board-times'
+import { useNow } from '../ui/use-now'
 
 const MOST_TICKS = 12
 
@@ -15,7 +16,7 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
   const hours = hoursOf(board)
   const span = (hours.to - hours.from) * 60
   const at = (minutes: number) => ((minutes - hours.from * 60) / span) * 100
-  const now = new Date(Date.now()).toISOString()
+  const now = new Date(useNow()).toISOString()
   const today = dayOfInstant(now, board.zone)
   const nowMinutes = minutesOfDay(now, board.zone)
   const isNowShown = nowMinutes > hours.from * 60 && nowMinutes < hours.to * 60
@@ -141,7 +142,7 @@ function Slip(props: {
   const { academy, session, zone, format, at } = props
   const from = at(minutesOfDay(session.startsAt, zone))
   const to = at(minutesOfDay(session.endsAt, zone))
-  const isDone = Date.parse(session.endsAt) < Date.now()
+  const isDone = Date.parse(session.endsAt) < useNow()
   const isOff = session.state === 'called-off'
   const isWarning = session.darkMinutes > 0 && !isDone && !isOff
   const kind = isOff ? 'done less' : isWarning ? 'warn' : isDone ? 'done' : ''
@@ -160,7 +161,9 @@ function Slip(props: {
         <span
           className={`pl2 c${session.capacity > MOST_TICKS ? 14 : ticksClass(session.capacity)}`}
         >
-          <PlaceTicks taken={session.taken} capacity={session.capacity} />
+          {session.capacity <= MOST_TICKS && (
+            <PlaceTicks taken={session.taken} capacity={session.capacity} />
+          )}
           <span className="frac">
             {session.taken}/{session.capacity}
           </span>

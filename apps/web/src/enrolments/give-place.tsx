@@ -10,6 +10,7 @@ import { Button } from '../ui/button'
 import { CheckField, SelectField } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
+import { useNow } from '../ui/use-now'
 
 /** Staff take a place for a golfer; it is paid at the desk. */
 export function GivePlace(props: { academy: string; golferId: string; format: Format }) {
@@ -26,8 +27,9 @@ export function GivePlace(props: { academy: string; golferId: string; format: Fo
   const give = useAcademyMutation(academy, (body: Sent<'enrolments.give', 'body'>) =>
     call('enrolments.give', { academy, body }),
   )
+  const now = useNow()
   const sessions = (clinic.data?.sessions ?? []).filter(
-    ({ startsAt, state }) => Date.parse(startsAt) > Date.now() && state === 'planned',
+    ({ startsAt, state }) => Date.parse(startsAt) > now && state === 'planned',
   )
   const isDropIn = clinic.data?.saleMode === 'drop-in'
   const session = sessionId || (isDropIn ? (sessions[0]?.id ?? '') : '')

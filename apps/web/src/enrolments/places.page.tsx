@@ -14,8 +14,8 @@ export const loader =
   ({ params }: LoaderFunctionArgs) => {
     const slug = params['academy'] ?? ''
     return Promise.all([
-      client.ensureQueryData(myPlacesQuery(slug)),
-      client.ensureQueryData(academyPageQuery(slug)),
+      client.query({ ...myPlacesQuery(slug), staleTime: 'static' }),
+      client.query({ ...academyPageQuery(slug), staleTime: 'static' }),
     ])
   }
 

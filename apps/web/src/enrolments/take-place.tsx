@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useRef, useState, type FormEvent } from 'react'
+import { useRef, useState, type SubmitEvent } from 'react'
 import { useNavigate } from 'react-router'
 import { taxInWords, type Format } from '../academies/format'
 import { useSession } from '../accounts/queries'
@@ -46,7 +46,7 @@ export function TakePlace({ page, format }: { page: ClinicPage; format: Format }
       ? (chosen?.taken ?? 0) >= (chosen?.capacity ?? 1)
       : ahead.some(({ taken, capacity }) => taken >= capacity)
 
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault()
     setProblem(null)
     setIsBusy(true)

@@ -1,5 +1,5 @@
 import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
-import { useRef, useState, type FormEvent } from 'react'
+import { useRef, useState, type SubmitEvent } from 'react'
 import { useParams, type LoaderFunctionArgs } from 'react-router'
 import { SignOut } from '../accounts/sign-out'
 import { call } from '../api/client'
@@ -19,8 +19,8 @@ export const loader =
   ({ params }: LoaderFunctionArgs) => {
     const slug = params['academy'] ?? ''
     return Promise.all([
-      client.ensureQueryData(myGolfersQuery(slug)),
-      client.ensureQueryData(academyPageQuery(slug)),
+      client.query({ ...myGolfersQuery(slug), staleTime: 'static' }),
+      client.query({ ...academyPageQuery(slug), staleTime: 'static' }),
     ])
   }
 
@@ -82,7 +82,7 @@ function AddDependant(props: { slug: string; safeguarding: string; onDone: () =>
   const add = useAcademyMutation(props.slug, () =>
     call('golfers.add-dependant', { academy: props.slug, body: toDependant(draft) }),
   )
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault()
     setProblem(null)
     try {

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useDeferredValue, useState, type FormEvent } from 'react'
+import { useDeferredValue, useState, type SubmitEvent } from 'react'
 import { Link, useNavigate, useParams } from 'react-router'
 import type { Sent } from '@marram/contract'
 import { call } from '../api/client'
@@ -116,7 +116,7 @@ function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
     call('golfers.enter', { academy: slug, body }),
   )
   const set = (change: Partial<typeof fields>) => setFields({ ...fields, ...change })
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault()
     setProblem(null)
     try {

@@ -11,7 +11,7 @@ import { PublicFoot } from './public-foot'
 export const loader =
   (client: QueryClient) =>
   async ({ request }: LoaderFunctionArgs) => {
-    const { account } = await client.ensureQueryData(sessionQuery)
+    const { account } = await client.query({ ...sessionQuery, staleTime: 'static' })
     const url = new URL(request.url)
     return account ? null : redirect(paths.signIn(url.pathname + url.search))
   }

@@ -1,5 +1,4 @@
-import { Outlet, ScrollRestoration, useRouteError } from 'react-router'
-import { Link } from 'react-router'
+import { Link, Outlet, ScrollRestoration, isRouteErrorResponse, useRouteError } from 'react-router'
 import { ApiProblem, sentenceOf } from '../api/problem'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
@@ -19,8 +18,10 @@ export function RootLayout() {
 /** What is shown when a page cannot be. */
 export function PageError() {
   const error = useRouteError()
-  const status = error instanceof ApiProblem ? error.status : Number(Object(error).status ?? 0)
-  const isMissing = status === 404
+  const isMissing =
+    error instanceof ApiProblem
+      ? error.status === 404
+      : isRouteErrorResponse(error) && error.status === 404
   return (
     <main id="main" className="wrap narrow py-16">
       <h1>{isMissing ? 'There is nothing here' : 'This page did not come up'}</h1>

@@ -13,7 +13,7 @@ import { useAccent } from './accent'
 export const loader =
   (client: QueryClient) =>
   async ({ request, params }: LoaderFunctionArgs) => {
-    const session = await client.ensureQueryData(sessionQuery)
+    const session = await client.query({ ...sessionQuery, staleTime: 'static' })
     const url = new URL(request.url)
     if (!session.account) return redirect(paths.signIn(url.pathname + url.search))
     const roles = rolesIn(session, params['academy'] ?? '')

@@ -13,12 +13,14 @@ import { AttestStrip } from './attest-strip'
 import { FigureDrawer } from './figure-drawer'
 import { MoneyTable } from './money-table'
 import { moneyQuery, type OpenFigure } from './queries'
+import { useNow } from '../ui/use-now'
 
 /** The money card: what was earned month by month, and what every figure is made of. */
 export default function MoneyPage() {
   const { academy: slug = '' } = useParams()
   const [query] = useSearchParams()
-  const year = Number(query.get('year') ?? new Date(Date.now()).getFullYear())
+  const thisYear = new Date(useNow()).getFullYear()
+  const year = Number(query.get('year') ?? thisYear)
   const card = useQuery(moneyQuery(slug, year))
   const [open, setOpen] = useState<OpenFigure | null>(null)
   useTitle(`Money ${year}`)

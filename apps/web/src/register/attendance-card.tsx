@@ -4,6 +4,7 @@ import type { Format } from '../academies/format'
 import type { Session } from '../clinics/queries'
 import { Drawing } from '../ui/drawing'
 import { Mark, type MarkName } from '../ui/mark'
+import { useNow } from '../ui/use-now'
 
 type Row = Answer<'register.card'>['rows'][number]
 
@@ -53,7 +54,7 @@ function Grid({
   onSession,
 }: CardProps & { halves: readonly (readonly Session[])[]; labels?: string[]; hasTotal?: boolean }) {
   const table = useRef<HTMLTableElement>(null)
-  const now = Date.now()
+  const now = useNow()
   const current = sessions.find(
     ({ endsAt, state }) => Date.parse(endsAt) > now && state === 'planned',
   )

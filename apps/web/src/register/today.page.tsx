@@ -6,6 +6,7 @@ import { academyQuery } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
+import { buttonClass } from '../ui/button'
 import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
 import { DaySheet } from './day-sheet'
 import { dayQuery, type Register } from './queries'
@@ -18,9 +19,9 @@ export const loader =
   (client: QueryClient) =>
   async ({ params, request }: LoaderFunctionArgs) => {
     const slug = params['academy'] ?? ''
-    const { zone } = await client.ensureQueryData(academyQuery(slug))
+    const { zone } = await client.query({ ...academyQuery(slug), staleTime: 'static' })
     const day = new URL(request.url).searchParams.get('day') ?? todayIn(zone)
-    void client.prefetchQuery(dayQuery(slug, day))
+    void client.query(dayQuery(slug, day)).catch(() => undefined)
     return null
   }
 
@@ -33,7 +34,7 @@ export default function TodayPage() {
   const date = query.get('day') ?? todayIn(academy.zone)
   const day = useQuery(dayQuery(slug, date))
   const [chosen, setChosen] = useState<string | null>(null)
-  const title = formatLocalDay({ dayLocal: date, locale, style: 'weekday-long' })
+  const title = formatLocalDay({ dayLocal: date, locale, style: 'weekday' })
   useTitle(title)
 
   if (day.isPending) {
@@ -57,9 +58,21 @@ export default function TodayPage() {
     <main id="main" className="hand">
       <div className="bar">
         <h1 className="text-name">{title}</h1>
-        <span className="actions note">
-          <Link to={paths.today(slug, shift(date, -1))}>Day before</Link>
-          <Link to={paths.today(slug, shift(date, 1))}>Day after</Link>
+        <span className="actions">
+          <Link
+            className={buttonClass()}
+            to={paths.today(slug, shift(date, -1))}
+            aria-label="The day before"
+          >
+            ‹
+          </Link>
+          <Link
+            className={buttonClass()}
+            to={paths.today(slug, shift(date, 1))}
+            aria-label="The day after"
+          >
+            ›
+          </Link>
         </span>
       </div>
       {registers.length > 1 && (

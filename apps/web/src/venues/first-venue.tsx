@@ -1,4 +1,4 @@
-import { useState, type FormEvent } from 'react'
+import { useState, type SubmitEvent } from 'react'
 import { call } from '../api/client'
 import { useAcademyMutation } from '../api/mutation'
 import { sentenceOf } from '../api/problem'
@@ -43,7 +43,7 @@ export function FirstVenue(props: {
   const set = (change: Partial<Wanted>) => setWanted((had) => ({ ...had, ...change }))
   const keep = useAcademyMutation(props.slug, () => keepVenue(props, wanted))
 
-  const submit = async (event: FormEvent) => {
+  const submit = async (event: SubmitEvent) => {
     event.preventDefault()
     setError('')
     if (readDegrees(wanted.latitude) === null || readDegrees(wanted.longitude) === null) {

@@ -49,7 +49,10 @@ export async function startPaymentsFake(options: PaymentsFakeOptions): Promise<P
   if (options.webhookUrl) requireLoopback(options.webhookUrl, 'a webhook')
   let url = ''
   // What was kept was written by this stand-in.
-  const state = (readKept(options.stateFile) as FakeState | undefined) ?? emptyState()
+  const state = {
+    ...emptyState(),
+    ...(readKept(options.stateFile) as Partial<FakeState> | undefined),
+  }
   const kept = keepState(options.stateFile, () => state)
   const trouble = makeTrouble()
   const machine = makeMachine({

@@ -31,9 +31,15 @@ class OneMessageTransaction extends PgTransaction {
     this.#withBegin = config?.withBegin
   }
 
+  /**
+   * Sends BEGIN and does not wait for it: over a pipelined connection what follows is answered
+   * after it. Should BEGIN fail, the class we extend rejects the transaction, and what was sent
+   * behind it ran inside no academy, where row-level security shows and takes nothing.
+   */
   begin(connection: unknown): Promise<unknown> {
     const begin = this.readOnly ? 'BEGIN READ ONLY' : 'BEGIN'
-    return this.query(connection, this.#withBegin ? `${begin}; ${this.#withBegin}` : begin)
+    void this.query(connection, this.#withBegin ? `${begin}; ${this.#withBegin}` : begin)
+    return Promise.resolve()
   }
 }
 

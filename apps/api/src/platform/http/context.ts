@@ -13,7 +13,10 @@ export interface SignedInAccount {
 export interface RequestContext {
   requestId: string
   account: SignedInAccount | null
-  /** The academy of the address; null outside `/api/academies/{academy}`. */
+  /**
+   * The academy of the address; null outside `/api/academies/{academy}`, and for a visitor of a
+   * public page, which finds its academy by the slug while it is read.
+   */
   academyId: string | null
   academySlug: string | null
   roles: readonly Role[]

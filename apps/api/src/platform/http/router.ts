@@ -12,13 +12,11 @@ import { Router, type Request, type Response } from 'express'
 import type { ZodType } from 'zod'
 import { Problem, notFound } from '../errors'
 import type { Services } from '../services'
-import { findAcademyBySlug } from '../tenancy/look-ups'
+import { readCaller } from './caller'
 import { Download, type Handlers, type RequestContext } from './context'
 import { fieldSentences } from './field-sentences'
-import { currentAccount, signInAs, signOut } from './sign-in-session'
+import { signInAs, signOut } from './sign-in-session'
 import { tokenOf } from './request-token'
-
-type RolesOf = (place: { academyId: string; accountId: string }) => Promise<Role[]>
 
 type Schemas = Partial<Record<'params' | 'query' | 'body', ZodType>>
 
@@ -26,13 +24,10 @@ type Schemas = Partial<Record<'params' | 'query' | 'body', ZodType>>
  * Serves every route of the contract: checks who may call it, validates what came, and answers
  * with what the handler gives back. Refuses to start when a route has no handler.
  */
-export function makeApiRouter(
-  services: Services,
-  options: { handlers: Handlers; rolesOf: RolesOf },
-): Router {
+export function makeApiRouter(services: Services, handlers: Handlers): Router {
   const router = Router()
   const keys = Object.keys(ROUTES) as RouteKey[]
-  const missing = keys.filter((key) => !options.handlers[key])
+  const missing = keys.filter((key) => !handlers[key])
   if (missing.length > 0) throw new Error(`Routes without a handler: ${missing.join(', ')}.`)
 
   for (const key of keys) {
@@ -40,11 +35,11 @@ export function makeApiRouter(
     // Each route has its own shapes; what matters here is only that they parse.
     const schemas = SCHEMAS[key] as Schemas
     // Handlers were typed where they were declared; here every key is the same to us.
-    const handler = options.handlers[key] as (input: object, context: RequestContext) => unknown
+    const handler = handlers[key] as (input: object, context: RequestContext) => unknown
     const method = spec.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete'
     router[method](spec.path, async (request, response) => {
       response.locals['route'] = key
-      const context = await makeContext(services, options.rolesOf, spec, request, response)
+      const context = await makeContext(services, spec, request, response)
       const { academy: _, ...params } = request.params
       const answer = await handler(
         {
@@ -90,20 +85,17 @@ function parse(
 
 async function makeContext(
   services: Services,
-  rolesOf: RolesOf,
   spec: RouteSpec,
   request: Request,
   response: Response,
 ): Promise<RequestContext> {
-  const account = await currentAccount(services, request)
+  const academySlug = slugOf(request)
+  const { account, academyId, roles } = await readCaller(services, request, academySlug)
   if (spec.access !== 'public' && !account) {
     throw new Problem('not-signed-in', 'Please sign in first.')
   }
-  const academySlug = slugOf(request)
-  const academyId = academySlug ? await findAcademyBySlug(services.db, academySlug) : null
-  if (academySlug && !academyId) throw notFound('academy')
-  const needsRoles = account && academyId && spec.access !== 'public'
-  const roles = needsRoles ? await rolesOf({ academyId, accountId: account.id }) : []
+  // A visitor's look at a public page finds its academy with the page itself, in one message.
+  if (academySlug && account && !academyId) throw notFound('academy')
   return {
     requestId: String(response.locals['requestId']),
     account,

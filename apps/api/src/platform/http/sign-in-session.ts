@@ -2,7 +2,6 @@ import { randomBytes } from 'node:crypto'
 import type { Request, RequestHandler, Response } from 'express'
 import session from 'express-session'
 import type { Services } from '../services'
-import type { SignedInAccount } from './context'
 import { invariant } from '../invariant'
 import { SignInStore } from './sign-in-store'
 
@@ -39,40 +38,15 @@ export function signInSessions(services: Services): RequestHandler {
   })
 }
 
-interface AccountRow {
-  id: string
-  name: string
-  email: string
-  emailVerifiedAt: Date | null
-  passwordHash: string | null
-  sessionVersion: number
-}
-
-/** The person of this request, or null. A session of an older version counts as ended. */
-export async function currentAccount(
-  { db }: Services,
-  request: Request,
-): Promise<SignedInAccount | null> {
-  const { accountId, sessionVersion } = request.session
-  if (!accountId) return null
-  const row = await db('accounts').where({ id: accountId }).first<AccountRow | undefined>()
-  if (!row || row.sessionVersion !== sessionVersion) return null
-  return {
-    id: row.id,
-    name: row.name,
-    email: row.email,
-    isVerified: row.emailVerifiedAt !== null,
-    hasPassword: row.passwordHash !== null,
-  }
-}
-
 /** Signs the person in under a new session id, so that one known before is worth nothing. */
 export async function signInAs(
   { db }: Services,
   request: Request,
   accountId: string,
 ): Promise<void> {
-  const row = await db('accounts').where({ id: accountId }).first<AccountRow | undefined>()
+  const row = await db('accounts')
+    .where({ id: accountId })
+    .first<{ sessionVersion: number } | undefined>('sessionVersion')
   invariant(row, 'the account that signs in exists')
   await new Promise<void>((resolve, reject) => {
     request.session.regenerate((error?: unknown) => (error ? reject(error) : resolve()))

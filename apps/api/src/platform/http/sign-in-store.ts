@@ -32,15 +32,22 @@ export class SignInStore extends Store {
   }
 
   override get(id: string, done: Done<SessionData | null>): void {
+    this.#read(id).then(
+      (data) => done(null, data),
+      (error: unknown) => done(error),
+    )
+  }
+
+  /** Named, since every request asks it. */
+  async #read(id: string): Promise<SessionData | null> {
     const { db, clock } = this.#services
-    db('sign_in_sessions')
-      .where({ idHash: hashOf(id) })
-      .andWhere('expiresAt', '>', clock.now())
-      .first<{ data: SessionData } | undefined>('data')
-      .then(
-        (row) => done(null, row?.data ?? null),
-        (error: unknown) => done(error),
+    const { rows } = await db
+      .raw<{ rows: { data: SessionData }[] }>(
+        'SELECT data FROM sign_in_sessions WHERE id_hash = ? AND expires_at > ?',
+        [hashOf(id), clock.now()],
       )
+      .options({ name: 'sign-in-session' })
+    return rows[0]?.data ?? null
   }
 
   override set(id: string, session: SessionData, done: Done<void> = () => {}): void {

@@ -49,6 +49,38 @@ export async function listMembershipsOf(db: Knex, accountId: string): Promise<Me
   return rows
 }
 
+export interface CallerRow {
+  id: string
+  name: string
+  email: string
+  isVerified: boolean
+  hasPassword: boolean
+  sessionVersion: number
+  /** The academy of the address; null for an address that is none. */
+  academyId: string | null
+  /** The person's roles in that academy. */
+  roles: Role[]
+}
+
+/** Who calls, where, and with which roles there: what every signed-in request asks, asked once. */
+export async function findCaller(
+  db: Knex,
+  { accountId, slug }: { accountId: string; slug: string | null },
+): Promise<CallerRow | undefined> {
+  const { rows } = await db
+    .raw<{ rows: CallerRow[] }>(
+      `SELECT a.id, a.name, a.email, a.email_verified_at IS NOT NULL AS is_verified,
+         a.password_hash IS NOT NULL AS has_password, a.session_version,
+         find_academy_by_slug(:slug) AS academy_id,
+         (SELECT coalesce(array_agg(m.role), '{}') FROM list_memberships_of(a.id) m
+            WHERE m.slug = :slug) AS roles
+       FROM accounts a WHERE a.id = :accountId`,
+      { accountId, slug },
+    )
+    .options({ name: 'caller' })
+  return rows[0]
+}
+
 export interface PublishedAcademy {
   slug: string
   name: string

@@ -1,6 +1,8 @@
 import type { Knex } from 'knex'
+import type pg from 'pg'
 import type { BeginOptions } from '../db/client'
 import { invariant } from '../invariant'
+import { askBetween, type Question } from './ask'
 
 declare const inside: unique symbol
 
@@ -40,19 +42,20 @@ export function inAcademy<T>(
 }
 
 /**
- * Runs raw, read-only SQL inside the academy of this address, finding it in the same message as
- * BEGIN. An unknown address sees no rows at all. The model layer does not work in here.
+ * Asks one read-only question inside the academy of this address, which is found in the same
+ * message as BEGIN. All goes out at once: it costs one way there and back. An unknown address sees
+ * no rows at all. The model layer does not work in here.
  */
-export function readPageOf<T>(
+export function askPageOf<Row extends pg.QueryResultRow>(
   db: Knex,
   slug: string,
-  work: (trx: Knex.Transaction) => Promise<T>,
-): Promise<T> {
+  question: Question,
+): Promise<Row[]> {
   const wanted = SLUG.test(slug) ? slug : ''
-  const withBegin =
-    `SELECT set_config('app.academy_id', ` +
+  const begin =
+    `BEGIN READ ONLY; SELECT set_config('app.academy_id', ` +
     `coalesce(find_academy_by_slug('${wanted}')::text, ''), true)`
-  return begin(db, { readOnly: true, withBegin }, work)
+  return askBetween(db, { begin, question })
 }
 
 /** Runs `work` in one transaction outside any academy: tenant tables look empty there. */

@@ -1,0 +1,3 @@
+import type { Linter } from 'eslint'
+
+export const boundaries: Linter.Config[]
