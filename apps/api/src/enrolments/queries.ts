@@ -102,18 +102,19 @@ export async function takeSeats(
   trx: AcademyTrx,
   { sessionIds, as }: { sessionIds: readonly string[]; as: 'held' | 'confirmed' },
 ): Promise<string[]> {
-  const isOne = sessionIds.length === 1
+  const [only] = sessionIds
+  const isOne = only !== undefined && sessionIds.length === 1
   const rows = await ask<{ id: string }>(trx, {
     name: `take-seats-${as}-${isOne ? 'in-one' : 'in-order'}`,
     text: isOne
       ? `UPDATE sessions SET ${as} = ${as} + 1
-         WHERE id = ANY($1) AND state = 'planned' AND held + confirmed < capacity RETURNING id`
+         WHERE id = $1 AND state = 'planned' AND held + confirmed < capacity RETURNING id`
       : `WITH in_order AS (
            SELECT id FROM sessions WHERE id = ANY($1) ORDER BY id FOR UPDATE)
          UPDATE sessions s SET ${as} = ${as} + 1 FROM in_order
          WHERE s.id = in_order.id AND s.state = 'planned' AND s.held + s.confirmed < s.capacity
          RETURNING s.id`,
-    values: [[...sessionIds]],
+    values: isOne ? [only] : [[...sessionIds]],
   })
   return rows.map(({ id }) => id)
 }
