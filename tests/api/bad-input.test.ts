@@ -111,17 +111,21 @@ describe('what is not fit is refused in words, and nothing is written', () => {
     expect(await fingerprint(world.database)).toEqual(before)
   })
 
-  it.each(['%0d%0aset-cookie:x=1', '%00', '%ff', '..%2f..%2fetc', 'x'.repeat(4_000)])(
-    'an address with %s in it',
-    async (part) => {
-      for (const key of Object.keys(ROUTES) as RouteKey[]) {
-        const { method, path } = ROUTES[key]
-        if (!path.includes(':')) continue
-        const reply = await ours.owner.person.send(method, path.replace(/:\w+/g, part), {})
-        expectRefusal(reply)
-      }
-    },
-  )
+  it.each([
+    { name: 'a line break', part: '%0d%0aset-cookie:x=1' },
+    { name: 'a NUL', part: '%00' },
+    { name: 'half a character', part: '%ff' },
+    { name: 'a way upwards', part: '..%2f..%2fetc' },
+    { name: 'four thousand letters', part: 'x'.repeat(4_000) },
+  ])('an address with $name in it', async ({ part }) => {
+    for (const key of Object.keys(ROUTES) as RouteKey[]) {
+      const { method, path } = ROUTES[key]
+      // Whether an address is free may be asked of any text: the answer is how it would be written.
+      if (!path.includes(':') || key === 'academies.check-slug') continue
+      const body = method === 'GET' ? undefined : {}
+      expectRefusal(await ours.owner.person.send(method, path.replace(/:\w+/g, part), body))
+    }
+  })
 })
 
 it('what is fit by its shape and absurd by its sense never breaks the product', async () => {

@@ -1,5 +1,5 @@
 import { spawn } from 'node:child_process'
-import { mkdtempSync, readFileSync, rmSync } from 'node:fs'
+import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
@@ -57,6 +57,20 @@ describe('a stand-in that was stopped', () => {
     const [before, after] = second.messages
     expect(after?.id).not.toBe(before?.id)
     await second.close()
+  })
+})
+
+describe('a stand-in whose kept state is an older one’s', () => {
+  it('starts with what it can read', async () => {
+    const stateFile = join(folder, 'older.json')
+    writeFileSync(stateFile, JSON.stringify({ messages: [], next: 40 }))
+    const mail = await startMailFake({ apiKey: 'SG.marram', stateFile })
+    expect(mail.messages).toEqual([])
+    await mail.close()
+    writeFileSync(stateFile, JSON.stringify({ accounts: {}, next: 40 }))
+    const { fake, stripe } = await startPayments({ stateFile })
+    expect(await connectAccount(stripe, fake)).toBeTruthy()
+    await fake.close()
   })
 })
 

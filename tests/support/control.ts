@@ -1,4 +1,4 @@
-/** A stand-in's control over HTTP, as another process uses it. @throws Error where it is refused. */
+/** A stand-in's control over HTTP, as another process uses it. @throws Error for a refusal. */
 export async function control(fake: { url: string }, name: string, body: object = {}) {
   const response = await fetch(`${fake.url}/_control/${name}`, {
     method: 'POST',

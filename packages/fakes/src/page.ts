@@ -9,10 +9,14 @@ main{max-width:44rem;margin:0 auto;padding:1.5rem 1rem 3rem}
 h1{font-size:1.5rem;line-height:1.25;margin:.5rem 0 1rem}
 label{display:block;font-weight:600;margin:.9rem 0 .25rem}
 input{width:100%;box-sizing:border-box;min-height:3rem;padding:.4rem .7rem;font:inherit}
-button,.button{display:inline-block;min-height:3rem;padding:.5rem 1.2rem;font:inherit;font-weight:600;cursor:pointer}
-table{border-collapse:collapse;width:100%}td,th{text-align:left;padding:.4rem .6rem .4rem 0;border-bottom:1px solid GrayText;vertical-align:top}
+button,.button{display:inline-block;min-height:3rem;padding:.5rem 1.2rem;font:inherit}
+button,.button{font-weight:600;cursor:pointer}
+table{border-collapse:collapse;width:100%}
+td,th{text-align:left;padding:.4rem .6rem .4rem 0;vertical-align:top}
+td,th{border-bottom:1px solid GrayText}
 .note{font-size:.9375rem}.wrong{font-weight:600;border-left:6px solid;padding-left:.75rem}
-iframe{width:100%;min-height:34rem;border:1px solid GrayText;background:#fff}pre{white-space:pre-wrap;overflow-wrap:anywhere}
+iframe{width:100%;min-height:34rem;border:1px solid GrayText;background:#fff}
+pre{white-space:pre-wrap;overflow-wrap:anywhere}
 </style></head><body><main>${body}</main></body></html>`
 }
 

@@ -8,7 +8,7 @@ import type { RequestHandler } from 'express'
 /** What a stand-in does not do, however it is configured. */
 export class UnsafeError extends Error {}
 
-/** The names of this machine to itself: localhost, 127.0.0.0/8 and ::1, with or without brackets. */
+/** This machine's names for itself: localhost, 127.0.0.0/8 and ::1, with or without brackets. */
 export function isLoopback(host: string): boolean {
   return host === 'localhost' || /^127(\.\d{1,3}){3}$/.test(host) || /^\[?::1\]?$/.test(host)
 }
@@ -35,7 +35,7 @@ const LIVE_KEYS: readonly RegExp[] = [
   /^GOCSPX-/,
 ]
 
-/** @throws UnsafeError for a key as the vendor gives them out for real use; the key is not repeated. */
+/** @throws UnsafeError for a key as vendors give them out for real use; it is not repeated. */
 export function requireNoLiveKey(key: string, what: string): void {
   if (LIVE_KEYS.some((shape) => shape.test(key))) {
     throw new UnsafeError(`The stand-in refuses a live ${what}.`)

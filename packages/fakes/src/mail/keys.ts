@@ -1,6 +1,6 @@
 import { createSign, generateKeyPairSync } from 'node:crypto'
 
-/** The pair that the event webhook is signed with: PEM to sign, base64 DER to check, as it is given out. */
+/** The pair that the event webhook is signed with: PEM to sign, base64 of DER to check. */
 export interface SigningKeys {
   privateKey: string
   publicKey: string

@@ -44,10 +44,11 @@ export async function startMailFake(options: MailFakeOptions): Promise<MailFake>
   requireNoLiveKey(options.apiKey, 'mail key')
   if (options.webhookUrl) requireLoopback(options.webhookUrl, 'a webhook')
   const now = options.now ?? (() => new Date())
-  // What was kept was written by this stand-in.
-  const { mailbox, keys } = (readKept(options.stateFile) as Kept | undefined) ?? {
+  // What was kept was written by this stand-in, or by an older one that kept less.
+  const { mailbox, keys }: Kept = {
     mailbox: { messages: [], suppressed: {}, accepted: 0 },
     keys: makeSigningKeys(),
+    ...(readKept(options.stateFile) as Partial<Kept> | undefined),
   }
   const kept = keepState(options.stateFile, () => ({ mailbox, keys }) satisfies Kept)
   const deliveries = makeDeliveries({

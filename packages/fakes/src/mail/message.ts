@@ -20,7 +20,7 @@ interface Address {
   name?: unknown
 }
 
-/** The body of a request to send, as far as it is read; nothing in it is certain before it is checked. */
+/** The body of a request to send, as far as it is read; nothing in it is sure until checked. */
 export interface SendBody {
   personalizations?: { to?: Address[]; cc?: Address[]; bcc?: Address[]; subject?: unknown }[]
   from?: Address

@@ -1,4 +1,4 @@
-/** What the payments stand-in remembers. Times are Unix seconds, amounts the provider's minor units. */
+/** What the payments stand-in remembers. Times are Unix seconds, amounts minor units. */
 export interface FakeAccount {
   id: string
   email: string

@@ -1,5 +1,5 @@
 import { TextDecoder } from 'node:util'
-import express, { type RequestHandler } from 'express'
+import express, { type Request, type RequestHandler } from 'express'
 import { Problem } from '../errors'
 
 const MAX_BYTES = 64 * 1024
@@ -11,7 +11,7 @@ export const readJsonBody: RequestHandler[] = [
   (request, _response, next) => {
     const hasBody = request.headers['content-length'] ?? request.headers['transfer-encoding']
     const isEmpty = hasBody === undefined || hasBody === '0'
-    if (!isEmpty && !request.is('application/json')) {
+    if (!isEmpty && !(request.is('application/json') && isUtf8(request))) {
       throw new Problem('wrong-content-type', 'Please send JSON.')
     }
     next()
@@ -23,6 +23,12 @@ export const readJsonBody: RequestHandler[] = [
     verify: (_request, _response, bytes) => checkBytes(bytes),
   }),
 ]
+
+/** The checks below read UTF-8; a body in another alphabet would pass them unread. */
+function isUtf8({ headers }: Request): boolean {
+  const charset = /;\s*charset="?([^";\s]+)/i.exec(headers['content-type'] ?? '')?.[1]
+  return charset === undefined || charset.toLowerCase() === 'utf-8'
+}
 
 /** Throws a Problem for a body that must not reach the parser. */
 export function checkBytes(bytes: Buffer): void {

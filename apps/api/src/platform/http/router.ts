@@ -17,6 +17,7 @@ import { Download, type Handlers, type RequestContext } from './context'
 import { fieldSentences } from './field-sentences'
 import { signInAs, signOut } from './sign-in-session'
 import { tokenOf } from './request-token'
+import { isSlug } from '../tenancy/slug'
 
 type Schemas = Partial<Record<'params' | 'query' | 'body', ZodType>>
 
@@ -113,7 +114,9 @@ async function makeContext(
 
 function slugOf(request: Request): string | null {
   const slug = request.params['academy']
-  return typeof slug === 'string' ? slug : null
+  if (typeof slug !== 'string') return null
+  if (!isSlug(slug)) throw notFound('academy')
+  return slug
 }
 
 /** Somebody with no staff role here learns nothing, not even that the page exists. */

@@ -56,7 +56,7 @@ export function checkKnown(form: Form, known: readonly string[]): void {
   })
 }
 
-/** A record of the account that asks. @throws ProviderError where there is none, or not of theirs. */
+/** A record of the account that asks. @throws ProviderError where there is none of theirs. */
 export function own<T extends { account: string | null }>(
   { account }: Asked,
   id: string,

@@ -35,14 +35,18 @@ export function payPage(checkout: FakeCheckout, refusal?: string): string {
     `<h1>${escapeHtml(checkout.title)}: ${amountText(checkout)}</h1>${NOTE}
      ${refusal ? `<p class="wrong" role="alert">${escapeHtml(refusal)}</p>` : ''}
      <form method="post">
-     <label for="card">Card number</label>
-     <input id="card" name="card" inputmode="numeric" autocomplete="off" required value="${CARDS.good}">
-     <label for="expiry">Expiry</label><input id="expiry" name="expiry" autocomplete="off" required value="12 / 34">
-     <label for="cvc">CVC</label><input id="cvc" name="cvc" autocomplete="off" required value="123">
-     <label for="name">Name on card</label><input id="name" name="name" autocomplete="off" value="Test Card">
+     ${field('card', 'Card number', CARDS.good, 'inputmode="numeric"')}
+     ${field('expiry', 'Expiry', '12 / 34')}
+     ${field('cvc', 'CVC', '123')}
+     ${field('name', 'Name on card', 'Test Card')}
      <p><button type="submit">Pay ${amountText(checkout)}</button> ${back}</p></form>
      <h2>Test cards</h2><table>${cards.join('')}</table>`,
   )
+}
+
+function field(name: string, label: string, value: string, attributes = ''): string {
+  return `<label for="${name}">${label}</label>
+    <input id="${name}" name="${name}" autocomplete="off" required value="${value}" ${attributes}>`
 }
 
 /** The code and the amount, with as many figures after the point as the currency has. */
