@@ -95,7 +95,8 @@ const INSERT_ENROLMENT = `
 
 /**
  * Takes one place in each session, where there is one: the whole guard against overselling is this
- * condition. Rows are locked in id order, so that two runs cannot wait for each other.
+ * condition. Rows are locked in id order, so that two runs cannot wait for each other; and not
+ * against those who merely refer to them, since everybody who comes here has just written places.
  * Resolves to the sessions that had a place.
  */
 export async function takeSeats(
@@ -110,7 +111,7 @@ export async function takeSeats(
       ? `UPDATE sessions SET ${as} = ${as} + 1
          WHERE id = $1 AND state = 'planned' AND held + confirmed < capacity RETURNING id`
       : `WITH in_order AS (
-           SELECT id FROM sessions WHERE id = ANY($1) ORDER BY id FOR UPDATE)
+           SELECT id FROM sessions WHERE id = ANY($1) ORDER BY id FOR NO KEY UPDATE)
          UPDATE sessions s SET ${as} = ${as} + 1 FROM in_order
          WHERE s.id = in_order.id AND s.state = 'planned' AND s.held + s.confirmed < s.capacity
          RETURNING s.id`,
@@ -126,7 +127,7 @@ export async function returnSeats(
 ): Promise<void> {
   if (sessionIds.length === 0) return
   await trx.raw(
-    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR NO KEY UPDATE)
      UPDATE sessions s SET ${from} = ${from} - 1 FROM in_order WHERE s.id = in_order.id`,
     [[...sessionIds]],
   )
@@ -135,7 +136,7 @@ export async function returnSeats(
 /** Turns held seats into confirmed ones. */
 export async function confirmSeats(trx: AcademyTrx, sessionIds: readonly string[]): Promise<void> {
   await trx.raw(
-    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR NO KEY UPDATE)
      UPDATE sessions s SET held = held - 1, confirmed = confirmed + 1
      FROM in_order WHERE s.id = in_order.id`,
     [[...sessionIds]],
