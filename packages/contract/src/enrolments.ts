@@ -46,6 +46,8 @@ export const enrolmentView = z.object({
   payMode: z.enum(['card', 'desk', 'free']),
   /** How payment stands: nothing yet, begun, said no to, in, or promised at the desk. */
   payment: z.enum(['none', 'open', 'declined', 'paid', 'at-desk']),
+  /** What is still to be paid at the desk. */
+  owedMinor: amountMinor,
   places: z.array(placeView),
 })
 

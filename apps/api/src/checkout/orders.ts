@@ -24,11 +24,11 @@ import {
   insertOrder,
   insertPayment,
   listEnrolmentPlaces,
-  listPaymentsOf,
   lockLiveOrder,
   lockOrder,
   updateOrder,
 } from './queries'
+import { readOwedAtDesk } from './view-queries'
 import { settlePaidCheckout } from './settle'
 
 export interface Own {
@@ -189,7 +189,10 @@ export async function promiseAtDesk(
   await oweForCalledOff(services, trx, { academy, enrolmentId })
 }
 
-/** Staff take what is owed in cash. Throws `invalid-fields` for more than is owed. */
+/**
+ * Staff take what is owed in cash: all of it, since a place is either paid or not when its money goes
+ * back. Throws `invalid-fields` for another amount.
+ */
 export async function takeCash(
   services: Services,
   given: { academyId: string; enrolmentId: string; amountMinor: number; takenBy: string },
@@ -200,12 +203,10 @@ export async function takeCash(
     if (order?.method !== 'desk') {
       throw new Problem('already-decided', 'Nothing is owed at the desk for this place.')
     }
-    const paid = await listPaymentsOf(trx, [order.id])
-    const paidMinor = paid.reduce((sum, payment) => sum + payment.amountMinor, 0)
-    const owedMinor = order.netMinor + order.taxMinor - paidMinor
-    if (given.amountMinor === 0 || given.amountMinor > owedMinor) {
+    const owedMinor = await readOwedAtDesk(trx, order.id)
+    if (owedMinor === 0 || given.amountMinor !== owedMinor) {
       const sentence =
-        owedMinor === 0 ? 'This place is paid already.' : 'That is not an amount that is owed.'
+        owedMinor === 0 ? 'Nothing is owed for this place.' : 'That is not the amount that is owed.'
       throw new Problem('invalid-fields', sentence, { amountMinor: sentence })
     }
     const now = services.clock.now()

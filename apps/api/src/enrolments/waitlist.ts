@@ -8,7 +8,7 @@ import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { takePlaces } from './hold'
 import type { WaitlistEntry } from './models'
-import { checkFit, findOnSale, type WantedPlaces } from './on-sale'
+import { checkFit, findOnSale, type OnSale, type WantedPlaces } from './on-sale'
 import {
   findActiveEnrolment,
   findWaitlistEntry,
@@ -106,7 +106,8 @@ async function offer(
     await updateWaitlistEntry(trx, entry.id, { state: 'left' })
     return false
   }
-  const onSale = await findOnSale(trx, { clinicId, sessionId: sessionId ?? undefined }, now)
+  const onSale = await findIfOnSale(trx, { clinicId, sessionId: sessionId ?? undefined }, now)
+  if (!onSale) return false
   const [first] = onSale.taken
   invariant(first, 'what is on sale has a first session')
   const { offerHours } = onSale.academy
@@ -122,6 +123,23 @@ async function offer(
   await updateWaitlistEntry(trx, entry.id, { state: isFree ? 'taken' : 'offered', enrolmentId })
   if (!isFree) await services.outbox.emit(trx, 'enrolment.offered', { academyId, enrolmentId })
   return true
+}
+
+/**
+ * Nothing is offered of a clinic that was taken off the page, or is sold another way by now; whoever
+ * gives a place up there must be able to all the same.
+ */
+async function findIfOnSale(
+  trx: AcademyTrx,
+  wanted: WantedPlaces,
+  now: Date,
+): Promise<OnSale | null> {
+  try {
+    return await findOnSale(trx, wanted, now)
+  } catch (error) {
+    if (error instanceof Problem && error.code === 'not-on-sale') return null
+    throw error
+  }
 }
 
 export function viewEntry(row: WaitlistRow): WaitlistView {

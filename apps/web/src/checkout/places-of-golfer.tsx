@@ -38,7 +38,7 @@ function PlaceLine(props: { academy: string; enrolment: Enrolment; format: Forma
   const [isAsking, setIsAsking] = useState(false)
   const params = { enrolmentId: enrolment.id }
   const cash = useAcademyMutation(academy, (_: void) =>
-    call('checkout.take-cash', { academy, params, body: { amountMinor: enrolment.totalMinor } }),
+    call('checkout.take-cash', { academy, params, body: { amountMinor: enrolment.owedMinor } }),
   )
   const [first] = enrolment.places
   return (
@@ -54,13 +54,13 @@ function PlaceLine(props: { academy: string; enrolment: Enrolment; format: Forma
       </div>
       {enrolment.state === 'confirmed' && (
         <div className="actions">
-          {enrolment.payment === 'at-desk' && (
+          {enrolment.payment === 'at-desk' && enrolment.owedMinor > 0 && (
             <Button
               kind="go"
               waiting={cash.isPending && 'Taking…'}
               onClick={() => cash.mutate(undefined, { onSuccess: () => toast('Taken in cash.') })}
             >
-              Take {format.money(enrolment.totalMinor)} in cash
+              Take {format.money(enrolment.owedMinor)} in cash
             </Button>
           )}
           <Button kind="quiet" onClick={() => setIsAsking(!isAsking)}>
