@@ -24,9 +24,9 @@ import {
   insertOrder,
   insertPayment,
   listEnrolmentPlaces,
-  listPaymentsOf,
   lockLiveOrder,
   lockOrder,
+  readOwedAtDesk,
   updateOrder,
 } from './queries'
 import { settlePaidCheckout } from './settle'
@@ -200,9 +200,7 @@ export async function takeCash(
     if (order?.method !== 'desk') {
       throw new Problem('already-decided', 'Nothing is owed at the desk for this place.')
     }
-    const paid = await listPaymentsOf(trx, [order.id])
-    const paidMinor = paid.reduce((sum, payment) => sum + payment.amountMinor, 0)
-    const owedMinor = order.netMinor + order.taxMinor - paidMinor
+    const owedMinor = await readOwedAtDesk(trx, given.enrolmentId)
     if (given.amountMinor === 0 || given.amountMinor > owedMinor) {
       const sentence =
         owedMinor === 0 ? 'This place is paid already.' : 'That is not an amount that is owed.'

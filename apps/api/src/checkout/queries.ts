@@ -176,6 +176,29 @@ export async function listEnrolmentPlaces(
   return rows
 }
 
+/**
+ * What is still to be paid at the desk for an enrolment: what was promised, less what was taken and
+ * what is owed no longer. The ledger knows it from the transfers that speak of the enrolment.
+ */
+export async function readOwedAtDesk(trx: AcademyTrx, enrolmentId: string): Promise<number> {
+  const { rows } = await trx.raw<{ rows: { sum: number }[] }>(
+    `WITH sources AS (
+       SELECT academy_id, 'order' AS type, id FROM orders WHERE enrolment_id = :enrolmentId
+       UNION ALL SELECT p.academy_id, 'payment', p.id FROM payments p
+         JOIN orders o ON o.academy_id = p.academy_id AND o.id = p.order_id
+         WHERE o.enrolment_id = :enrolmentId
+       UNION ALL SELECT academy_id, 'place', id FROM places WHERE enrolment_id = :enrolmentId
+       UNION ALL SELECT academy_id, 'enrolment', id FROM enrolments WHERE id = :enrolmentId)
+     SELECT coalesce(sum(e.amount_minor), 0)::bigint AS sum FROM sources s
+     JOIN transfers t ON t.academy_id = s.academy_id AND t.source_type = s.type
+       AND t.source_id = s.id
+     JOIN entries e ON e.academy_id = t.academy_id AND e.transfer_id = t.id
+     WHERE e.account_code = 'receivable'`,
+    { enrolmentId },
+  )
+  return rows[0]?.sum ?? 0
+}
+
 /** What of a session is still deferred, by the day it is deferred to. */
 export async function listDeferredDays(
   trx: AcademyTrx,
