@@ -130,6 +130,9 @@ export async function chooseForOwedPlace(
     if (owed.choice) {
       throw new Problem('already-decided', `This was settled as ${owed.choice} already.`)
     }
+    if (services.clock.now() > owed.chooseBy) {
+      throw new Problem('already-decided', 'The seven days to choose are over.')
+    }
     await settle(services, trx, { place, owed, choice, chosenBy: 'golfer' })
   })
 }

@@ -178,24 +178,26 @@ export async function listEnrolmentPlaces(
 
 /**
  * What is still to be paid at the desk for an enrolment: what was promised, less what was taken and
- * what is owed no longer. The ledger knows it from the transfers that speak of the enrolment.
+ * what is owed no longer. The ledger knows it from the transfers that speak of the enrolment, whose
+ * id is given as SQL.
  */
+export const OWED_AT_DESK = (enrolmentId: string): string => `
+  WITH sources AS (
+    SELECT academy_id, 'order' AS type, id FROM orders WHERE enrolment_id = ${enrolmentId}
+    UNION ALL SELECT p.academy_id, 'payment', p.id FROM payments p
+      JOIN orders o ON o.academy_id = p.academy_id AND o.id = p.order_id
+      WHERE o.enrolment_id = ${enrolmentId}
+    UNION ALL SELECT academy_id, 'place', id FROM places WHERE enrolment_id = ${enrolmentId}
+    UNION ALL SELECT academy_id, 'enrolment', id FROM enrolments WHERE id = ${enrolmentId})
+  SELECT coalesce(sum(l.amount_minor), 0)::bigint AS sum FROM sources s
+  JOIN transfers t ON t.academy_id = s.academy_id AND t.source_type = s.type
+    AND t.source_id = s.id
+  JOIN entries l ON l.academy_id = t.academy_id AND l.transfer_id = t.id
+  WHERE l.account_code = 'receivable'`
+
 export async function readOwedAtDesk(trx: AcademyTrx, enrolmentId: string): Promise<number> {
-  const { rows } = await trx.raw<{ rows: { sum: number }[] }>(
-    `WITH sources AS (
-       SELECT academy_id, 'order' AS type, id FROM orders WHERE enrolment_id = :enrolmentId
-       UNION ALL SELECT p.academy_id, 'payment', p.id FROM payments p
-         JOIN orders o ON o.academy_id = p.academy_id AND o.id = p.order_id
-         WHERE o.enrolment_id = :enrolmentId
-       UNION ALL SELECT academy_id, 'place', id FROM places WHERE enrolment_id = :enrolmentId
-       UNION ALL SELECT academy_id, 'enrolment', id FROM enrolments WHERE id = :enrolmentId)
-     SELECT coalesce(sum(e.amount_minor), 0)::bigint AS sum FROM sources s
-     JOIN transfers t ON t.academy_id = s.academy_id AND t.source_type = s.type
-       AND t.source_id = s.id
-     JOIN entries e ON e.academy_id = t.academy_id AND e.transfer_id = t.id
-     WHERE e.account_code = 'receivable'`,
-    { enrolmentId },
-  )
+  const query = OWED_AT_DESK(':enrolmentId')
+  const { rows } = await trx.raw<{ rows: { sum: number }[] }>(query, { enrolmentId })
   return rows[0]?.sum ?? 0
 }
 

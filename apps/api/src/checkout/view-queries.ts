@@ -1,6 +1,7 @@
 import type { Answer } from '@marram/contract'
 import { ask } from '../platform/tenancy/ask'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
+import { OWED_AT_DESK } from './queries'
 
 type EnrolmentView = Answer<'enrolments.read'>
 
@@ -10,6 +11,8 @@ export type WantedViews =
 
 export interface OrderInView {
   state: 'open' | 'paid' | 'void'
+  method: 'card' | 'desk'
+  owedAtDeskMinor: number
   lastRefusal: string | null
   totalMinor: number
   paidMinor: number
@@ -63,7 +66,9 @@ const PLACES = `
 
 const ORDERS = `
   SELECT coalesce(json_agg(json_build_object(
-    'state', r.state, 'lastRefusal', r.last_refusal, 'totalMinor', r.net_minor + r.tax_minor,
+    'state', r.state, 'method', r.method,
+    'owedAtDeskMinor', CASE WHEN r.method = 'desk' THEN (${OWED_AT_DESK('e.id')}) ELSE 0 END,
+    'lastRefusal', r.last_refusal, 'totalMinor', r.net_minor + r.tax_minor,
     'paidMinor', (SELECT coalesce(sum(y.amount_minor), 0) FROM payments y
       WHERE y.academy_id = r.academy_id AND y.order_id = r.id)) ORDER BY r.created_at), '[]')
   FROM orders r WHERE r.academy_id = e.academy_id AND r.enrolment_id = e.id`

@@ -13,8 +13,11 @@ export const showEnrolments: ShowEnrolments = async (trx, by) => {
 function paymentOf(orders: readonly OrderInView[]): Payment {
   const order = orders.find(({ state }) => state !== 'void') ?? orders.at(-1)
   if (!order) return 'none'
+  if (order.method === 'desk') {
+    if (order.owedAtDeskMinor > 0) return 'at-desk'
+    return order.paidMinor > 0 ? 'paid' : 'none'
+  }
   if (order.paidMinor > 0 && order.paidMinor >= order.totalMinor) return 'paid'
-  if (order.state === 'paid') return 'at-desk'
   if (order.lastRefusal) return 'declined'
   return order.state === 'open' ? 'open' : 'none'
 }
