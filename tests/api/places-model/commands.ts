@@ -1,11 +1,12 @@
 import type { RouteKey } from '@marram/contract'
-import fc from 'fast-check'
+import type fc from 'fast-check'
 import { expect } from 'vitest'
 import type { EnrolmentView, SignedUp } from '../../support/builders'
-import type { Reply } from '../../support/person'
+import type { Person, Reply } from '../../support/person'
 import { checkLaws } from './laws'
 import type { Remembered } from './remembered'
 import type { Scene } from './scene'
+import { takeStock } from './stock'
 
 export type Step = fc.AsyncCommand<Remembered, Scene>
 
@@ -27,7 +28,7 @@ export function step(
 }
 
 /** Whether it went well; otherwise it was refused for one of the reasons there are. */
-export function wentWell<K extends RouteKey>(key: K, reply: Reply<unknown>): boolean {
+export function wentWell(key: RouteKey, reply: Reply<unknown>): boolean {
   if (reply.status < 400) return true
   const code = reply.problem?.code ?? 'unexpected'
   expect(EXPECTED_REFUSALS, `${key}: ${reply.text}`).toContain(code)
@@ -50,15 +51,18 @@ export async function enrolmentsOf(scene: Scene, golfer: SignedUp): Promise<Enro
   return reply.status < 400 ? reply.answer.enrolments : []
 }
 
-/** One of the golfer's enrolments in a state, or none. */
+/** One of the enrolments in a state, with whoever took it; null where there is none. */
 export async function pickEnrolment(
   scene: Scene,
-  { who, state, pick }: { who: number; state: EnrolmentView['state']; pick: number },
-): Promise<{ golfer: SignedUp; enrolment: EnrolmentView } | null> {
-  const golfer = golferOf(scene, who)
-  const found = (await enrolmentsOf(scene, golfer)).filter((one) => one.state === state)
-  const enrolment = found[pick % Math.max(1, found.length)]
-  return enrolment ? { golfer, enrolment } : null
+  { state, pick }: { state: EnrolmentView['state']; pick: number },
+): Promise<{ person: Person; enrolment: EnrolmentView } | null> {
+  const found = (await takeStock(scene)).enrolments.filter((one) => one.state === state)
+  const { id: enrolmentId, takenBy } = found[pick % Math.max(1, found.length)] ?? {}
+  const golfer = scene.golfers.find(({ account }) => account.id === takenBy)
+  if (!enrolmentId || !golfer) return null
+  const { person } = golfer
+  const params = { ...scene.params, enrolmentId }
+  return { person, enrolment: await person.must('enrolments.read', { params }) }
 }
 
 export function golferOf({ golfers }: Scene, who: number): SignedUp {

@@ -1,12 +1,7 @@
 import { expect } from 'vitest'
-import { golferOf, pickEnrolment, step, wentWell, type Step } from './commands'
+import { pickEnrolment, step, wentWell, type Step } from './commands'
 import type { Scene } from './scene'
 import { takeStock } from './stock'
-
-interface Pick {
-  who: number
-  pick: number
-}
 
 export const GOOD_CARD = '4242424242424242'
 export const DECLINED_CARD = '4000000000000002'
@@ -14,24 +9,32 @@ export const DECLINED_CARD = '4000000000000002'
 /** How the provider's word of a payment comes: at once, twice, or when it is let through. */
 export type Delivery = 'now' | 'twice' | 'late'
 
-/** Opens the provider's page; when its answer is lost the page is there, and nobody knows of it. */
-export const openPage = ({ who, pick, isLost }: Pick & { isLost: boolean }): Step =>
-  step(`golfer ${who} opens the page${isLost ? ', whose address is lost' : ''}`, async (scene) => {
-    const found = await pickEnrolment(scene, { who, state: 'held', pick })
-    if (!found) return
-    const { payments } = scene.world
-    const before = Object.keys(payments.state.checkouts).length
-    if (isLost) payments.loseNextAnswers(1)
-    const params = { ...scene.params, enrolmentId: found.enrolment.id }
-    const reply = await found.golfer.person.call('checkout.start', { params })
-    const isMade = Object.keys(payments.state.checkouts).length > before
-    if (isLost && isMade) return expect(reply.problem?.code).toBe('provider-unavailable')
-    // Nothing was asked of the provider, so that nothing was lost.
-    if (isLost) payments.loseNextAnswers(-1)
-    if (!wentWell('checkout.start', reply)) return
-    const id = new URL(reply.answer.url).pathname.split('/').at(-1) ?? ''
-    expect(payments.state.checkouts[id]?.status, 'the page can be paid on').toBe('open')
-  })
+/**
+ * Opens the provider's page. It is forgotten when the process stops between the provider's answer
+ * and its own writing: the page is there, and can be paid on, but nobody here knows of it.
+ */
+export const openPage = ({ pick, isForgotten }: { pick: number; isForgotten: boolean }): Step =>
+  step(
+    `the page of hold ${pick} is opened${isForgotten ? ' and forgotten' : ''}`,
+    async (scene) => {
+      const found = await pickEnrolment(scene, { state: 'held', pick })
+      if (!found) return
+      const enrolmentId = found.enrolment.id
+      const params = { ...scene.params, enrolmentId }
+      const reply = await found.person.call('checkout.start', { params })
+      if (!wentWell('checkout.start', reply)) return
+      const page = scene.world.payments.state.checkouts[pageIn(reply.answer)]
+      expect(page?.status, 'the page can be paid on').toBe('open')
+      if (!isForgotten) return
+      const { academyId } = scene
+      await scene
+        .db('orders')
+        .where({ academyId, enrolmentId, state: 'open' })
+        .update({ checkoutId: null, checkoutUrl: null })
+    },
+  )
+
+const pageIn = ({ url }: { url: string }): string => new URL(url).pathname.split('/').at(-1) ?? ''
 
 /** Somebody pays, or tries to, on any page that is open: the newest, a forgotten one, a lost one. */
 export const payPage = ({
@@ -69,13 +72,13 @@ export const deliver = ({ isReversed }: { isReversed: boolean }): Step =>
     await world.drain()
   })
 
-export const atDesk = ({ who, pick }: Pick): Step =>
-  step(`golfer ${who} promises to pay at the desk`, async (scene, { deskMinor }) => {
-    const found = await pickEnrolment(scene, { who, state: 'held', pick })
+export const atDesk = ({ pick }: { pick: number }): Step =>
+  step(`hold ${pick} will be paid at the desk`, async (scene, { deskMinor }) => {
+    const found = await pickEnrolment(scene, { state: 'held', pick })
     if (!found) return
     const enrolmentId = found.enrolment.id
     const params = { ...scene.params, enrolmentId }
-    const reply = await found.golfer.person.call('checkout.at-desk', { params })
+    const reply = await found.person.call('checkout.at-desk', { params })
     if (!wentWell('checkout.at-desk', reply)) return
     // What was called off while it was held is not owed.
     const { places } = await takeStock(scene)
@@ -85,7 +88,7 @@ export const atDesk = ({ who, pick }: Pick): Step =>
   })
 
 /** Cash over the desk: all that is owed, a part of it, or a little more than that. */
-export const takeCash = ({ pick, share }: { pick: number; share: 0.5 | 1 | 1.5 }): Step =>
+export const takeCash = ({ pick, share }: { pick: number; share: number }): Step =>
   step(`${share} of what is owed is paid in cash`, async (scene, { deskMinor }) => {
     const owing = [...deskMinor]
     const [enrolmentId, owedMinor] = owing[pick % Math.max(1, owing.length)] ?? ['', 0]
@@ -105,13 +108,12 @@ export const passTime = ({ minutes }: { minutes: number }): Step =>
     await world.sweep()
   })
 
-export const payNow = ({ who, pick }: Pick): Step =>
-  step(`golfer ${who} pays`, async (scene) => {
-    const found = await pickEnrolment(scene, { who, state: 'held', pick })
+export const payNow = ({ pick }: { pick: number }): Step =>
+  step(`hold ${pick} is paid`, async (scene) => {
+    const found = await pickEnrolment(scene, { state: 'held', pick })
     if (!found) return
     const params = { ...scene.params, enrolmentId: found.enrolment.id }
-    const reply = await golferOf(scene, who).person.call('checkout.start', { params })
+    const reply = await found.person.call('checkout.start', { params })
     if (!wentWell('checkout.start', reply)) return
-    const id = new URL(reply.answer.url).pathname.split('/').at(-1) ?? ''
-    expect(scene.world.payments.pay(id, GOOD_CARD)).toBeNull()
+    expect(scene.world.payments.pay(pageIn(reply.answer), GOOD_CARD)).toBeNull()
   })

@@ -11,11 +11,6 @@ import { backOf, forgive } from './remembered'
 import { takeStock } from './stock'
 import { expect } from 'vitest'
 
-interface Pick {
-  who: number
-  pick: number
-}
-
 /** Takes a place in a session, or with -1 in the whole run. */
 export const hold = ({ who, at }: { who: number; at: number }): Step =>
   step(`golfer ${who} takes ${at < 0 ? 'the run' : `session ${at}`}`, async (scene) => {
@@ -40,19 +35,18 @@ export const wait = ({ who, at }: { who: number; at: number }): Step =>
     wentWell('waitlist.join', await golfer.person.call('waitlist.join', { params, body }))
   })
 
-export const letGo = ({ who, pick }: Pick): Step =>
-  step(`golfer ${who} lets a hold go`, async (scene) => {
-    const found = await pickEnrolment(scene, { who, state: 'held', pick })
+export const letGo = ({ pick }: { pick: number }): Step =>
+  step(`hold ${pick} is let go`, async (scene) => {
+    const found = await pickEnrolment(scene, { state: 'held', pick })
     if (!found) return
     const params = { ...scene.params, enrolmentId: found.enrolment.id }
-    const reply = await found.golfer.person.call('enrolments.release', { params })
-    wentWell('enrolments.release', reply)
+    wentWell('enrolments.release', await found.person.call('enrolments.release', { params }))
   })
 
 /** Gives a confirmed place up, for what the policy is worked out to give back. */
-export const giveUp = ({ who, pick, isByStaff }: Pick & { isByStaff: boolean }): Step =>
-  step(`${isByStaff ? 'the desk for ' : ''}golfer ${who} gives up`, async (scene, remembered) => {
-    const found = await pickEnrolment(scene, { who, state: 'confirmed', pick })
+export const giveUp = ({ pick, isByStaff }: { pick: number; isByStaff: boolean }): Step =>
+  step(`place ${pick} is given up${isByStaff ? ' by the desk' : ''}`, async (scene, remembered) => {
+    const found = await pickEnrolment(scene, { state: 'confirmed', pick })
     if (!found) return
     const { id: enrolmentId, places } = found.enrolment
     const now = scene.world.clock.now().getTime()
@@ -64,7 +58,7 @@ export const giveUp = ({ who, pick, isByStaff }: Pick & { isByStaff: boolean }):
         return { grossMinor: (row?.netMinor ?? 0) + (row?.taxMinor ?? 0), startsAt }
       })
     const params = { ...scene.params, enrolmentId }
-    const person = isByStaff ? scene.owner.person : found.golfer.person
+    const person = isByStaff ? scene.owner.person : found.person
     const quote = isByStaff ? 'checkout.quote-giving-up-for' : 'checkout.quote-giving-up'
     const reply = await person.call(quote, { params })
     if (!wentWell(quote, reply)) return
@@ -93,12 +87,13 @@ export const callOff = ({ at }: { at: number }): Step =>
     }
   })
 
-export const choose = ({ who, choice }: { who: number; choice: 'credit' | 'money' }): Step =>
-  step(`golfer ${who} chooses ${choice}`, async (scene) => {
-    const golfer = golferOf(scene, who)
-    const places = (await enrolmentsOf(scene, golfer)).flatMap((enrolment) => enrolment.places)
-    const owed = places.find((place) => place.owed && !place.owed.choice)
-    if (!owed) return
-    const params = { ...scene.params, placeId: owed.id }
+export const choose = ({ choice }: { choice: 'credit' | 'money' }): Step =>
+  step(`what is owed is chosen as ${choice}`, async (scene) => {
+    const { owed, places, enrolments } = await takeStock(scene)
+    const place = places.find(({ id }) => owed.some(({ placeId }) => placeId === id))
+    const enrolment = enrolments.find(({ id }) => id === place?.enrolmentId)
+    const golfer = scene.golfers.find(({ account }) => account.id === enrolment?.takenBy)
+    if (!place || !golfer) return
+    const params = { ...scene.params, placeId: place.id }
     await golfer.person.must('checkout.choose', { params, body: { choice } })
   })

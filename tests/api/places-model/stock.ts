@@ -13,7 +13,7 @@ interface PlaceInStock {
 /** Everything in the books and the timetable of an academy that the laws speak of. */
 export interface Stock {
   sessions: { id: string; state: string; capacity: number; held: number; confirmed: number }[]
-  enrolments: { id: string; state: 'held' | 'confirmed' | 'cancelled' }[]
+  enrolments: { id: string; state: 'held' | 'confirmed' | 'cancelled'; takenBy: string }[]
   places: PlaceInStock[]
   payments: { id: string; enrolmentId: string; method: string; amountMinor: number }[]
   refunds: {
@@ -53,7 +53,8 @@ const list = (query: string) => `SELECT coalesce(json_agg(q), '[]') FROM (${quer
 const PARTS: Record<keyof Stock, string> = {
   sessions: list(`SELECT id, state, capacity, held, confirmed FROM sessions
     WHERE academy_id = a.id ORDER BY number`),
-  enrolments: list('SELECT id, state FROM enrolments WHERE academy_id = a.id ORDER BY id'),
+  enrolments: list(`SELECT id, state, taken_by AS "takenBy" FROM enrolments
+    WHERE academy_id = a.id ORDER BY id`),
   places: list(`SELECT id, enrolment_id AS "enrolmentId", session_id AS "sessionId",
       golfer_id AS "golferId", state, net_minor AS "netMinor", tax_minor AS "taxMinor"
     FROM places WHERE academy_id = a.id ORDER BY id`),

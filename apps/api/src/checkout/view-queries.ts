@@ -10,6 +10,8 @@ export type WantedViews =
 
 export interface OrderInView {
   state: 'open' | 'paid' | 'void'
+  method: 'card' | 'desk'
+  owedAtDeskMinor: number
   lastRefusal: string | null
   totalMinor: number
   paidMinor: number
