@@ -1,222 +1,217 @@
-import { beforeEach, expect, it } from 'vitest'
+import { describe, expect, it } from 'vitest'
+import { readBooks } from '../support/books'
 import {
-  joinStaff,
   openAcademy,
   pay,
-  publishClinic,
   signUp,
   takePlace,
   type EnrolmentView,
   type OpenAcademy,
   type SignedUp,
 } from '../support/builders'
-import { tellAgain } from '../support/outbox'
 import { useWorld } from '../support/use-world'
-import { WORLD_BEGINS } from '../support/world'
 
 const world = await useWorld()
-beforeEach(() => world.clock.moveTo(WORLD_BEGINS))
 
-const SHARE_MINOR = 3_000
-const SEVEN_DAYS_MS = 7 * 86_400_000
+const DAY_MS = 24 * 60 * 60_000
+/** The second of eight shares of 240.00, of which 27.53 are net and 2.47 tax. */
+const OWED = 3_000
 
 interface Evening {
   academy: OpenAcademy
   golfer: SignedUp
   enrolment: EnrolmentView
   sessionId: string
+  params: { academy: string; enrolmentId: string }
 }
 
-/** A golfer has paid for a run of eight, and the third evening is called off for lightning. */
-async function callOffEvening(sold: 'run' | 'session' = 'run'): Promise<Evening> {
-  const academy = await openAcademy(world, { clinic: { startsOnLocal: '2031-03-11' } })
-  const golfer = await signUp(world)
-  const { clinic } = academy
-  const sessionId = clinic.sessions[2]?.id ?? ''
-  const wanted = sold === 'run' ? { clinic } : { clinic, sessionId }
-  const held = await takePlace(golfer, academy, wanted)
-  const enrolment = await pay(world, golfer, { academy, enrolment: held })
-  await callOff(academy, sessionId)
-  return { academy, golfer, enrolment, sessionId }
-}
-
-async function callOff(academy: OpenAcademy, sessionId: string): Promise<void> {
-  const params = { academy: academy.slug, sessionId }
-  const body = { reason: 'Lightning' }
-  await academy.owner.person.must('sessions.call-off', { params, body })
-  await world.drain()
-}
-
-const read = ({ academy, golfer, enrolment }: Evening): Promise<EnrolmentView> =>
-  golfer.person.must('enrolments.read', {
-    params: { academy: academy.slug, enrolmentId: enrolment.id },
-  })
-
-async function owedPlace(evening: Evening) {
-  const { places } = await read(evening)
-  const place = places.find(({ sessionId }) => sessionId === evening.sessionId)
-  if (!place?.owed) throw new Error('a called-off session is owed')
-  return { ...place, owed: place.owed }
-}
-
-async function choose(evening: Evening, choice: 'credit' | 'money') {
-  const { academy, golfer } = evening
-  const params = { academy: academy.slug, placeId: (await owedPlace(evening)).id }
-  const reply = await golfer.person.call('checkout.choose', { params, body: { choice } })
-  await world.drain()
-  return reply
-}
-
-const moneyCard = ({ academy }: Evening) =>
-  academy.owner.person.must('ledger.card', { params: { academy: academy.slug, year: '2031' } })
-
-const creditOf = async ({ academy, golfer }: Evening) =>
-  (await golfer.person.must('enrolments.mine', { params: { academy: academy.slug } })).creditMinor
-
-const calledOffMails = ({ golfer }: Evening) =>
-  world.mail.messagesTo(golfer.account.email).filter(({ subject }) => /called off/.test(subject))
-
-it('owes the share of that one evening, and leaves the rest of the run alone', async () => {
-  const evening = await callOffEvening()
-  const { state, places } = await read(evening)
-  expect(state).toBe('confirmed')
-  expect(places.map((place) => place.state)).toEqual(
-    [1, 2, 3, 4, 5, 6, 7, 8].map((number) => (number === 3 ? 'cancelled' : 'confirmed')),
-  )
-  const { owed } = await owedPlace(evening)
-  const chooseBy = new Date(world.clock.now().getTime() + SEVEN_DAYS_MS).toISOString()
-  expect(owed).toEqual({ amountMinor: SHARE_MINOR, choice: null, chooseBy, isSettled: false })
-  // Until it is chosen nothing moves, and the academy still owes it.
-  expect(await moneyCard(evening)).toMatchObject({ refundedMinor: 0, creditsOwedMinor: 0 })
-})
-
-it('gives the money back to the card, once, when the golfer wants that', async () => {
-  const evening = await callOffEvening()
-  expect((await choose(evening, 'money')).status).toBe(200)
-  expect((await choose(evening, 'money')).status).toBe(200)
-
-  const card = await moneyCard(evening)
-  expect(card).toMatchObject({ refundedMinor: SHARE_MINOR, refunds: 1, creditsOwedMinor: 0 })
-  const [payment] = Object.values(world.payments.state.payments).slice(-1)
-  expect(payment?.refunded).toBe(SHARE_MINOR)
-  expect((await owedPlace(evening)).owed).toMatchObject({ choice: 'money', isSettled: true })
-})
-
-it('keeps it as credit, once, and not both', async () => {
-  const evening = await callOffEvening()
-  expect((await choose(evening, 'credit')).status).toBe(200)
-  expect((await choose(evening, 'credit')).status).toBe(200)
-  expect((await choose(evening, 'money')).problem?.code).toBe('already-decided')
-
-  expect(await creditOf(evening)).toBe(SHARE_MINOR)
-  const card = await moneyCard(evening)
-  expect(card).toMatchObject({ creditsOwedMinor: SHARE_MINOR, refundedMinor: 0 })
-})
-
-it.each([
-  { moment: 'a millisecond before the seven days are over', offsetMs: -1, isOver: false },
-  { moment: 'at the last moment', offsetMs: 0, isOver: false },
-  { moment: 'a millisecond later', offsetMs: 1, isOver: true },
-])('takes the academy’s own choice only afterwards: $moment', async ({ offsetMs, isOver }) => {
-  const evening = await callOffEvening()
-  const { owed } = await owedPlace(evening)
-  world.clock.moveTo(new Date(Date.parse(owed.chooseBy) + offsetMs))
-  await world.sweep()
-  const choice = isOver ? 'credit' : null
-  expect((await owedPlace(evening)).owed).toMatchObject({ choice, isSettled: isOver })
-
-  const reply = await choose(evening, 'money')
-  expect(reply.problem?.code).toBe(isOver ? 'already-decided' : undefined)
-  expect(await creditOf(evening)).toBe(isOver ? SHARE_MINOR : 0)
-})
-
-it('refuses a choice that comes too late, even before the default was carried out', async () => {
-  const evening = await callOffEvening()
-  const { owed } = await owedPlace(evening)
-  world.clock.moveTo(new Date(Date.parse(owed.chooseBy) + 1))
-  expect((await choose(evening, 'money')).problem?.code).toBe('already-decided')
-  await world.sweep()
-  expect(await creditOf(evening)).toBe(SHARE_MINOR)
-})
-
-it('gives money back by itself where that is the academy’s choice', async () => {
-  const evening = await callOffEvening()
-  const params = { academy: evening.academy.slug }
-  const body = { owedDefault: 'money' } as const
-  await evening.academy.owner.person.must('academies.change', { params, body })
-  world.clock.moveBy(SEVEN_DAYS_MS + 1)
-  await world.sweep()
-  expect(await moneyCard(evening)).toMatchObject({ refundedMinor: SHARE_MINOR, refunds: 1 })
-})
-
-it('writes one mail to each golfer, however often it is told', async () => {
-  const evening = await callOffEvening()
-  const { sessionId } = evening
-  await callOff(evening.academy, sessionId)
-  await tellAgain(world, evening.academy, 'session.called-off', { sessionId })
-  await tellAgain(world, evening.academy, 'session.owed', { sessionId })
-
-  expect(calledOffMails(evening)).toHaveLength(1)
-  expect(calledOffMails(evening)[0]?.text).toContain('€30.00 is yours')
-  const { id: placeId } = await choose(evening, 'money').then(() => owedPlace(evening))
-  await tellAgain(world, evening.academy, 'choice.due', { placeId })
-  await tellAgain(world, evening.academy, 'session.called-off', { sessionId })
-  expect(calledOffMails(evening)).toHaveLength(1)
-  expect(await moneyCard(evening)).toMatchObject({ refundedMinor: SHARE_MINOR, refunds: 1 })
-})
-
-it('ends a place that was for this evening only', async () => {
-  const evening = await callOffEvening('session')
-  expect(await read(evening)).toMatchObject({ state: 'cancelled', endedBecause: 'called-off' })
-  const type = calledOffMails(evening)[0]?.attachments[0]?.type
-  expect(type).toContain('method=CANCEL')
-  expect((await owedPlace(evening)).owed.amountMinor).toBe(3_500)
-})
-
-it('asks for no more money where nothing was paid yet', async () => {
+/** A run that is paid by card; its second evening has not been called off yet. */
+async function soldRun(): Promise<Evening> {
   const academy = await openAcademy(world)
   const golfer = await signUp(world)
   const held = await takePlace(golfer, academy, { clinic: academy.clinic })
-  const params = { academy: academy.slug, enrolmentId: held.id }
-  const enrolment = await golfer.person.must('checkout.at-desk', { params })
-  const sessionId = academy.clinic.sessions[0]?.id ?? ''
-  await callOff(academy, sessionId)
-  const evening = { academy, golfer, enrolment, sessionId }
-  expect(await moneyCard(evening)).toMatchObject({ owedAtDeskMinor: 21_000, refundedMinor: 0 })
-  const takeCash = (amountMinor: number) =>
-    academy.owner.person.call('checkout.take-cash', { params, body: { amountMinor } })
-  expect((await takeCash(21_001)).problem?.code).toBe('invalid-fields')
-  expect((await takeCash(21_000)).answer.payment).toBe('paid')
+  const enrolment = await pay(world, golfer, { academy, enrolment: held })
+  const sessionId = academy.clinic.sessions[1]!.id
+  const params = { academy: academy.slug, enrolmentId: enrolment.id }
+  return { academy, golfer, enrolment, sessionId, params }
+}
+
+const callOff = ({ academy, sessionId }: Pick<Evening, 'academy' | 'sessionId'>) =>
+  academy.owner.person.must('sessions.call-off', {
+    params: { academy: academy.slug, sessionId },
+    body: { reason: 'Lightning' },
+  })
+
+async function calledOff(): Promise<Evening & { placeId: string; chooseBy: Date }> {
+  const evening = await soldRun()
+  await callOff(evening)
+  await world.drain()
+  const place = await placeOf(evening)
+  return { ...evening, placeId: place.id, chooseBy: new Date(place.owed!.chooseBy) }
+}
+
+async function placeOf({ golfer, params, sessionId }: Evening) {
+  const { places } = await golfer.person.must('enrolments.read', { params })
+  return places.find((place) => place.sessionId === sessionId)!
+}
+
+const choose = (
+  { golfer, academy, placeId }: Evening & { placeId: string },
+  choice: 'credit' | 'money',
+) =>
+  golfer.person.call('checkout.choose', {
+    params: { academy: academy.slug, placeId },
+    body: { choice },
+  })
+
+const refundsOf = ({ params }: Evening) =>
+  Object.values(world.payments.state.refunds).filter(({ payment }) => {
+    const { checkout = '' } = world.payments.state.payments[payment] ?? {}
+    return world.payments.state.checkouts[checkout]?.cancelUrl?.includes(params.enrolmentId)
+  })
+
+describe('a session that is called off', () => {
+  it('ends its places, gives the seats back, and leaves the rest of the run alone', async () => {
+    const evening = await calledOff()
+    const { golfer, academy, params, chooseBy } = evening
+    const after = await golfer.person.must('enrolments.read', { params })
+    expect(after.state).toBe('confirmed')
+    expect(after.places.map(({ state }) => state)).toEqual([
+      'confirmed',
+      'cancelled',
+      ...Array<string>(6).fill('confirmed'),
+    ])
+    expect(await placeOf(evening)).toMatchObject({
+      isCalledOff: true,
+      owed: { amountMinor: OWED, choice: null, isSettled: false },
+    })
+    expect(chooseBy.getTime()).toBe(world.clock.now().getTime() + 7 * DAY_MS)
+    const { clinic } = await golfer.person.must('page.clinic', {
+      params: { academy: academy.slug, clinic: academy.clinic.slug },
+    })
+    expect(clinic.sessions[1]).toMatchObject({ state: 'called-off', taken: 0 })
+  })
+
+  it('moves no money before the golfer has chosen', async () => {
+    const { academy } = await calledOff()
+    const { kinds, balances } = await readBooks(world, academy.slug)
+    expect(kinds).toEqual({ fees: 1, 'sale-by-card': 1 })
+    expect(balances).toMatchObject({ 'deferred-clinics': -22_018, 'tax-owed': -1_982 })
+  })
+
+  it('is told to each golfer once, with their calendar, however often it is pressed', async () => {
+    const evening = await calledOff()
+    const { golfer, academy } = evening
+    await callOff(evening)
+    await world.drain()
+    const mails = world.mail.messagesTo(golfer.account.email)
+    const told = mails.filter(({ text }) => text.includes('Lightning'))
+    expect(told).toHaveLength(1)
+    expect(told[0]?.attachments).toHaveLength(1)
+    expect((await readBooks(world, academy.slug)).kinds).toEqual({ fees: 1, 'sale-by-card': 1 })
+  })
+
+  it('is owed too when it was only held, and is paid for afterwards', async () => {
+    const academy = await openAcademy(world)
+    const golfer = await signUp(world)
+    const held = await takePlace(golfer, academy, { clinic: academy.clinic })
+    const sessionId = academy.clinic.sessions[1]!.id
+    await callOff({ academy, sessionId })
+    await world.drain()
+    const enrolment = await pay(world, golfer, { academy, enrolment: held })
+
+    const place = enrolment.places.find((one) => one.sessionId === sessionId)
+    expect(place).toMatchObject({ state: 'cancelled', owed: { amountMinor: OWED } })
+  })
+
+  it('is simply no longer owed by who was to pay at the desk', async () => {
+    const academy = await openAcademy(world, { clinic: { payMode: 'desk' } })
+    const golfer = await signUp(world)
+    const held = await takePlace(golfer, academy, { clinic: academy.clinic })
+    const params = { academy: academy.slug, enrolmentId: held.id }
+    await golfer.person.must('checkout.at-desk', { params })
+    const sessionId = academy.clinic.sessions[1]!.id
+    await callOff({ academy, sessionId })
+    await world.drain()
+
+    const { balances } = await readBooks(world, academy.slug)
+    expect(balances['receivable']).toBe(24_000 - OWED)
+    expect(await placeOf({ academy, golfer, enrolment: held, sessionId, params })).toMatchObject({
+      owed: { choice: 'money', isSettled: true },
+    })
+  })
 })
 
-it('has no register', async () => {
-  const { academy, sessionId, enrolment } = await callOffEvening()
-  const params = { academy: academy.slug, sessionId }
-  world.clock.moveTo(new Date(academy.clinic.sessions[2]?.startsAt ?? ''))
-  const { person } = academy.owner
-  const closed = await person.call('register.close', { params, body: { revision: 0 } })
-  expect(closed.problem?.code).toBe('already-decided')
-  const placeId = enrolment.places[2]?.id ?? ''
-  const body = { mark: 'present' } as const
-  const marked = await person.call('register.mark', { params: { ...params, placeId }, body })
-  expect(marked.problem?.code).toBe('already-decided')
-})
+describe('what is owed', () => {
+  it('goes back as money: by the provider, out of deferred and tax', async () => {
+    const evening = await calledOff()
+    expect((await choose(evening, 'money')).status).toBe(200)
+    await world.drain()
 
-it('frees its coach and its bays for something else', async () => {
-  const academy = await openAcademy(world)
-  const again = () =>
-    publishClinic(academy, { startsOnLocal: '2031-04-15', rrule: 'FREQ=WEEKLY;COUNT=1' })
-  await expect(again()).rejects.toThrow('clash')
-  await callOff(academy, academy.clinic.sessions[2]?.id ?? '')
-  expect((await again()).sessions).toHaveLength(1)
-})
+    expect(refundsOf(evening)).toMatchObject([{ amount: OWED, status: 'succeeded' }])
+    const { kinds, balances } = await readBooks(world, evening.academy.slug)
+    expect(kinds).toEqual({ 'called-off-money': 1, fees: 1, 'sale-by-card': 1 })
+    expect(balances).toMatchObject({
+      'provider-clearing': 23_375 - OWED,
+      'deferred-clinics': -22_018 + 2_753,
+      'tax-owed': -1_982 + 247,
+    })
+  })
 
-it('is not for a coach of other sessions, nor for a golfer', async () => {
-  const { academy, golfer } = await callOffEvening()
-  const other = await joinStaff(world, academy, { role: 'coach' })
-  const params = { academy: academy.slug, sessionId: academy.clinic.sessions[4]?.id ?? '' }
-  for (const { person } of [other, golfer]) {
-    const reply = await person.call('sessions.call-off', { params, body: { reason: 'Fog' } })
-    expect(reply.problem?.code).toBe('not-allowed')
-  }
+  it('stays as credit: owed to the golfer instead, without a refund', async () => {
+    const evening = await calledOff()
+    await choose(evening, 'credit')
+    await world.drain()
+
+    expect(refundsOf(evening)).toEqual([])
+    const params = { academy: evening.academy.slug }
+    const { creditMinor } = await evening.golfer.person.must('enrolments.mine', { params })
+    expect(creditMinor).toBe(OWED)
+    const { balances } = await readBooks(world, evening.academy.slug)
+    expect(balances).toMatchObject({ 'credits-owed': -OWED, 'provider-clearing': 23_375 })
+  })
+
+  it('is chosen once: the same again changes nothing, the other is refused', async () => {
+    const evening = await calledOff()
+    await Promise.all([choose(evening, 'money'), choose(evening, 'money')])
+    expect((await choose(evening, 'money')).status).toBe(200)
+    expect((await choose(evening, 'credit')).problem?.code).toBe('already-decided')
+    await world.drain()
+    expect(refundsOf(evening)).toHaveLength(1)
+    const { balances } = await readBooks(world, evening.academy.slug)
+    expect(balances).not.toHaveProperty('credits-owed')
+  })
+
+  it('is nobody else’s to choose', async () => {
+    const evening = await calledOff()
+    const stranger = await signUp(world)
+    expect((await choose({ ...evening, golfer: stranger }, 'money')).status).toBe(404)
+    expect((await placeOf(evening)).owed?.choice).toBeNull()
+  })
+
+  it.each([
+    { when: 'a millisecond before seven days are over', ms: -1, choice: null },
+    { when: 'when seven days are over', ms: 0, choice: null },
+    { when: 'a millisecond later', ms: 1, choice: 'credit' },
+  ])('$when the default has been taken: $choice', async ({ ms, choice }) => {
+    const evening = await calledOff()
+    world.clock.moveTo(new Date(evening.chooseBy.getTime() + ms))
+    await world.sweep()
+
+    expect((await placeOf(evening)).owed).toMatchObject({ choice, isSettled: choice !== null })
+  })
+
+  it('goes by the academy’s own default, once', async () => {
+    const evening = await calledOff()
+    await evening.academy.owner.person.must('academies.change', {
+      params: { academy: evening.academy.slug },
+      body: { owedDefault: 'money' },
+    })
+    world.clock.moveTo(new Date(evening.chooseBy.getTime() + 1))
+    await world.sweep()
+    await world.sweep()
+
+    expect(refundsOf(evening)).toMatchObject([{ amount: OWED, status: 'succeeded' }])
+    expect((await choose(evening, 'credit')).problem?.code).toBe('already-decided')
+  })
 })
