@@ -19,6 +19,7 @@ import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { oweForCalledOff } from './called-off'
 import type { Order } from './models'
+import { findOpenPage } from './open-page'
 import type { PaymentsProvider } from './provider'
 import {
   insertOrder,
@@ -42,15 +43,21 @@ const CHECKOUT_MINUTES = 31
 
 /**
  * Begins payment of a hold on the provider's own page. Resolves to that page's address; a second
- * press gives the same one. Throws `hold-lapsed` and `payments-not-connected`.
+ * press gives the same one while it is open there. Throws `hold-lapsed` and
+ * `payments-not-connected`.
  */
 export async function startCheckout(
   services: Services,
   provider: PaymentsProvider,
   own: Own,
 ): Promise<string> {
-  const begun = await inAcademy(services.db, own.academyId, (trx) => begin(services, trx, own))
-  if (begun.order.checkoutUrl) return begun.order.checkoutUrl
+  const had = await inAcademy(services.db, own.academyId, (trx) => begin(services, trx, own))
+  const page = await findOpenPage(services, provider, { ...own, ...had })
+  if (page) return page
+  const isEnded = had.order.checkoutUrl !== null
+  const begun = isEnded
+    ? await inAcademy(services.db, own.academyId, (trx) => begin(services, trx, own))
+    : had
   const { order, academy, title, email } = begun
   const { account, amountMinor } = begun
   const back = `${services.config.publicUrl}/${academy.slug}/my/places/${own.enrolmentId}`
