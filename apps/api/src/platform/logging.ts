@@ -56,6 +56,9 @@ function describeError(error: unknown): Record<string, unknown> {
   const source = error as Error & Record<string, unknown>
   const all: Record<string, unknown> = { ...source, type: error.name, stack: error.stack }
   // A database error's message can repeat a row's values; its code and constraint say enough.
+  // The model layer wraps it, and puts the whole statement into the message.
+  const { nativeError } = source as { nativeError?: unknown }
+  if (nativeError instanceof Error) return describeError(nativeError)
   const isDatabase = typeof source['severity'] === 'string'
   all['message'] = isDatabase ? 'database error' : error.message
   if (isDatabase) all['stack'] = undefined
