@@ -9,6 +9,7 @@ import { localDayOf } from '../platform/local-day'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import type { Golfer } from './models'
 import {
+  findDependant,
   findGolfer,
   findGolferOfAccount,
   findUnclaimedGolfer,
@@ -76,19 +77,25 @@ export async function ensureOwnGolfer(
   return golfer
 }
 
-/** Adds somebody whom the person looks after, with the consent given in the same step. */
+/**
+ * Adds somebody whom the person looks after, with the consent given in the same step. The same child
+ * sent again, as after an answer that never arrived, is the one that was added then.
+ */
 export async function addDependant(
   { clock }: Services,
   trx: AcademyTrx,
   { guardianId, dependant }: { guardianId: string; dependant: Dependant },
 ): Promise<Golfer> {
   const now = clock.now()
+  const { name, bornOn } = dependant
+  const had = await findDependant(trx, { guardianAccountId: guardianId, name, bornOn })
+  if (had) return had
   const id = newId(now)
   await insertGolfer(trx, {
     id,
     guardianAccountId: guardianId,
-    name: dependant.name,
-    bornOn: dependant.bornOn,
+    name,
+    bornOn,
     handicap: dependant.handicap,
     handicapOn: dependant.handicap === null ? null : now.toISOString().slice(0, 10),
     emergencyName: dependant.emergencyContact.name,
