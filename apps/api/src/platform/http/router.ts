@@ -2,6 +2,7 @@ import {
   ROUTES,
   SCHEMAS,
   scopeOf,
+  slug,
   type Access,
   type Role,
   type RouteKey,
@@ -112,8 +113,11 @@ async function makeContext(
 }
 
 function slugOf(request: Request): string | null {
-  const slug = request.params['academy']
-  return typeof slug === 'string' ? slug : null
+  const given = request.params['academy']
+  if (typeof given !== 'string') return null
+  // What is not written as an address is nobody's: the database is not asked with it.
+  if (!slug.safeParse(given).success) throw notFound('academy')
+  return given
 }
 
 /** Somebody with no staff role here learns nothing, not even that the page exists. */
