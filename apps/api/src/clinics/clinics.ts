@@ -30,7 +30,7 @@ import {
   updateClinic,
   updateSession,
 } from './queries'
-import { checkPrices, describeRule, isSameSchedule } from './rules'
+import { checkLevel, checkPrices, describeRule, isSameSchedule } from './rules'
 import { viewSessions } from './views'
 
 type ClinicView = Answer<'clinics.read'>
@@ -42,6 +42,7 @@ export async function draftClinic(
   { academyId, wanted }: { academyId: string; wanted: Wanted },
 ): Promise<ClinicView> {
   checkPrices(wanted)
+  checkLevel(wanted)
   return inAcademy(db, academyId, async (trx) => {
     const now = clock.now()
     const id = newId(now)
@@ -105,6 +106,7 @@ export async function changeClinic(
   { academyId, clinicId, wanted }: { academyId: string; clinicId: string; wanted: Wanted },
 ): Promise<ClinicView> {
   checkPrices(wanted)
+  checkLevel(wanted)
   return inAcademy(db, academyId, (trx) =>
     sayClashes(async () => {
       const clinic = await lockClinic(trx, clinicId)
