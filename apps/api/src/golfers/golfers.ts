@@ -1,7 +1,7 @@
 import type { Answer, Parsed } from '@marram/contract'
 import { readAcademy } from '../academies/academies'
 import { findCoachOf } from '../coaches/coaches'
-import { notFound } from '../platform/errors'
+import { Problem, notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
@@ -90,6 +90,8 @@ export async function addDependant(
   const { name, bornOn } = dependant
   const had = await findDependant(trx, { guardianAccountId: guardianId, name, bornOn })
   if (had) return had
+  const { safeguarding, zone } = await readAcademy(trx)
+  if (bornOn > localDayOf(now, zone)) throw bornLater()
   const id = newId(now)
   await insertGolfer(trx, {
     id,
@@ -102,7 +104,6 @@ export async function addDependant(
     emergencyPhone: dependant.emergencyContact.phone,
     createdAt: now,
   })
-  const { safeguarding } = await readAcademy(trx)
   await recordConsent(trx, {
     golferId: id,
     kind: 'takes-part',
@@ -113,6 +114,13 @@ export async function addDependant(
   const golfer = await findGolfer(trx, id)
   invariant(golfer, 'the dependant was just written')
   return golfer
+}
+
+const bornLater = () => {
+  const sentence = 'This day is still to come.'
+  // The same fields stand alone in one form and inside another.
+  const fields = { bornOn: sentence, 'for.dependant.bornOn': sentence }
+  return new Problem('invalid-fields', sentence, fields)
 }
 
 export async function recordConsent(
