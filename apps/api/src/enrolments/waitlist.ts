@@ -109,6 +109,16 @@ export async function offerFreedPlaces(
   }
 }
 
+/** More places were opened, or the clinic is on the page again: who waits comes first. */
+export async function offerOpenedPlaces(
+  services: Services,
+  { academyId, clinicId }: { academyId: string; clinicId: string },
+): Promise<void> {
+  await inAcademy(services.db, academyId, (trx) =>
+    offerFreedPlaces(services, trx, { academyId, clinicId }),
+  )
+}
+
 async function offer(
   services: Services,
   trx: AcademyTrx,
