@@ -1,17 +1,24 @@
 import { spawn } from 'node:child_process'
-import { dirname, resolve } from 'node:path'
+import { dirname, join, resolve } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { ensurePackages } from './packages.mjs'
+import { ensurePostgres } from './postgres.mjs'
 import { Problem } from './problem.mjs'
 
 const root = resolve(dirname(fileURLToPath(import.meta.url)), '..')
 
-/** Installs what is missing, then hands over to the measurements, which are TypeScript. */
+/** Makes sure of what the measurements need, then hands over to them; they are TypeScript. */
 async function main() {
   await ensurePackages(root)
-  const args = ['--import', 'tsx', 'tests/load/bench.ts', ...process.argv.slice(2)]
-  const child = spawn(process.execPath, args, { cwd: root, stdio: 'inherit' })
-  process.exitCode = await new Promise((done) => child.on('exit', (code) => done(code ?? 1)))
+  const say = (text) => process.stderr.write(`${text}\n`)
+  const cluster = await ensurePostgres({ folder: join(root, '.marram', 'test'), say })
+  try {
+    const args = ['--import', 'tsx', 'tests/load/bench.ts', ...process.argv.slice(2)]
+    const child = spawn(process.execPath, args, { cwd: root, stdio: 'inherit' })
+    process.exitCode = await new Promise((done) => child.on('exit', (code) => done(code ?? 1)))
+  } finally {
+    await cluster.stop().catch(() => {})
+  }
 }
 
 try {

@@ -120,7 +120,8 @@ describe('what is not fit is refused in words, and nothing is written', () => {
   ])('an address with $name in it', async ({ part }) => {
     for (const key of Object.keys(ROUTES) as RouteKey[]) {
       const { method, path } = ROUTES[key]
-      if (!path.includes(':')) continue
+      // Whether an address is free may be asked of any text: the answer is how it would be written.
+      if (!path.includes(':') || key === 'academies.check-slug') continue
       const body = method === 'GET' ? undefined : {}
       expectRefusal(await ours.owner.person.send(method, path.replace(/:\w+/g, part), body))
     }

@@ -77,6 +77,14 @@ describe('the product’s payments adapter', () => {
     })
   })
 
+  it('says of an amount that no card pays where it can be paid', async () => {
+    const wishes = { orderId: 'order-little', amountMinor: 20, applicationFeeMinor: 0 }
+    await expect(open(wishes)).rejects.toMatchObject({
+      code: 'not-on-sale',
+      message: expect.stringContaining('desk') as string,
+    })
+  })
+
   it('reads what was paid, and what both took of it', async () => {
     const { checkout, payment } = await payFor('order-3')
     expect(await provider.readCheckout(account, checkout)).toMatchObject({ state: 'paid' })

@@ -24,8 +24,13 @@ interface Facts {
  * A hold of one session as bare SQL, for a golfer who is known already: one question for what it
  * must know, one statement for its rows, the guarded seat. It leaves the same rows as the product,
  * sends at once what does not wait for an answer, and has its statements planned once.
+ * `show` may ask about the enrolment in the same burst.
  */
-export async function holdBarely(client: pg.ClientBase, wish: Wish): Promise<string> {
+export async function holdBarely<T = null>(
+  client: pg.ClientBase,
+  wish: Wish,
+  show: (enrolmentId: string) => Promise<T | null> = () => Promise.resolve(null),
+): Promise<{ id: string; shown: T | null }> {
   const { academyId, sessionId, accountId } = wish
   const ask = <Row extends pg.QueryResultRow>(name: string, text: string, values: unknown[]) =>
     client.query<Row>({ name, text, values })
@@ -37,13 +42,14 @@ export async function holdBarely(client: pg.ClientBase, wish: Wish): Promise<str
     const [facts] = rows
     if (!facts) throw new Error('There is nothing to hold.')
     const id = newId(new Date())
-    const [, { rowCount }] = await Promise.all([
+    const [, shown, { rowCount }] = await Promise.all([
       ask('insert-hold', INSERT_HOLD, rowsOfHold(wish, { facts, id })),
+      show(id),
       ask('take-seat', TAKE_SEAT, [academyId, sessionId]),
     ])
     if (rowCount !== 1) throw new Error('The session is full.')
     await client.query('COMMIT')
-    return id
+    return { id, shown }
   } catch (error) {
     await client.query('ROLLBACK')
     throw error

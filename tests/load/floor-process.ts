@@ -1,9 +1,11 @@
 import express from 'express'
+import { createHash } from 'node:crypto'
 import { createServer } from 'node:http'
 import pg from 'pg'
+import { questionOf } from '../../apps/api/src/checkout/view-queries'
 import { listen } from '../../apps/api/src/platform/boot'
 import { holdBarely, type Wish } from './bare-hold'
-import { PAGE, beginReadingAt } from './floor-sql'
+import { PAGE, WHO_ASKS, beginReadingAt } from './floor-sql'
 import { POOL_SIZE, sayPort } from './processes'
 
 const pool = new pg.Pool({
@@ -44,7 +46,36 @@ app.post('/holds', express.json(), async (request, response) => {
   const client = await pool.connect()
   try {
     // Only the bench sends anything here.
-    response.json({ id: await holdBarely(client, request.body as Wish) })
+    const { id } = await holdBarely(client, request.body as Wish)
+    response.json({ id })
+  } finally {
+    client.release()
+  }
+})
+
+/** The same by somebody who is signed in, and with the enrolment as the answer. */
+app.post('/signed-in-holds', express.json(), async (request, response) => {
+  const client = await pool.connect()
+  try {
+    const token = /marram=s%3A([\w-]+)/.exec(request.get('cookie') ?? '')?.[1] ?? ''
+    const idHash = createHash('sha256').update(token).digest()
+    const { rows } = await client.query<{ id: string }>({
+      name: 'who-asks',
+      text: WHO_ASKS,
+      values: [idHash],
+    })
+    const [person] = rows
+    if (!person) {
+      response.status(401).end()
+      return
+    }
+    const wish = { ...(request.body as Wish), accountId: person.id }
+    const { shown } = await holdBarely(client, wish, async (id) => {
+      const { name, text, values } = questionOf({ id })
+      const views = await client.query<{ view: object }>({ name, text, values: [...values] })
+      return views.rows[0]?.view ?? null
+    })
+    response.json(shown)
   } finally {
     client.release()
   }

@@ -73,6 +73,11 @@ export const beginReadingAt = (slug: string): string =>
   `BEGIN READ ONLY; SELECT set_config('app.academy_id',
      coalesce(find_academy_by_slug('${slug}')::text, ''), true)`
 
+/** The person behind a sign-in session, by the hash of its id ($1). */
+export const WHO_ASKS = `
+  SELECT a.id, a.name, a.email FROM sign_in_sessions s JOIN accounts a ON a.id = s.account_id
+  WHERE s.id_hash = $1 AND s.expires_at > now() AND s.session_version = a.session_version`
+
 /**
  * What a hold of one session must know ($1 academy, $2 session, $3 account): what it costs with tax
  * in it, for how long it is held, what is agreed to, who takes it, and that they have none yet.

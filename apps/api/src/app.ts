@@ -20,6 +20,7 @@ import { answerProblems, noSuchRoute } from './platform/http/answers'
 import { healthRoutes } from './platform/http/health'
 import { readJsonBody } from './platform/http/json-body'
 import { observeRequests } from './platform/http/observe'
+import { openApiRoute } from './platform/http/openapi'
 import { checkOriginAndToken } from './platform/http/request-token'
 import { makeApiRouter } from './platform/http/router'
 import { securityHeaders } from './platform/http/security-headers'
@@ -49,6 +50,7 @@ export function makeApp(services: Services, options: AppOptions): Express {
   app.use(observeRequests(services))
   app.use(securityHeaders(services.config))
   app.use(healthRoutes(services, isStopping))
+  app.use(openApiRoute(services))
   app.use(paymentsWebhook(services, payments))
   app.use(mailWebhook(services))
 

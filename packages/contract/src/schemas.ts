@@ -9,7 +9,7 @@ import { registerSchemas } from './register'
 import type { RouteKey } from './routes'
 import { venueSchemas } from './venues'
 
-interface RouteSchemas {
+export interface RouteSchemas {
   params?: z.ZodObject
   query?: z.ZodObject
   body?: z.ZodType

@@ -1,3 +1,4 @@
+import { allocateByLargestRemainder } from '@marram/money'
 import { readAcademy, type Academy } from '../academies/academies'
 import { findSession } from '../clinics/clinics'
 import {
@@ -17,7 +18,7 @@ import { newId } from '../platform/ids'
 import { localDayOf } from '../platform/local-day'
 import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
-import type { Order } from './models'
+import type { Order, OwedPlace } from './models'
 import {
   insertCredit,
   insertOwedPlace,
@@ -27,6 +28,7 @@ import {
   lockOwedPlace,
   updateOwedPlace,
 } from './queries'
+import { readOwedAtDesk } from './view-queries'
 
 /** How long a golfer may choose between money and credit. */
 const CHOICE_DAYS = 7
@@ -71,20 +73,40 @@ async function owe(
   const amountMinor = place.netMinor + place.taxMinor
   if (amountMinor === 0) return
   const now = services.clock.now()
+  // What was never paid is simply no longer owed, and leaves nothing to choose.
+  const { owedMinor } = await sourceOf(trx, enrolment.id)
+  const noLongerOwedMinor = Math.min(owedMinor, amountMinor)
+  const restMinor = amountMinor - noLongerOwedMinor
+  const isSettled = restMinor === 0
   await insertOwedPlace(trx, {
     placeId: place.id,
-    amountMinor,
-    choice: null,
-    chosenBy: null,
+    amountMinor: isSettled ? amountMinor : restMinor,
+    choice: isSettled ? 'money' : null,
+    chosenBy: isSettled ? 'default' : null,
     chooseBy: new Date(now.getTime() + CHOICE_DAYS * 86_400_000),
-    settledAt: null,
+    settledAt: isSettled ? now : null,
   })
-  // What was never paid is simply no longer owed, and leaves nothing to choose.
-  const source = await sourceOf(trx, enrolment.id)
-  if (source.from !== 'receivable') return
-  const chosen = { choice: 'money', chosenBy: 'default', settledAt: now } as const
-  await updateOwedPlace(trx, place.id, chosen)
-  await postMoneyBack(services, trx, { academy, place, source })
+  if (noLongerOwedMinor === 0) return
+  const amount = await amountOf(trx, place)
+  const posting = calledOffMoney({
+    sourceId: place.id,
+    what: 'Called off, no longer owed',
+    happenedOn: localDayOf(now, academy.zone),
+    revision: 0,
+    place: { ...amount, ...divideOwed(amount, restMinor).unpaid },
+    from: 'receivable',
+  })
+  await post(services, trx, { posting, currency: academy.currency })
+}
+
+/** A place's price in two: what was paid and is owed back, and what was never paid. */
+function divideOwed({ netMinor, taxMinor }: PlaceAmount, paidMinor: number) {
+  const unpaidMinor = netMinor + taxMinor - paidMinor
+  const [net = 0, tax = 0] = allocateByLargestRemainder(unpaidMinor, [netMinor, taxMinor])
+  return {
+    unpaid: { netMinor: net, taxMinor: tax },
+    paid: { netMinor: netMinor - net, taxMinor: taxMinor - tax },
+  }
 }
 
 /** The golfer's choice for a place called off: money back or credit, once. */
@@ -108,7 +130,10 @@ export async function chooseForOwedPlace(
     if (owed.choice) {
       throw new Problem('already-decided', `This was settled as ${owed.choice} already.`)
     }
-    await settle(services, trx, { place, choice, chosenBy: 'golfer' })
+    if (services.clock.now() > owed.chooseBy) {
+      throw new Problem('already-decided', 'The seven days to choose are over.')
+    }
+    await settle(services, trx, { place, owed, choice, chosenBy: 'golfer' })
   })
 }
 
@@ -124,25 +149,31 @@ export async function chooseByDefault(
     const owed = await lockOwedPlace(trx, placeId)
     if (!owed || owed.choice || services.clock.now() <= owed.chooseBy) return
     const { owedDefault } = await readAcademy(trx)
-    await settle(services, trx, { place, choice: owedDefault, chosenBy: 'default' })
+    await settle(services, trx, { place, owed, choice: owedDefault, chosenBy: 'default' })
   })
 }
 
 async function settle(
   services: Services,
   trx: AcademyTrx,
-  given: { place: Place; choice: 'credit' | 'money'; chosenBy: 'golfer' | 'default' },
+  given: {
+    place: Place
+    owed: OwedPlace
+    choice: 'credit' | 'money'
+    chosenBy: 'golfer' | 'default'
+  },
 ): Promise<void> {
-  const { place, choice, chosenBy } = given
+  const { place, owed, choice, chosenBy } = given
   const academy = await readAcademy(trx)
   const now = services.clock.now()
   await updateOwedPlace(trx, place.id, { choice, chosenBy, settledAt: now })
+  const price = await amountOf(trx, place)
+  const amount = { ...price, ...divideOwed(price, owed.amountMinor).paid }
   if (choice === 'money') {
-    const source = await sourceOf(trx, place.enrolmentId)
-    await postMoneyBack(services, trx, { academy, place, source })
+    const isInPart = owed.amountMinor < price.netMinor + price.taxMinor
+    await giveMoneyBack(services, trx, { academy, place, amount, revision: isInPart ? 1 : 0 })
     return
   }
-  const amount = await amountOf(trx, place)
   const posting = calledOffCredit({
     sourceId: place.id,
     what: 'Called off, kept as credit',
@@ -153,7 +184,7 @@ async function settle(
   await insertCredit(trx, {
     id: newId(now),
     golferId: place.golferId,
-    amountMinor: amount.netMinor + amount.taxMinor,
+    amountMinor: owed.amountMinor,
     currency: academy.currency,
     sourceType: 'owed-place',
     sourceId: place.id,
@@ -165,36 +196,40 @@ export interface MoneySource {
   order: Order | null
   paymentId: string | null
   from: 'provider-clearing' | 'cash-drawer' | 'receivable'
+  /** What is still to be paid at the desk. */
+  owedMinor: number
 }
 
 /** Where an enrolment's money came from, and so where it goes back to. */
 export async function sourceOf(trx: AcademyTrx, enrolmentId: string): Promise<MoneySource> {
   const order = (await lockLiveOrder(trx, enrolmentId)) ?? null
+  const owedMinor = order?.method === 'desk' ? await readOwedAtDesk(trx, order.id) : 0
   const payments = order ? await listPaymentsOf(trx, [order.id]) : []
   const card = payments.find(({ method }) => method === 'card')
-  if (card) return { order, paymentId: card.id, from: 'provider-clearing' }
+  if (card) return { order, paymentId: card.id, from: 'provider-clearing', owedMinor }
   const [cash] = payments
-  if (cash) return { order, paymentId: cash.id, from: 'cash-drawer' }
-  return { order, paymentId: null, from: 'receivable' }
+  if (cash) return { order, paymentId: cash.id, from: 'cash-drawer', owedMinor }
+  return { order, paymentId: null, from: 'receivable', owedMinor }
 }
 
-async function postMoneyBack(
+async function giveMoneyBack(
   services: Services,
   trx: AcademyTrx,
-  { academy, place, source }: { academy: Academy; place: Place; source: MoneySource },
+  given: { academy: Academy; place: Place; amount: PlaceAmount; revision: 0 | 1 },
 ): Promise<void> {
+  const { academy, place, amount, revision } = given
   const now = services.clock.now()
-  const amount = await amountOf(trx, place)
-  const isPaid = source.from !== 'receivable'
+  const source = await sourceOf(trx, place.enrolmentId)
   const posting = calledOffMoney({
     sourceId: place.id,
-    what: isPaid ? 'Called off, money back' : 'Called off, no longer owed',
+    what: 'Called off, money back',
     happenedOn: localDayOf(now, academy.zone),
+    revision,
     place: amount,
     from: source.from,
   })
   await post(services, trx, { posting, currency: academy.currency })
-  if (!isPaid || !source.order) return
+  if (!source.order) return
   const refundId = newId(now)
   const isCard = source.from === 'provider-clearing'
   const isNew = await insertRefund(trx, {

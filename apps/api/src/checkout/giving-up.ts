@@ -36,6 +36,8 @@ interface Reckoning {
   places: (GivenUpPlace & { placeId: string })[]
   paidMinor: number
   backMinor: number
+  /** Of what comes back: what was still to be paid at the desk, and is owed no longer. */
+  noLongerOwedMinor: number
   bestBasisPoints: number
 }
 
@@ -47,15 +49,15 @@ export async function quoteGivingUp({ db, clock }: Services, given: GivingUp): P
 }
 
 function toQuote(reckoning: Reckoning): Quote {
-  const { academy, source, places, paidMinor, backMinor, bestBasisPoints } = reckoning
-  const isPaid = source.from !== 'receivable'
+  const { academy, source, places, paidMinor, bestBasisPoints } = reckoning
+  const refundMinor = reckoning.backMinor - reckoning.noLongerOwedMinor
   return {
-    paidMinor: isPaid ? paidMinor : 0,
-    refundMinor: isPaid ? backMinor : 0,
+    paidMinor,
+    refundMinor,
     refundBasisPoints: bestBasisPoints,
     sentence: policySentence({ tiers: academy.refundTiers, refundBasisPoints: bestBasisPoints }),
     places: places.length,
-    comesBackAs: backMinor === 0 || !isPaid ? 'nothing' : cardOrCash(source),
+    comesBackAs: refundMinor === 0 ? 'nothing' : cardOrCash(source),
   }
 }
 
@@ -85,13 +87,17 @@ async function reckon(trx: AcademyTrx, given: GivingUp, now: Date): Promise<Reck
     const { netMinor, taxMinor } = place
     return { ...place, ...divideRefund({ netMinor, taxMinor, refundBasisPoints }) }
   })
+  const source = await sourceOf(trx, enrolment.id)
+  const priceMinor = places.reduce((sum, { netMinor, taxMinor }) => sum + netMinor + taxMinor, 0)
+  const backMinor = places.reduce((sum, { back }) => sum + back.grossMinor, 0)
   return {
     academy,
     enrolment,
-    source: await sourceOf(trx, enrolment.id),
+    source,
     places,
-    paidMinor: places.reduce((sum, { netMinor, taxMinor }) => sum + netMinor + taxMinor, 0),
-    backMinor: places.reduce((sum, { back }) => sum + back.grossMinor, 0),
+    paidMinor: Math.max(0, priceMinor - source.owedMinor),
+    backMinor,
+    noLongerOwedMinor: Math.min(source.owedMinor, backMinor),
     bestBasisPoints,
   }
 }
@@ -132,6 +138,7 @@ export async function giveUp(
       happenedOn: localDayOf(now, academy.zone),
       places: reckoning.places,
       from: source.from,
+      noLongerOwedMinor: reckoning.noLongerOwedMinor,
     })
     if (enrolment.netMinor + enrolment.taxMinor > 0) {
       await post(services, trx, { posting, currency: academy.currency })

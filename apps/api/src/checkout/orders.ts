@@ -19,7 +19,6 @@ import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { oweForCalledOff } from './called-off'
 import type { Order } from './models'
-import { findOpenPage } from './open-page'
 import type { PaymentsProvider } from './provider'
 import {
   insertOrder,
@@ -43,21 +42,20 @@ const CHECKOUT_MINUTES = 31
 
 /**
  * Begins payment of a hold on the provider's own page. Resolves to that page's address; a second
- * press gives the same one while it is open there. Throws `hold-lapsed` and
- * `payments-not-connected`.
+ * press gives the same one. Throws `hold-lapsed` and `payments-not-connected`.
  */
 export async function startCheckout(
   services: Services,
   provider: PaymentsProvider,
   own: Own,
 ): Promise<string> {
-  const had = await inAcademy(services.db, own.academyId, (trx) => begin(services, trx, own))
-  const page = await findOpenPage(services, provider, { ...own, ...had })
-  if (page) return page
-  const isEnded = had.order.checkoutUrl !== null
-  const begun = isEnded
-    ? await inAcademy(services.db, own.academyId, (trx) => begin(services, trx, own))
-    : had
+  const beginOnce = () => inAcademy(services.db, own.academyId, (trx) => begin(services, trx, own))
+  let begun = await beginOnce()
+  if (begun.order.checkoutUrl) {
+    const page = await findOpenPage(services, provider, { ...own, ...begun })
+    if (page) return page
+    begun = await beginOnce()
+  }
   const { order, academy, title, email } = begun
   const { account, amountMinor } = begun
   const back = `${services.config.publicUrl}/${academy.slug}/my/places/${own.enrolmentId}`
@@ -89,6 +87,34 @@ export async function startCheckout(
   }
   return checkout.url
 }
+
+/**
+ * The page of the last attempt, while it can be paid on. An offer stands for hours and the page for
+ * half an hour: one that has ended is forgotten, and one that was paid on meanwhile is settled.
+ */
+async function findOpenPage(
+  services: Services,
+  provider: PaymentsProvider,
+  { academyId, account, order }: { academyId: string; account: string; order: Order },
+): Promise<string | null> {
+  const { id, checkoutId, checkoutUrl } = order
+  if (!checkoutId) return null
+  const checkout = await provider.readCheckout(account, checkoutId)
+  if (checkout.state === 'open') return checkoutUrl
+  if (checkout.state === 'paid') {
+    await settlePaidCheckout(services, provider, { academyId, account, checkout })
+    throw paidMeanwhile()
+  }
+  await inAcademy(services.db, academyId, async (trx) => {
+    const now = await lockOrder(trx, id)
+    if (now?.checkoutId !== checkoutId) return
+    await updateOrder(trx, id, { checkoutId: null, checkoutUrl: null })
+  })
+  return null
+}
+
+const paidMeanwhile = () =>
+  new Problem('already-decided', 'Your payment has just come in: the place is yours.')
 
 async function begin(services: Services, trx: AcademyTrx, own: Own) {
   const enrolment = await lockOwnEnrolment(trx, own)
@@ -292,9 +318,7 @@ async function endOpenCheckout(
 ): Promise<void> {
   await inAcademy(services.db, own.academyId, (trx) => lockOwnEnrolment(trx, own))
   const ended = await endCheckout(services, provider, own)
-  if (ended === 'paid') {
-    throw new Problem('already-decided', 'Your payment has just come in: the place is yours.')
-  }
+  if (ended === 'paid') throw paidMeanwhile()
 }
 
 /** Ends the checkout of an enrolment's open order, if it has one. A paid one is settled. */

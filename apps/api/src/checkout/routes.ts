@@ -20,7 +20,7 @@ import { showEnrolments } from './views'
 export function checkoutHandlers(services: Services, provider: PaymentsProvider): Handlers {
   const show = (academyId: string, id: string) =>
     inAcademy(services.db, academyId, async (trx) => {
-      const [view] = await showEnrolments(trx, { ids: [id] })
+      const [view] = await showEnrolments(trx, { id })
       if (!view) throw notFound('place')
       return view
     })

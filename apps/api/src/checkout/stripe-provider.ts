@@ -214,9 +214,17 @@ async function asked<T>(call: () => Promise<T>): Promise<T> {
   try {
     return await call()
   } catch (error) {
-    throw unavailable(error)
+    throw isTooLittle(error) ? TOO_LITTLE : unavailable(error)
   }
 }
+
+const TOO_LITTLE = new Problem(
+  'not-on-sale',
+  'This is less than a card can pay. Please pay it at the desk instead.',
+)
+
+const isTooLittle = (error: unknown): boolean =>
+  error instanceof Stripe.errors.StripeError && error.code === 'amount_too_small'
 
 /** What reaches a person when the provider cannot be asked; the cause is kept for the log. */
 function unavailable(cause: unknown): Problem {

@@ -1,15 +1,17 @@
 import type { Answer } from '@marram/contract'
-import { ask } from '../platform/tenancy/ask'
+import { ask, type Question } from '../platform/tenancy/ask'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 
 type EnrolmentView = Answer<'enrolments.read'>
 
 /** Whose enrolments are wanted. */
 export type WantedViews =
-  { ids: readonly string[] } | { accountId: string } | { clinicId: string } | { golferId: string }
+  { id: string } | { accountId: string } | { clinicId: string } | { golferId: string }
 
 export interface OrderInView {
   state: 'open' | 'paid' | 'void'
+  method: 'card' | 'desk'
+  owedAtDeskMinor: number
   lastRefusal: string | null
   totalMinor: number
   paidMinor: number
@@ -20,7 +22,7 @@ export interface OrderInView {
 export type ViewRow = Omit<EnrolmentView, 'payment' | 'owedMinor'> & { orders: OrderInView[] }
 
 const WHERE = {
-  ids: 'e.id = ANY($1)',
+  id: 'e.id = $1',
   accountId: '(g.account_id = $1 OR g.guardian_account_id = $1)',
   clinicId: 'e.clinic_id = $1',
   golferId: 'e.golfer_id = $1',
@@ -28,14 +30,18 @@ const WHERE = {
 
 /** Enrolments with all that is shown of them, the newest first, in one question. */
 export async function readViews(trx: AcademyTrx, by: WantedViews): Promise<ViewRow[]> {
+  const rows = await ask<{ view: ViewRow }>(trx, questionOf(by))
+  return rows.map(({ view }) => view)
+}
+
+export function questionOf(by: WantedViews): Question {
   // Each kind of wish has exactly one key.
-  const [kind, value] = Object.entries(by)[0] as [keyof typeof WHERE, string | readonly string[]]
-  const rows = await ask<{ view: ViewRow }>(trx, {
+  const [kind, value] = Object.entries(by)[0] as [keyof typeof WHERE, string]
+  return {
     name: `enrolment-views-by-${kind}`,
     text: `${VIEW} WHERE ${WHERE[kind]} ORDER BY e.created_at DESC, e.id DESC`,
     values: [value],
-  })
-  return rows.map(({ view }) => view)
+  }
 }
 
 /** An instant as JavaScript writes it. */

@@ -95,25 +95,27 @@ const INSERT_ENROLMENT = `
 
 /**
  * Takes one place in each session, where there is one: the whole guard against overselling is this
- * condition. Rows are locked in id order, so that two runs cannot wait for each other.
+ * condition. Rows are locked in id order, so that two runs cannot wait for each other; and not
+ * against those who merely refer to them, since everybody who comes here has just written places.
  * Resolves to the sessions that had a place.
  */
 export async function takeSeats(
   trx: AcademyTrx,
   { sessionIds, as }: { sessionIds: readonly string[]; as: 'held' | 'confirmed' },
 ): Promise<string[]> {
-  const isOne = sessionIds.length === 1
+  const [only] = sessionIds
+  const isOne = only !== undefined && sessionIds.length === 1
   const rows = await ask<{ id: string }>(trx, {
     name: `take-seats-${as}-${isOne ? 'in-one' : 'in-order'}`,
     text: isOne
       ? `UPDATE sessions SET ${as} = ${as} + 1
-         WHERE id = ANY($1) AND state = 'planned' AND held + confirmed < capacity RETURNING id`
+         WHERE id = $1 AND state = 'planned' AND held + confirmed < capacity RETURNING id`
       : `WITH in_order AS (
-           SELECT id FROM sessions WHERE id = ANY($1) ORDER BY id FOR UPDATE)
+           SELECT id FROM sessions WHERE id = ANY($1) ORDER BY id FOR NO KEY UPDATE)
          UPDATE sessions s SET ${as} = ${as} + 1 FROM in_order
          WHERE s.id = in_order.id AND s.state = 'planned' AND s.held + s.confirmed < s.capacity
          RETURNING s.id`,
-    values: [[...sessionIds]],
+    values: isOne ? [only] : [[...sessionIds]],
   })
   return rows.map(({ id }) => id)
 }
@@ -125,7 +127,7 @@ export async function returnSeats(
 ): Promise<void> {
   if (sessionIds.length === 0) return
   await trx.raw(
-    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR NO KEY UPDATE)
      UPDATE sessions s SET ${from} = ${from} - 1 FROM in_order WHERE s.id = in_order.id`,
     [[...sessionIds]],
   )
@@ -134,7 +136,7 @@ export async function returnSeats(
 /** Turns held seats into confirmed ones. */
 export async function confirmSeats(trx: AcademyTrx, sessionIds: readonly string[]): Promise<void> {
   await trx.raw(
-    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR UPDATE)
+    `WITH in_order AS (SELECT id FROM sessions WHERE id = ANY(?) ORDER BY id FOR NO KEY UPDATE)
      UPDATE sessions s SET held = held - 1, confirmed = confirmed + 1
      FROM in_order WHERE s.id = in_order.id`,
     [[...sessionIds]],

@@ -15,11 +15,7 @@ type EnrolmentView = Answer<'enrolments.read'>
  */
 export type ShowEnrolments = (
   trx: AcademyTrx,
-  by:
-    | { ids: readonly string[] }
-    | { accountId: string }
-    | { clinicId: string }
-    | { golferId: string },
+  by: { id: string } | { accountId: string } | { clinicId: string } | { golferId: string },
 ) => Promise<EnrolmentView[]>
 
 export type ReadCredit = (trx: AcademyTrx, accountId: string) => Promise<number>
@@ -29,7 +25,7 @@ export function enrolmentHandlers(
   { show, readCredit }: { show: ShowEnrolments; readCredit: ReadCredit },
 ): Handlers {
   const showOne = async (trx: AcademyTrx, id: string): Promise<EnrolmentView> => {
-    const [view] = await show(trx, { ids: [id] })
+    const [view] = await show(trx, { id })
     invariant(view, 'the enrolment to be shown exists')
     return view
   }

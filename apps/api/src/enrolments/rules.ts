@@ -29,7 +29,8 @@ export function sessionsAhead<S extends PricedSession>(sessions: readonly S[], n
 /**
  * Agrees a price for places, net and tax apart, and allocates it to each session once. A run is
  * split over all its sessions and a late joiner pays the shares of those that remain; the tax is
- * worked out on what is paid, and then laid on the sessions by largest remainder.
+ * worked out on what is paid, and then laid on the sessions by largest remainder, so that what each
+ * is worth is its share exactly.
  */
 export function agreePrice(given: {
   wanted:
@@ -47,7 +48,11 @@ export function agreePrice(given: {
   const { netMinor, taxMinor } = tax.mode === 'included' ? taxIncluded(rate) : taxAdded(rate)
   const weights = shares.some((share) => share > 0) ? shares : taken.map(() => 1)
   const nets = allocateByLargestRemainder(netMinor, weights)
-  const taxes = allocateByLargestRemainder(taxMinor, weights)
+  // A price that includes its tax is the share itself, to the cent: the tax is the rest of it.
+  const taxes =
+    tax.mode === 'included'
+      ? shares.map((share, index) => share - (nets[index] ?? 0))
+      : allocateByLargestRemainder(taxMinor, weights)
   return {
     netMinor,
     taxMinor,

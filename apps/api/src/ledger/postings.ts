@@ -174,13 +174,14 @@ export interface GivenUpPlace extends SessionRef {
 }
 
 /**
- * Given up before earning. Money goes back from where it came; what is kept is earned as a late
- * cancellation, and its tax stays owed. `receivable` is for a place that was never paid.
+ * Given up before earning. What was still to be paid at the desk is owed no longer, and the rest goes
+ * back from where it came; what is kept is earned as a late cancellation, and its tax stays owed.
  */
 export function givenUp(
   given: About & {
     places: readonly GivenUpPlace[]
     from: 'provider-clearing' | 'cash-drawer' | 'bank' | 'receivable'
+    noLongerOwedMinor: number
   },
 ): Posting {
   const entries = given.places.flatMap((place) => [
@@ -190,19 +191,33 @@ export function givenUp(
     credit('earned-late-cancellations', place.kept.netMinor, place),
   ])
   const backMinor = given.places.reduce((sum, { back }) => sum + back.netMinor + back.taxMinor, 0)
-  entries.push(credit(given.from, backMinor))
+  entries.push(
+    credit('receivable', given.noLongerOwedMinor),
+    credit(given.from, backMinor - given.noLongerOwedMinor),
+  )
   return posting({ ...pickAbout(given), kind: 'given-up', sourceType: 'enrolment', entries })
 }
 
-/** Called off, and the golfer has the money back. */
+/**
+ * Called off, and the golfer has the money back. Where a part of it was never paid, that part is
+ * owed no longer at once (revision 0), and the rest goes back when it is chosen (revision 1).
+ */
 export function calledOffMoney(
   off: About & {
+    revision: 0 | 1
     place: PlaceAmount
     from: 'provider-clearing' | 'cash-drawer' | 'bank' | 'receivable'
   },
 ): Posting {
   const entries = [...noLongerOwedFor([off.place]), credit(off.from, grossOf([off.place]))]
-  return posting({ ...pickAbout(off), kind: 'called-off-money', sourceType: 'place', entries })
+  const { revision } = off
+  return posting({
+    ...pickAbout(off),
+    kind: 'called-off-money',
+    sourceType: 'place',
+    revision,
+    entries,
+  })
 }
 
 /** Called off, and the academy owes the golfer credit instead. */

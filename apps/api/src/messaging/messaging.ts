@@ -71,8 +71,9 @@ export function makeMessenger(services: Services, provider: MailProvider): Messe
     })
     if (!ready) return
     const { facts, letter } = ready
-    const text = method === 'none' ? null : writeCalendar(calendarOf(services, facts, method))
-    const calendar = text ? { calendar: { method, text } } : {}
+    const entry = method === 'none' ? null : calendarOf(services, facts, method)
+    // Mail programs go by the method of the part, which must be the one that is written inside it.
+    const calendar = entry ? { calendar: { method: entry.method, text: writeCalendar(entry) } } : {}
     const { name } = facts.academy
     const providerMessageId = await post(facts.addressee.email, name, letter, calendar)
     await inAcademy(services.db, academyId, (trx) =>

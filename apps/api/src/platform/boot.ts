@@ -7,6 +7,9 @@ import { makeMetrics } from './metrics'
 import { makeOutbox } from './outbox/outbox'
 import type { Services } from './services'
 
+/** A process that has not stopped by then is ended. */
+const STOP_MS = 15_000
+
 /** Makes what every use case may reach, from the configuration. */
 export function makeServices(config: Config, given: { name: string; clock?: Clock }): Services {
   return {
@@ -54,22 +57,27 @@ export function listen(
  */
 export function stopOnSignal(log: Services['log'], stop: () => Promise<void>): void {
   let isStopping = false
+  let end = (code: number): void => process.exit(code)
   const stopOnce = () => {
     if (isStopping) return
     isStopping = true
-    setTimeout(() => process.exit(1), 15_000).unref()
+    setTimeout(() => end(1), STOP_MS).unref()
     stop().then(
-      () => process.exit(0),
+      () => end(0),
       (err: unknown) => {
         log.error({ err }, 'stopping failed')
-        process.exit(1)
+        end(1)
       },
     )
   }
   process.on('SIGTERM', stopOnce)
   process.on('SIGINT', stopOnce)
   if (process.env['MARRAM_STOP_WITH_PARENT'] === 'yes') {
-    process.stdin.on('end', stopOnce)
+    process.stdin.on('end', () => {
+      // Nobody reads our lines any more: an ordinary exit would wait for ever to write the last ones.
+      end = () => process.kill(process.pid, 'SIGKILL')
+      stopOnce()
+    })
     process.stdin.resume()
   }
 }

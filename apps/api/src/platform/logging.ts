@@ -54,15 +54,22 @@ export function makeLogger(options: { level: string; destination?: DestinationSt
 function describeError(error: unknown): Record<string, unknown> {
   if (!(error instanceof Error)) return { type: typeof error }
   const source = error as Error & Record<string, unknown>
-  const all: Record<string, unknown> = { ...source, type: error.name, stack: error.stack }
+  const database = databaseErrorIn(source)
   // A database error's message can repeat a row's values; its code and constraint say enough.
-  // The model layer wraps it, and puts the whole statement into the message.
-  const { nativeError } = source as { nativeError?: unknown }
-  if (nativeError instanceof Error) return describeError(nativeError)
-  const isDatabase = typeof source['severity'] === 'string'
-  all['message'] = isDatabase ? 'database error' : error.message
-  if (isDatabase) all['stack'] = undefined
+  const all: Record<string, unknown> = database
+    ? { ...database, type: error.name, message: 'database error', stack: undefined }
+    : { ...source, type: error.name, message: error.message, stack: error.stack }
   return Object.fromEntries(KEPT_OF_ERRORS.map((name) => [name, all[name]]))
+}
+
+/** The database's own error: itself, or inside of what the model layer made of it. */
+function databaseErrorIn(error: Record<string, unknown>): Record<string, unknown> | null {
+  const candidates: unknown[] = [error, error['nativeError'], error['cause']]
+  const found = candidates.find(
+    (one) => typeof one === 'object' && one !== null && 'severity' in one,
+  )
+  // It was just seen to be an object.
+  return (found as Record<string, unknown> | undefined) ?? null
 }
 
 export type { Logger }

@@ -2,7 +2,6 @@ import {
   ROUTES,
   SCHEMAS,
   scopeOf,
-  slug,
   type Access,
   type Role,
   type RouteKey,
@@ -18,6 +17,7 @@ import { Download, type Handlers, type RequestContext } from './context'
 import { fieldSentences } from './field-sentences'
 import { signInAs, signOut } from './sign-in-session'
 import { tokenOf } from './request-token'
+import { isSlug } from '../tenancy/slug'
 
 type Schemas = Partial<Record<'params' | 'query' | 'body', ZodType>>
 
@@ -113,11 +113,10 @@ async function makeContext(
 }
 
 function slugOf(request: Request): string | null {
-  const given = request.params['academy']
-  if (typeof given !== 'string') return null
-  // What is not written as an address is nobody's: the database is not asked with it.
-  if (!slug.safeParse(given).success) throw notFound('academy')
-  return given
+  const slug = request.params['academy']
+  if (typeof slug !== 'string') return null
+  if (!isSlug(slug)) throw notFound('academy')
+  return slug
 }
 
 /** Somebody with no staff role here learns nothing, not even that the page exists. */

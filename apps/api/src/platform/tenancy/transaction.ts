@@ -3,6 +3,7 @@ import type pg from 'pg'
 import type { BeginOptions } from '../db/client'
 import { invariant } from '../invariant'
 import { askBetween, type Question } from './ask'
+import { isSlug } from './slug'
 
 declare const inside: unique symbol
 
@@ -14,7 +15,6 @@ export type PlainTrx = Knex.Transaction & { readonly [inside]: 'nothing' }
 
 const academies = new WeakMap<object, string>()
 const UUID = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/
-const SLUG = /^[a-z0-9]+(-[a-z0-9]+)*$/
 
 /** The academy that a transaction is inside of. Throws for one that is inside none. */
 export function academyOf(trx: object | undefined): string {
@@ -51,7 +51,7 @@ export function askPageOf<Row extends pg.QueryResultRow>(
   slug: string,
   question: Question,
 ): Promise<Row[]> {
-  const wanted = SLUG.test(slug) ? slug : ''
+  const wanted = isSlug(slug) ? slug : ''
   const begin =
     `BEGIN READ ONLY; SELECT set_config('app.academy_id', ` +
     `coalesce(find_academy_by_slug('${wanted}')::text, ''), true)`

@@ -1,0 +1,71 @@
+import fc from 'fast-check'
+import { afterAll, expect, it } from 'vitest'
+import { connect } from '../../apps/api/src/platform/db/connect'
+import { signUp } from '../support/builders'
+import { useWorld } from '../support/use-world'
+import type { Step } from './places-model/commands'
+import { checkEnd, checkLaws } from './places-model/laws'
+import * as money from './places-model/payments'
+import * as places from './places-model/places'
+import { rememberNothing } from './places-model/remembered'
+import { makeScene, settleEverything, SESSIONS, type Stage } from './places-model/scene'
+
+const IS_DEEP = process.env['MARRAM_DEEP'] === '1'
+const RUNS = IS_DEEP ? 200 : 6
+const LONGEST = IS_DEEP ? 40 : 24
+const GOLFERS = 4
+
+const world = await useWorld()
+const db = connect({ url: world.database.superuserUrl, poolSize: 1, name: 'tests' })
+afterAll(() => db.destroy())
+
+const who = fc.nat(GOLFERS - 1)
+const pick = fc.nat(3)
+/** The run itself, or one of its sessions. */
+const at = fc.integer({ min: -1, max: SESSIONS - 1 })
+const card = fc.constantFrom(money.GOOD_CARD, money.GOOD_CARD, money.DECLINED_CARD)
+const delivery = fc.constantFrom<money.Delivery[]>('now', 'twice', 'late')
+
+/** What people do here, each as likely as its number says. */
+const STEPS: fc.Arbitrary<Step>[] = [
+  ...times(6, fc.record({ who, at }).map(places.hold)),
+  ...times(3, fc.record({ who, at }).map(places.wait)),
+  ...times(4, fc.record({ pick }).map(money.payNow)),
+  ...times(3, fc.record({ pick, isForgotten: fc.boolean() }).map(money.openPage)),
+  ...times(3, fc.record({ pick, card, delivery }).map(money.payPage)),
+  fc.record({ isReversed: fc.boolean() }).map(money.deliver),
+  ...times(2, fc.record({ pick }).map(money.atDesk)),
+  ...times(2, fc.record({ pick, share: fc.constantFrom(0.5, 1, 1.5) }).map(money.takeCash)),
+  fc.record({ pick }).map(places.letGo),
+  ...times(2, fc.record({ pick, isByStaff: fc.boolean() }).map(places.giveUp)),
+  fc.record({ at: fc.nat(SESSIONS - 1) }).map(places.callOff),
+  fc.record({ choice: fc.constantFrom('credit' as const, 'money' as const) }).map(places.choose),
+  ...times(2, fc.record({ minutes: fc.constantFrom(5, 16, 40, 780, 1_560) }).map(money.passTime)),
+]
+
+it('never takes money without a place, nor sells one twice', { timeout: 1_800_000 }, async () => {
+  const stage = await makeStage()
+  await fc.assert(
+    fc.asyncProperty(fc.commands(STEPS, { maxCommands: LONGEST, size: 'max' }), async (steps) => {
+      const scene = await makeScene(stage)
+      const remembered = rememberNothing()
+      await fc.asyncModelRun(() => ({ model: remembered, real: scene }), steps)
+      await settleEverything(scene)
+      await checkLaws(scene, remembered)
+      await checkEnd(scene)
+      expect(world.takeErrors()).toEqual([])
+    }),
+    { numRuns: RUNS, seed: 20310303, endOnFailure: !IS_DEEP },
+  )
+})
+
+async function makeStage(): Promise<Stage> {
+  const owner = await signUp(world, { name: 'Owner Halloran' })
+  const golfers = []
+  for (let count = 0; count < GOLFERS; count += 1) golfers.push(await signUp(world))
+  return { world, db, owner, golfers }
+}
+
+function times<T>(count: number, one: T): T[] {
+  return Array<T>(count).fill(one)
+}
