@@ -77,17 +77,17 @@ export async function startCheckout(
     cancelUrl: `${back}?from=turning-back`,
     expiresAt: new Date(services.clock.now().getTime() + CHECKOUT_MINUTES * 60_000),
   })
-  const isStillOpen = await inAcademy(services.db, own.academyId, async (trx) => {
+  const page = await inAcademy(services.db, own.academyId, async (trx) => {
     const now = await lockOrder(trx, order.id)
-    if (now?.state !== 'open') return false
+    if (now?.state !== 'open') return null
+    // Of two presses at once each made a page: the one that was kept first takes the money.
+    if (now.checkoutUrl) return now.checkoutUrl
     await updateOrder(trx, order.id, { checkoutId: checkout.id, checkoutUrl: checkout.url })
-    return true
+    return checkout.url
   })
-  if (!isStillOpen) {
-    await provider.expireCheckout(account, checkout.id)
-    throw holdLapsed()
-  }
-  return checkout.url
+  if (page !== checkout.url) await provider.expireCheckout(account, checkout.id)
+  if (!page) throw holdLapsed()
+  return page
 }
 
 async function begin(services: Services, trx: AcademyTrx, own: Own) {
