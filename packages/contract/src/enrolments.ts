@@ -126,7 +126,12 @@ export const enrolmentSchemas = {
     response: z.object({ enrolments: z.array(enrolmentView) }),
   },
   'waitlist.join': {
-    body: z.strictObject({ ...what, golferId: id }),
+    body: z.strictObject({
+      ...what,
+      /** Left out for oneself. */
+      golferId: id.optional(),
+      handicap: handicap.nullable().optional(),
+    }),
     response: waitlistView,
   },
   'waitlist.leave': { params: z.strictObject({ entryId: id }), response: z.null() },

@@ -49,7 +49,7 @@ export const golferSchemas = {
   'golfers.mine': { response: z.object({ golfers: z.array(ownGolferView) }) },
   'golfers.add-dependant': { body: dependantFields, response: ownGolferView },
   'golfers.list': {
-    query: z.strictObject({ search: z.string().max(80).optional() }),
+    query: z.strictObject({ search: prose(80).optional() }),
     response: z.object({ golfers: z.array(golferListItem) }),
   },
   'golfers.enter': {

@@ -1,3 +1,4 @@
+import { offerOpenedPlaces } from '../enrolments/waitlist'
 import type { Handlers } from '../platform/outbox/events'
 import type { Services } from '../platform/services'
 import { chooseByDefault, owePlacesOfSession } from './called-off'
@@ -12,6 +13,7 @@ export function checkoutListeners(services: Services, provider: PaymentsProvider
   return {
     'session.called-off': (event) => owePlacesOfSession(services, event),
     'session.changed': (event) => followMovedSession(services, event),
+    'places.opened': (event) => offerOpenedPlaces(services, event),
     'register.closed': (event) => earnSession(services, event),
     'register.reopened': (event) => unearnSession(services, event),
     'hold.lapsed': (event) => lapseHold(services, provider, event),

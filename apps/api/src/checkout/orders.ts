@@ -19,6 +19,7 @@ import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { oweForCalledOff } from './called-off'
 import type { Order } from './models'
+import { findOpenPage, paidMeanwhile } from './open-page'
 import type { PaymentsProvider } from './provider'
 import {
   insertOrder,
@@ -42,7 +43,8 @@ const CHECKOUT_MINUTES = 31
 
 /**
  * Begins payment of a hold on the provider's own page. Resolves to that page's address; a second
- * press gives the same one. Throws `hold-lapsed` and `payments-not-connected`.
+ * press gives the same one while it is open there. Throws `hold-lapsed` and
+ * `payments-not-connected`.
  */
 export async function startCheckout(
   services: Services,
@@ -87,34 +89,6 @@ export async function startCheckout(
   if (!page) throw holdLapsed()
   return page
 }
-
-/**
- * The page of the last attempt, while it can be paid on. An offer stands for hours and the page for
- * half an hour: one that has ended is forgotten, and one that was paid on meanwhile is settled.
- */
-async function findOpenPage(
-  services: Services,
-  provider: PaymentsProvider,
-  { academyId, account, order }: { academyId: string; account: string; order: Order },
-): Promise<string | null> {
-  const { id, checkoutId, checkoutUrl } = order
-  if (!checkoutId) return null
-  const checkout = await provider.readCheckout(account, checkoutId)
-  if (checkout.state === 'open') return checkoutUrl
-  if (checkout.state === 'paid') {
-    await settlePaidCheckout(services, provider, { academyId, account, checkout })
-    throw paidMeanwhile()
-  }
-  await inAcademy(services.db, academyId, async (trx) => {
-    const now = await lockOrder(trx, id)
-    if (now?.checkoutId !== checkoutId) return
-    await updateOrder(trx, id, { checkoutId: null, checkoutUrl: null })
-  })
-  return null
-}
-
-const paidMeanwhile = () =>
-  new Problem('already-decided', 'Your payment has just come in: the place is yours.')
 
 async function begin(services: Services, trx: AcademyTrx, own: Own) {
   const enrolment = await lockOwnEnrolment(trx, own)

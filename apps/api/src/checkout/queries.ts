@@ -32,12 +32,9 @@ export async function updateOrder(
 
 /** Resolves to false when this payment of the provider's was written down before. */
 export async function insertPayment(trx: AcademyTrx, row: Partial<Payment>): Promise<boolean> {
-  const written = await Payment.query(trx)
-    .insert(row)
-    .onConflict(['academy_id', 'provider_payment'])
-    .ignore()
-    .returning('academyId')
-  return isWritten(written)
+  await Payment.query(trx).insert(row).onConflict(['academy_id', 'provider_payment']).ignore()
+  // The answer of an insert that met a conflict is the row that was given, as if it were there.
+  return (await Payment.query(trx).where({ id: row.id }).resultSize()) === 1
 }
 
 export async function listPaymentsOf(
@@ -203,9 +200,4 @@ export async function insertProviderEvent(
     .ignore()
     .returning('event_id')
   return written.length === 1
-}
-
-/** An insert that met a conflict answers with nothing of the row. */
-function isWritten(answer: object): boolean {
-  return 'academyId' in answer && answer.academyId !== undefined
 }

@@ -30,7 +30,7 @@ import {
   updateClinic,
   updateSession,
 } from './queries'
-import { checkPrices, describeRule, isSameSchedule } from './rules'
+import { checkLevel, checkPrices, describeRule, isSameSchedule } from './rules'
 import { viewSessions } from './views'
 
 type ClinicView = Answer<'clinics.read'>
@@ -42,6 +42,7 @@ export async function draftClinic(
   { academyId, wanted }: { academyId: string; wanted: Wanted },
 ): Promise<ClinicView> {
   checkPrices(wanted)
+  checkLevel(wanted)
   return inAcademy(db, academyId, async (trx) => {
     const now = clock.now()
     const id = newId(now)
@@ -101,10 +102,11 @@ async function freeSlug(trx: AcademyTrx, title: string): Promise<string> {
  * place; afterwards sessions are changed one by one, so that nobody's evening moves unnoticed.
  */
 export async function changeClinic(
-  { db, clock }: Services,
+  { db, clock, outbox }: Services,
   { academyId, clinicId, wanted }: { academyId: string; clinicId: string; wanted: Wanted },
 ): Promise<ClinicView> {
   checkPrices(wanted)
+  checkLevel(wanted)
   return inAcademy(db, academyId, (trx) =>
     sayClashes(async () => {
       const clinic = await lockClinic(trx, clinicId)
@@ -131,6 +133,9 @@ export async function changeClinic(
       } else {
         await updateClinic(trx, clinicId, fields)
         if (wanted.capacity !== clinic.capacity) await setCapacity(trx, sessions, wanted.capacity)
+        if (wanted.capacity > clinic.capacity) {
+          await outbox.emit(trx, 'places.opened', { academyId, clinicId })
+        }
       }
       return readView(trx, clinicId)
     }),
@@ -152,11 +157,11 @@ async function setCapacity(
 
 /** Puts a clinic on the page, which gives it its coaches and bays, or takes it off again. */
 export async function publishClinic(
-  { db }: Services,
+  { db, outbox }: Services,
   wanted: { academyId: string; clinicId: string; isPublished: boolean },
 ): Promise<ClinicView> {
-  const { clinicId, isPublished } = wanted
-  return inAcademy(db, wanted.academyId, (trx) =>
+  const { academyId, clinicId, isPublished } = wanted
+  return inAcademy(db, academyId, (trx) =>
     sayClashes(async () => {
       const clinic = await lockClinic(trx, clinicId)
       if (!clinic) throw notFound('clinic')
@@ -164,7 +169,10 @@ export async function publishClinic(
       if (isNow !== isPublished) {
         await updateClinic(trx, clinicId, { state: isPublished ? 'published' : 'withdrawn' })
         // A withdrawn clinic still holds the sessions that golfers have places in.
-        if (isPublished) await setClinicLive(trx, { clinicId, isLive: true })
+        if (isPublished) {
+          await setClinicLive(trx, { clinicId, isLive: true })
+          await outbox.emit(trx, 'places.opened', { academyId, clinicId })
+        }
       }
       return readView(trx, clinicId)
     }),

@@ -22,6 +22,25 @@ export function checkPrices({ saleMode, payMode, runPriceMinor, dropInPriceMinor
   }
 }
 
+interface Levelled {
+  ageMin: number | null
+  ageMax: number | null
+  handicapMin: number | null
+  handicapMax: number | null
+}
+
+/** A clinic is for somebody: its ranges are not the wrong way round. Throws `invalid-fields`. */
+export function checkLevel({ ageMin, ageMax, handicapMin, handicapMax }: Levelled): void {
+  if (ageMin !== null && ageMax !== null && ageMin > ageMax) {
+    const sentence = 'The youngest age is above the oldest.'
+    throw new Problem('invalid-fields', sentence, { ageMax: sentence })
+  }
+  if (handicapMin !== null && handicapMax !== null && handicapMin > handicapMax) {
+    const sentence = 'The lowest handicap is above the highest.'
+    throw new Problem('invalid-fields', sentence, { handicapMax: sentence })
+  }
+}
+
 interface Schedule {
   venueId: string
   startsOnLocal: string

@@ -57,6 +57,7 @@ export async function changeSession(
       const venue = clinic && (await findVenue(trx, clinic.venueId))
       if (!clinic || !venue) throw notFound('clinic')
       const times = newTimes(session, change, clinic.zone)
+      refuseThePast({ session, times, now: services.clock.now() })
       const parts = (await listSessionParts(trx, [sessionId])).get(sessionId)
       const areas =
         change.areas ??
@@ -76,6 +77,9 @@ export async function changeSession(
       await setSessionParts(trx, { sessionId, ...times, coachIds, areas, isLive })
       const { academyId } = reach
       await services.outbox.emit(trx, 'session.changed', { academyId, sessionId })
+      if (capacity > session.capacity) {
+        await services.outbox.emit(trx, 'places.opened', { academyId, clinicId: clinic.id })
+      }
       return viewOne(trx, sessionId)
     }),
   )
@@ -88,6 +92,14 @@ function refuseEnded(session: Session): void {
   if (session.registerState === 'closed') {
     throw new Problem('register-closed', 'The register of this session is closed.')
   }
+}
+
+/** A session that is ahead stays ahead; the time of one that has been held may be put right. */
+function refuseThePast(given: { session: Session; times: { startsAt: Date }; now: Date }): void {
+  const { session, times, now } = given
+  if (session.startsAt <= now || times.startsAt > now) return
+  const sentence = 'This is in the past.'
+  throw new Problem('invalid-fields', sentence, { startsOnLocal: sentence })
 }
 
 function newTimes(

@@ -91,8 +91,10 @@ export async function acceptInvitation(
     { secret, accountId },
     async (trx, { role, coachId }) => {
       if (role !== 'coach' || (await findCoachOf(trx, accountId))) return
-      if (coachId) {
-        await updateCoach(trx, coachId, { accountId })
+      const [invitedAs] = coachId ? await findCoaches(trx, [coachId]) : []
+      // Another invitation for the same coach may have been taken up before this one.
+      if (invitedAs?.accountId === null) {
+        await updateCoach(trx, invitedAs.id, { accountId })
         return
       }
       const account = await findAccountById(trx, accountId)

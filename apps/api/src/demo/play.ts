@@ -178,7 +178,7 @@ async function wait(
     seat.child?.golferId ??
     (await inAcademy(services.db, academyId, (trx) => ensureOwnGolfer(services, trx, { person })))
       .id
-  await joinWaitlist(services, { academyId, accountId: person.id, wanted: { ...what, golferId } })
+  await joinWaitlist(services, { academyId, person, wanted: { ...what, golferId } })
 }
 
 function planSecondThoughts(

@@ -51,8 +51,8 @@ export function enrolmentHandlers(
       })
     },
     'waitlist.join': ({ body }, context) => {
-      const { academyId, account } = asStaff(context)
-      return joinWaitlist(services, { academyId, accountId: account.id, wanted: body })
+      const { academyId, account: person } = asStaff(context)
+      return joinWaitlist(services, { academyId, person, wanted: body })
     },
     'waitlist.leave': async ({ params }, context) => {
       const { academyId, account } = asStaff(context)

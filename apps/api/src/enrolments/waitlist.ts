@@ -1,6 +1,7 @@
-import type { Answer } from '@marram/contract'
+import type { Answer, Parsed } from '@marram/contract'
+import { joinAsGolfer } from '../academies/academies'
 import { listSessionsOf } from '../clinics/clinics'
-import { findOwnGolfer } from '../golfers/golfers'
+import { ensureOwnGolfer, findOwnGolfer, type Golfer, type Person } from '../golfers/golfers'
 import { Problem, notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import { invariant } from '../platform/invariant'
@@ -25,13 +26,15 @@ type WaitlistView = Answer<'waitlist.join'>
 /** Joins the waitlist of a full run or session. Joining twice keeps the first place in it. */
 export async function joinWaitlist(
   services: Services,
-  given: { academyId: string; accountId: string; wanted: WantedPlaces & { golferId: string } },
+  given: { academyId: string; person: Person; wanted: Parsed<'waitlist.join', 'body'> },
 ): Promise<WaitlistView> {
-  const { accountId, wanted } = given
+  const { person, wanted } = given
+  const accountId = person.id
   return inAcademy(services.db, given.academyId, async (trx) => {
     const now = services.clock.now()
-    const { golferId, clinicId, sessionId = null } = wanted
-    const golfer = await findOwnGolfer(trx, { golferId, accountId })
+    const { clinicId, sessionId = null } = wanted
+    const golfer = await whoWaits(services, trx, { person, wanted })
+    const golferId = golfer.id
     const onSale = await findOnSale(trx, wanted, now)
     checkFit(golfer, onSale)
     const sessionIds = onSale.taken.map(({ id }) => id)
@@ -53,6 +56,18 @@ export async function joinWaitlist(
     invariant(row, 'the entry was just written')
     return viewEntry(row)
   })
+}
+
+/** Somebody who is new here waits as well as anybody: they become a golfer by it. */
+async function whoWaits(
+  services: Services,
+  trx: AcademyTrx,
+  { person, wanted }: { person: Person; wanted: Parsed<'waitlist.join', 'body'> },
+): Promise<Golfer> {
+  const { golferId, handicap } = wanted
+  if (golferId) return findOwnGolfer(trx, { golferId, accountId: person.id })
+  await joinAsGolfer(trx, { accountId: person.id, now: services.clock.now() })
+  return ensureOwnGolfer(services, trx, { person, ...(handicap === undefined ? {} : { handicap }) })
 }
 
 export async function leaveWaitlist(
@@ -92,6 +107,16 @@ export async function offerFreedPlaces(
     if (!(await offer(services, trx, { academyId, entry, needed, now }))) continue
     for (const id of needed) free.set(id, (free.get(id) ?? 0) - 1)
   }
+}
+
+/** More places were opened, or the clinic is on the page again: who waits comes first. */
+export async function offerOpenedPlaces(
+  services: Services,
+  { academyId, clinicId }: { academyId: string; clinicId: string },
+): Promise<void> {
+  await inAcademy(services.db, academyId, (trx) =>
+    offerFreedPlaces(services, trx, { academyId, clinicId }),
+  )
 }
 
 async function offer(

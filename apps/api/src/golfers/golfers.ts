@@ -1,7 +1,7 @@
 import type { Answer, Parsed } from '@marram/contract'
 import { readAcademy } from '../academies/academies'
 import { findCoachOf } from '../coaches/coaches'
-import { notFound } from '../platform/errors'
+import { Problem, notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
@@ -9,6 +9,7 @@ import { localDayOf } from '../platform/local-day'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import type { Golfer } from './models'
 import {
+  findDependant,
   findGolfer,
   findGolferOfAccount,
   findUnclaimedGolfer,
@@ -76,26 +77,33 @@ export async function ensureOwnGolfer(
   return golfer
 }
 
-/** Adds somebody whom the person looks after, with the consent given in the same step. */
+/**
+ * Adds somebody whom the person looks after, with the consent given in the same step. The same child
+ * sent again, as after an answer that never arrived, is the one that was added then.
+ */
 export async function addDependant(
   { clock }: Services,
   trx: AcademyTrx,
   { guardianId, dependant }: { guardianId: string; dependant: Dependant },
 ): Promise<Golfer> {
   const now = clock.now()
+  const { name, bornOn } = dependant
+  const had = await findDependant(trx, { guardianAccountId: guardianId, name, bornOn })
+  if (had) return had
+  const { safeguarding, zone } = await readAcademy(trx)
+  if (bornOn > localDayOf(now, zone)) throw bornLater()
   const id = newId(now)
   await insertGolfer(trx, {
     id,
     guardianAccountId: guardianId,
-    name: dependant.name,
-    bornOn: dependant.bornOn,
+    name,
+    bornOn,
     handicap: dependant.handicap,
     handicapOn: dependant.handicap === null ? null : now.toISOString().slice(0, 10),
     emergencyName: dependant.emergencyContact.name,
     emergencyPhone: dependant.emergencyContact.phone,
     createdAt: now,
   })
-  const { safeguarding } = await readAcademy(trx)
   await recordConsent(trx, {
     golferId: id,
     kind: 'takes-part',
@@ -106,6 +114,13 @@ export async function addDependant(
   const golfer = await findGolfer(trx, id)
   invariant(golfer, 'the dependant was just written')
   return golfer
+}
+
+const bornLater = () => {
+  const sentence = 'This day is still to come.'
+  // The same fields stand alone in one form and inside another.
+  const fields = { bornOn: sentence, 'for.dependant.bornOn': sentence }
+  return new Problem('invalid-fields', sentence, fields)
 }
 
 export async function recordConsent(

@@ -14,6 +14,13 @@ export async function findGolferOfAccount(
   return Golfer.query(trx).where({ accountId }).first()
 }
 
+export async function findDependant(
+  trx: AcademyTrx,
+  who: { guardianAccountId: string; name: string; bornOn: string },
+): Promise<Golfer | undefined> {
+  return Golfer.query(trx).where(who).first()
+}
+
 /** One whom staff entered with this address, and who has no account or guardian yet. */
 export async function findUnclaimedGolfer(
   trx: AcademyTrx,

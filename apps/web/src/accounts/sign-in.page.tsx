@@ -11,6 +11,7 @@ import { Field, focusFirstWrong } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { homeOf } from './home'
 import { useSignIn } from './queries'
+import { returnPath } from './return-path'
 
 const GOOGLE_SAID: Record<string, string> = {
   refused: 'Google did not sign you in. Nothing was changed; try again or use your e-mail.',
@@ -26,14 +27,14 @@ export default function SignInPage() {
   const [password, setPassword] = useState('')
   const [problem, setProblem] = useState<ApiProblem | null>(null)
   const signIn = useSignIn()
-  const to = query.get('to')
+  const to = returnPath(query.get('to'))
   const google = GOOGLE_SAID[query.get('google') ?? '']
 
   const go = async (body: { email: string; password: string }) => {
     setProblem(null)
     try {
       const session = await signIn.mutateAsync(body)
-      await navigate(to?.startsWith('/') ? to : homeOf(session))
+      await navigate(to ?? homeOf(session))
     } catch (error) {
       if (error instanceof ApiProblem) setProblem(error)
       focusFirstWrong(form.current)

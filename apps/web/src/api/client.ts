@@ -55,8 +55,8 @@ async function send(
   path: string,
   { body, signal }: { body?: unknown; signal?: AbortSignal },
 ): Promise<Response> {
-  if (method !== 'GET' && !tokenCookie()) await fetch(ROUTES['session.read'].path)
   try {
+    if (method !== 'GET' && !tokenCookie()) await fetch(ROUTES['session.read'].path)
     return await fetch(path, {
       method,
       headers: {

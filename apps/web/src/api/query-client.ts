@@ -1,11 +1,23 @@
-import { QueryClient } from '@tanstack/react-query'
+import { MutationCache, QueryClient } from '@tanstack/react-query'
 import { ApiProblem } from './problem'
 
 const MOST_RETRIES = 2
 
 export const queryClient = new QueryClient({
+  mutationCache: new MutationCache({
+    // The sign-in has ended elsewhere: asked anew, so that a form can offer it beside what is typed.
+    onError: (error) => {
+      if (!(error instanceof ApiProblem) || error.code !== 'not-signed-in') return
+      void queryClient.invalidateQueries({ queryKey: ['', 'session.read'] })
+    },
+  }),
   defaultOptions: {
+    // Without a connection a press fails and says so. The library's own way is to wait, and to send
+    // a payment or a giving-up by itself, minutes later, when nobody expects it any more.
+    mutations: { networkMode: 'always' },
     queries: {
+      networkMode: 'always',
+      refetchOnReconnect: true,
       staleTime: 5_000,
       // A refusal is an answer; only a broken line is worth another try.
       retry: (count, error) =>

@@ -78,6 +78,8 @@ function Editor(props: {
   const navigate = useNavigate()
   const [draft, setDraft] = useState(props.first)
   const [problem, setProblem] = useState<ApiProblem | null>(null)
+  // Kept by an earlier press whose publishing was refused: the next one changes it.
+  const [keptId, setKeptId] = useState(clinic?.id)
   const title = clinic ? `Change ${clinic.title}` : 'New clinic'
   useTitle(title)
 
@@ -86,13 +88,14 @@ function Editor(props: {
     if (!written.ok) {
       throw new ApiProblem({ code: 'invalid-fields', status: 422, detail: written.sentence })
     }
-    const saved = clinic
+    const saved = keptId
       ? await call('clinics.change', {
           academy: slug,
-          params: { clinicId: clinic.id },
+          params: { clinicId: keptId },
           body: written.body,
         })
       : await call('clinics.draft', { academy: slug, body: written.body })
+    setKeptId(saved.id)
     if (isPublished === null) return saved
     return call('clinics.publish', {
       academy: slug,
@@ -165,7 +168,7 @@ function Editor(props: {
         draft={draft}
         onChange={(change) => setDraft((had) => ({ ...had, ...change }))}
         errors={problem?.fields ?? {}}
-        {...(clinic ? { clinicId: clinic.id } : {})}
+        {...(keptId ? { clinicId: keptId } : {})}
       />
     </main>
   )

@@ -188,9 +188,10 @@ export function TakePlace({ page, format }: { page: ClinicPage; format: Format }
             academy={academy.slug}
             clinicId={clinic.id}
             {...(what === 'session' ? { sessionId } : {})}
-            golfers={golfers.data?.golfers ?? []}
             who={who}
-            isSignedIn={account !== null}
+            handicap={handicap}
+            signIn={account ? null : signIn.submit}
+            onRefused={setProblem}
             waiting={clinic.waiting}
           />
         ) : (

@@ -1,9 +1,8 @@
 import { useState } from 'react'
 import { useNavigate } from 'react-router'
-import { sentenceOf } from '../api/problem'
+import { ApiProblem } from '../api/problem'
 import { paths } from '../paths'
 import { Button } from '../ui/button'
-import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
 import { useJoinWaitlist } from './queries'
 
@@ -12,30 +11,36 @@ export function WaitlistOffer(props: {
   academy: string
   clinicId: string
   sessionId?: string
-  golfers: readonly { id: string; isMe: boolean }[]
   who: string
-  isSignedIn: boolean
+  /** As it was typed, for somebody who waits themselves. */
+  handicap: string
+  /** Signs somebody in first who is not; null for somebody who is. */
+  signIn: (() => Promise<unknown>) | null
   waiting: number
+  onRefused: (problem: ApiProblem | null) => void
 }) {
-  const { academy, clinicId, sessionId, golfers, who, waiting } = props
+  const { academy, clinicId, sessionId, who, waiting } = props
   const navigate = useNavigate()
   const join = useJoinWaitlist(academy)
-  const [error, setError] = useState('')
-  const golferId = who === 'me' ? golfers.find(({ isMe }) => isMe)?.id : who
-  const ready = props.isSignedIn && golferId !== undefined && who !== 'new'
+  const [isBusy, setIsBusy] = useState(false)
 
   const press = async () => {
-    if (!golferId) return
+    props.onRefused(null)
+    setIsBusy(true)
     try {
+      await props.signIn?.()
       const entry = await join.mutateAsync({
         clinicId,
-        golferId,
         ...(sessionId ? { sessionId } : {}),
+        ...(who === 'me' ? handicapOf(props.handicap) : { golferId: who }),
       })
       toast(`On the waitlist, number ${entry.position}.`)
       await navigate(paths.my(academy))
     } catch (caught) {
-      setError(sentenceOf(caught))
+      if (!(caught instanceof ApiProblem)) throw caught
+      props.onRefused(caught)
+    } finally {
+      setIsBusy(false)
     }
   }
 
@@ -46,14 +51,13 @@ export function WaitlistOffer(props: {
         {waiting > 0 ? `${waiting} ${waiting === 1 ? 'golfer waits' : 'golfers wait'}. ` : ''}
         Who waits is offered a freed place by mail, first come, first offered.
       </p>
-      {error && <Notice kind="flag">{error}</Notice>}
       <Button
         kind="go"
         isWide
         isBig
-        waiting={join.isPending && 'Joining…'}
+        waiting={isBusy && 'Joining…'}
         onClick={() => void press()}
-        reason={ready ? undefined : waitReason(props.isSignedIn, who)}
+        reason={who === 'new' ? 'Add them under Family first, then they can wait too.' : undefined}
       >
         Join the waitlist
       </Button>
@@ -61,9 +65,6 @@ export function WaitlistOffer(props: {
   )
 }
 
-function waitReason(isSignedIn: boolean, who: string): string {
-  if (!isSignedIn) return 'Sign in first, so that we know whom to write to.'
-  return who === 'new'
-    ? 'Add them under Family first, then they can wait too.'
-    : 'Take part in a clinic or add yourself under Family first.'
+function handicapOf(typed: string): { handicap?: number } {
+  return typed.trim() === '' ? {} : { handicap: Number(typed.replace(',', '.')) }
 }

@@ -21,7 +21,11 @@ export function answerProblems({ log }: Pick<Services, 'log'>): ErrorRequestHand
 
 export function sendProblem(response: Response, problem: Problem, requestId: string): void {
   const document = toProblemDocument(problem, requestId)
-  response.status(document.status).type('application/problem+json').send(JSON.stringify(document))
+  response
+    .status(document.status)
+    .set('Cache-Control', 'no-store')
+    .type('application/problem+json')
+    .send(JSON.stringify(document))
 }
 
 function asProblem(error: unknown): Problem {
@@ -31,6 +35,7 @@ function asProblem(error: unknown): Problem {
   if (type === 'encoding.unsupported') {
     return new Problem('wrong-content-type', 'Please send it without compression.')
   }
+  if (status === 404) return notFound('page')
   if (typeof status === 'number' && status >= 400 && status < 500) {
     return new Problem('bad-request', 'The request could not be read.')
   }

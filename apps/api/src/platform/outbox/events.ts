@@ -12,6 +12,8 @@ export interface OutboxEvents {
   /** Places of a called-off session have ended, and what is owed for them stands. */
   'session.owed': { academyId: string; sessionId: string }
   'session.changed': { academyId: string; sessionId: string }
+  /** More places than before may be free in a clinic that golfers wait for. */
+  'places.opened': { academyId: string; clinicId: string }
   'register.closed': { academyId: string; sessionId: string; revision: number }
   'register.reopened': { academyId: string; sessionId: string; revision: number }
   'hold.lapsed': { academyId: string; enrolmentId: string }
@@ -33,6 +35,7 @@ export const LISTENERS = {
   'session.called-off': ['checkout'],
   'session.owed': ['messaging'],
   'session.changed': ['checkout', 'messaging'],
+  'places.opened': ['checkout'],
   'register.closed': ['checkout'],
   'register.reopened': ['checkout'],
   'hold.lapsed': ['checkout'],

@@ -1,0 +1,36 @@
+import { expect, it } from 'vitest'
+import { openAcademy, signUp } from '../support/builders'
+import { useWorld } from '../support/use-world'
+
+const world = await useWorld()
+
+it('holds one place for a child whose form is sent twice', async () => {
+  const academy = await openAcademy(world)
+  const params = { academy: academy.slug }
+  const guardian = await signUp(world)
+  const dependant = {
+    name: 'Oona Tarrant',
+    bornOn: '2020-05-02',
+    handicap: null,
+    emergencyContact: { name: 'Bríd Tarrant', phone: '+353 1 555 0100' },
+    hasConsent: true,
+  } as const
+  const body = {
+    clinicId: academy.clinic.id,
+    for: { kind: 'new', dependant },
+    hasAcceptedWaiver: true,
+  } as const
+
+  const first = await guardian.person.must('enrolments.hold', { params, body })
+  const again = await guardian.person.must('enrolments.hold', { params, body })
+
+  expect(again.id).toBe(first.id)
+  expect((await guardian.person.must('golfers.mine', { params })).golfers).toHaveLength(1)
+})
+
+it('refuses a NUL in an address and in a search', async () => {
+  const { slug, owner } = await openAcademy(world)
+  expect((await owner.person.send('GET', '/api/academies/%00/page')).status).toBe(404)
+  const search = await owner.person.send('GET', `/api/academies/${slug}/golfers?search=%00`)
+  expect(search.status).toBe(422)
+})
