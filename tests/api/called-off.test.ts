@@ -119,9 +119,11 @@ it.each([
   { moment: 'a millisecond later', offsetMs: 1, isOver: true },
 ])('takes the academy’s own choice only afterwards: $moment', async ({ offsetMs, isOver }) => {
   const evening = await callOffEvening()
-  const { owed } = await owedPlace(evening)
+  const { id: placeId, owed } = await owedPlace(evening)
   world.clock.moveTo(new Date(Date.parse(owed.chooseBy) + offsetMs))
   await world.sweep()
+  // Told of it, too early or once more, the listener looks at the time itself.
+  await tellAgain(world, evening.academy, 'choice.due', { placeId })
   const choice = isOver ? 'credit' : null
   expect((await owedPlace(evening)).owed).toMatchObject({ choice, isSettled: isOver })
 
