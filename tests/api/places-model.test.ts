@@ -80,6 +80,19 @@ it.each([0, 1, 2])(
   },
 )
 
+it.each([
+  { how: 'by card', settle: money.payNow({ pick: 0 }) },
+  { how: 'at the desk', settle: money.atDesk({ pick: 0 }) },
+])('does not bring back a place paid $how and given up, when it is paid again', async (given) => {
+  await run([
+    places.hold({ who: 0, at: 0 }),
+    money.openPage({ pick: 0, isForgotten: true }),
+    given.settle,
+    places.giveUp({ pick: 0, isByStaff: false }),
+    money.payPage({ pick: 0, card: money.GOOD_CARD, delivery: 'now' }),
+  ])
+})
+
 async function makeStage(): Promise<Stage> {
   const owner = await signUp(world, { name: 'Owner Halloran' })
   const golfers = []

@@ -186,8 +186,8 @@ export async function confirmHold(
 }
 
 /**
- * Takes the places of a lapsed hold again, for a payment that came late. All of them or none:
- * resolves to false when any is gone.
+ * Takes the places of a hold that has ended again, for a payment that came late. All of them or none:
+ * resolves to false when any is gone, or when they were confirmed and then given up or called off.
  */
 export async function retakeLapsed(
   services: Services,
@@ -195,7 +195,8 @@ export async function retakeLapsed(
   { academyId, enrolmentId }: { academyId: string; enrolmentId: string },
 ): Promise<boolean> {
   const enrolment = await lockEnrolment(trx, enrolmentId)
-  if (enrolment?.state !== 'cancelled') return false
+  const wasHold = enrolment?.endedBecause === 'lapsed' || enrolment?.endedBecause === 'let-go'
+  if (!wasHold) return false
   const places = await listPlaces(trx, enrolmentId)
   const sessionIds = places.map(({ sessionId }) => sessionId)
   if (await findActiveEnrolment(trx, { golferId: enrolment.golferId, sessionIds })) return false
