@@ -97,7 +97,8 @@ export const takeCash = ({ pick, share }: { pick: number; share: number }): Step
     const params = { ...scene.params, enrolmentId }
     const body = { amountMinor }
     const reply = await scene.owner.person.call('checkout.take-cash', { params, body })
-    if (amountMinor > owedMinor) return expect(reply.problem?.code).toBe('invalid-fields')
+    // What is owed is taken whole or not at all.
+    if (amountMinor !== owedMinor) return expect(reply.problem?.code).toBe('invalid-fields')
     expect(reply.status, reply.text).toBeLessThan(400)
     deskMinor.set(enrolmentId, owedMinor - amountMinor)
   })

@@ -10,7 +10,7 @@ export function GalleryCard() {
   return (
     <>
       <div className="card">
-        <table className="sc">
+        <table className="sc att rfold">
           <thead>
             <tr>
               <th scope="col">Golfer</th>
