@@ -9,6 +9,7 @@ import {
   type OpenAcademy,
   type SignedUp,
 } from '../support/builders'
+import { tellAgain } from '../support/outbox'
 import { useWorld } from '../support/use-world'
 
 const world = await useWorld()
@@ -197,6 +198,8 @@ describe('what is owed', () => {
     const evening = await calledOff()
     world.clock.moveTo(new Date(evening.chooseBy.getTime() + ms))
     await world.sweep()
+    // Told too early, the listener looks at the clock itself.
+    await tellAgain(world, evening.academy, 'choice.due', { placeId: evening.placeId })
 
     expect((await placeOf(evening)).owed).toMatchObject({ choice, isSettled: choice !== null })
   })

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { readBooks } from '../support/books'
 import { clinicFields } from '../support/builders'
+import { tellAgain } from '../support/outbox'
 import { useWorld } from '../support/use-world'
 import { checkoutOf, holdRun, justAfter, readEnrolment, startPaying } from './payment/paying'
 
@@ -122,6 +123,8 @@ describe('a hold lapses', () => {
     const checkout = await startPaying(hold)
     world.clock.moveTo(new Date(justAfter(hold).getTime() + ms))
     await world.sweep()
+    // Told too early, the listener looks at the clock itself.
+    await tellAgain(world, hold.academy, 'hold.lapsed', { enrolmentId: hold.held.id })
 
     expect((await readEnrolment(hold)).state).toBe(state)
     const isOpen = world.payments.state.checkouts[checkout]?.status === 'open'
