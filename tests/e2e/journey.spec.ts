@@ -177,7 +177,7 @@ async function giveBack(page: Page, product: Product, { slug }: { slug: string }
   await expect(page.getByText(/goes back/)).toBeHidden()
   await product.drain()
   await page.goto(`/${slug}/desk/money`)
-  // The seven sessions ahead: 96.32 net and 8.67 of the 9.91 tax.
-  await expect(page.getByRole('button', { name: /^Refunded in 2031: €104.99/ })).toBeVisible()
+  // The seven sessions ahead, of eight that are worth 15.00 each.
+  await expect(page.getByRole('button', { name: /^Refunded in 2031: €105.00/ })).toBeVisible()
   await lookOver(page)
 }
