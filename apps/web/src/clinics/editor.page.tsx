@@ -14,8 +14,9 @@ import { PageHead } from '../ui/page-head'
 import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
 import { toast } from '../ui/toast'
 import { ClinicEditor } from './clinic-editor'
-import { bodyOf, draftOf, newDraft, type Draft } from './draft'
+import { draftOf, newDraft, type Draft } from './draft'
 import { clinicQuery, type Clinic } from './queries'
+import { useSaveClinic } from './save-clinic'
 
 /** A new clinic, or one that is changed. */
 export default function EditorPage() {
@@ -78,38 +79,17 @@ function Editor(props: {
   const navigate = useNavigate()
   const [draft, setDraft] = useState(props.first)
   const [problem, setProblem] = useState<ApiProblem | null>(null)
-  // Kept by an earlier press whose publishing was refused: the next one changes it.
-  const [keptId, setKeptId] = useState(clinic?.id)
   const title = clinic ? `Change ${clinic.title}` : 'New clinic'
   useTitle(title)
 
-  const save = useAcademyMutation(slug, async (isPublished: boolean | null) => {
-    const written = bodyOf(draft, academy.currency)
-    if (!written.ok) {
-      throw new ApiProblem({ code: 'invalid-fields', status: 422, detail: written.sentence })
-    }
-    const saved = keptId
-      ? await call('clinics.change', {
-          academy: slug,
-          params: { clinicId: keptId },
-          body: written.body,
-        })
-      : await call('clinics.draft', { academy: slug, body: written.body })
-    setKeptId(saved.id)
-    if (isPublished === null) return saved
-    return call('clinics.publish', {
-      academy: slug,
-      params: { clinicId: saved.id },
-      body: { isPublished },
-    })
-  })
+  const { save, keptId } = useSaveClinic(academy, clinic?.id)
   const throwAway = useAcademyMutation(slug, (clinicId: string) =>
     call('clinics.throw-away', { academy: slug, params: { clinicId } }),
   )
-  const press = async (isPublished: boolean | null) => {
+  const press = async ({ isPublished }: { isPublished: boolean }) => {
     setProblem(null)
     try {
-      const saved = await save.mutateAsync(isPublished)
+      const saved = await save.mutateAsync({ draft, isPublished })
       toast(isPublished ? 'On the page now.' : 'Kept.')
       await navigate(paths.clinicCard(slug, saved.id))
     } catch (error) {
@@ -141,14 +121,17 @@ function Editor(props: {
                 Throw draft away
               </Button>
             )}
-            <Button waiting={save.isPending && 'Keeping…'} onClick={() => void press(null)}>
+            <Button
+              waiting={save.isPending && 'Keeping…'}
+              onClick={() => void press({ isPublished: false })}
+            >
               {isLive ? 'Keep the change' : 'Keep as draft'}
             </Button>
             {!isLive && (
               <Button
                 kind="go"
                 waiting={save.isPending && 'Keeping…'}
-                onClick={() => void press(true)}
+                onClick={() => void press({ isPublished: true })}
               >
                 Put on the page
               </Button>

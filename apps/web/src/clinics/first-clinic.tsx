@@ -1,12 +1,11 @@
 import { useState } from 'react'
 import type { Academy } from '../academies/queries'
-import { call } from '../api/client'
-import { useAcademyMutation } from '../api/mutation'
 import { ApiProblem } from '../api/problem'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { ClinicEditor, type EditorChoices } from './clinic-editor'
-import { bodyOf, newDraft } from './draft'
+import { newDraft } from './draft'
+import { useSaveClinic } from './save-clinic'
 
 /** The third sentence: the first clinic, with every date of it. */
 export function FirstClinic(props: EditorChoices & { academy: Academy; onLater: () => void }) {
@@ -22,22 +21,11 @@ export function FirstClinic(props: EditorChoices & { academy: Academy; onLater: 
     })
   })
   const [problem, setProblem] = useState<ApiProblem | null>(null)
-  const keep = useAcademyMutation(academy.slug, async () => {
-    const written = bodyOf(draft, academy.currency)
-    if (!written.ok) {
-      throw new ApiProblem({ code: 'invalid-fields', status: 422, detail: written.sentence })
-    }
-    const clinic = await call('clinics.draft', { academy: academy.slug, body: written.body })
-    return call('clinics.publish', {
-      academy: academy.slug,
-      params: { clinicId: clinic.id },
-      body: { isPublished: true },
-    })
-  })
+  const { save, keptId } = useSaveClinic(academy)
   const press = async () => {
     setProblem(null)
     try {
-      await keep.mutateAsync(undefined)
+      await save.mutateAsync({ draft, isPublished: true })
     } catch (caught) {
       if (caught instanceof ApiProblem) setProblem(caught)
     }
@@ -51,10 +39,11 @@ export function FirstClinic(props: EditorChoices & { academy: Academy; onLater: 
         draft={draft}
         onChange={(change) => setDraft((had) => ({ ...had, ...change }))}
         errors={problem?.fields ?? {}}
+        {...(keptId ? { clinicId: keptId } : {})}
       />
       {problem && <Notice kind="flag">{problem.message}</Notice>}
       <p className="rowb2 mt-4">
-        <Button kind="go" isBig waiting={keep.isPending && 'Keeping…'} onClick={() => void press()}>
+        <Button kind="go" isBig waiting={save.isPending && 'Keeping…'} onClick={() => void press()}>
           Keep these dates
         </Button>
         <Button kind="quiet" onClick={props.onLater}>

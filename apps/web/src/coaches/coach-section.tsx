@@ -4,10 +4,9 @@ import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { Button } from '../ui/button'
-import { Dialog } from '../ui/dialog'
 import { Field, TextArea } from '../ui/field'
 import { Initials } from '../ui/initials'
-import { Notice } from '../ui/notice'
+import { FormDialog } from '../ui/form-dialog'
 import { toast } from '../ui/toast'
 
 type Coach = Answer<'coaches.list'>['coaches'][number]
@@ -89,52 +88,48 @@ function CoachDialog(props: { slug: string; coach: Coach | null; onClose: () => 
     }
     return changed
   })
-  const { form, errors, sentence, isSending } = useForm(async () => {
+  const { errors, ...dialog } = useForm(async () => {
     await keep.mutateAsync(undefined)
     if (wanted.invite) toast(`${wanted.invite} gets a mail with an invitation.`)
     onClose()
   })
   return (
-    <Dialog title={coach ? `Change ${coach.name}` : 'New coach'} isOpen onClose={onClose}>
-      <form {...form}>
-        {sentence && <Notice kind="flag">{sentence}</Notice>}
+    <FormDialog
+      {...dialog}
+      title={coach ? `Change ${coach.name}` : 'New coach'}
+      action="Save coach"
+      onClose={onClose}
+    >
+      <Field
+        label="Name"
+        value={wanted.name}
+        onChange={(event) => set({ name: event.target.value })}
+        error={errors['name']}
+      />
+      <Field
+        label="Initials"
+        hint="Up to three capital letters, for the week board. Left empty, the name’s own."
+        value={wanted.initials}
+        onChange={(event) => set({ initials: event.target.value.toUpperCase() })}
+        error={errors['initials']}
+      />
+      <TextArea
+        label="About them"
+        rows={2}
+        value={wanted.about}
+        onChange={(event) => set({ about: event.target.value })}
+        error={errors['about']}
+      />
+      {!coach?.accountId && (
         <Field
-          label="Name"
-          value={wanted.name}
-          onChange={(event) => set({ name: event.target.value })}
-          error={errors['name']}
+          label="E-mail"
+          type="email"
+          hint="An invitation goes there, so that they can take the register. It can wait."
+          value={wanted.invite}
+          onChange={(event) => set({ invite: event.target.value })}
+          error={errors['invite'] ?? errors['email']}
         />
-        <Field
-          label="Initials"
-          hint="Up to three capital letters, for the week board. Left empty, the name’s own."
-          value={wanted.initials}
-          onChange={(event) => set({ initials: event.target.value.toUpperCase() })}
-          error={errors['initials']}
-        />
-        <TextArea
-          label="About them"
-          rows={2}
-          value={wanted.about}
-          onChange={(event) => set({ about: event.target.value })}
-          error={errors['about']}
-        />
-        {!coach?.accountId && (
-          <Field
-            label="E-mail"
-            type="email"
-            hint="An invitation goes there, so that they can take the register. It can wait."
-            value={wanted.invite}
-            onChange={(event) => set({ invite: event.target.value })}
-            error={errors['invite'] ?? errors['email']}
-          />
-        )}
-        <div className="actions">
-          <Button type="submit" kind="go" waiting={isSending && 'Keeping…'}>
-            Save coach
-          </Button>
-          <Button onClick={onClose}>Not now</Button>
-        </div>
-      </form>
-    </Dialog>
+      )}
+    </FormDialog>
   )
 }

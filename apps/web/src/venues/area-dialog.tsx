@@ -2,10 +2,8 @@ import { useState } from 'react'
 import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
-import { Button } from '../ui/button'
-import { Dialog } from '../ui/dialog'
 import { CheckField, Field, SelectField } from '../ui/field'
-import { Notice } from '../ui/notice'
+import { FormDialog } from '../ui/form-dialog'
 import { AREA_KINDS, type Area, type AreaBody, type AreaKind } from './area-words'
 
 /** A part of a venue: what it is, how many bays, and whether it can be used in the dark or the wet. */
@@ -25,53 +23,49 @@ export function AreaDialog(props: {
       ? call('areas.change', { academy: slug, params: { areaId: area.id }, body: wanted })
       : call('areas.add', { academy: slug, params: { venueId }, body: wanted }),
   )
-  const { form, errors, sentence, isSending } = useForm(async () => {
+  const { errors, ...dialog } = useForm(async () => {
     await keep.mutateAsync(undefined)
     onClose()
   })
   return (
-    <Dialog title={area ? `Change ${area.name}` : 'New area'} isOpen onClose={onClose}>
-      <form {...form}>
-        {sentence && <Notice kind="flag">{sentence}</Notice>}
-        <SelectField
-          label="What it is"
-          value={wanted.kind}
-          options={AREA_KINDS}
-          onChange={(kind) => setWanted(usual(kind as AreaKind))}
-        />
-        <Field
-          label="Name"
-          value={wanted.name}
-          onChange={(event) => set({ name: event.target.value })}
-          error={errors['name']}
-        />
-        <Field
-          label="Bays, mats or holes"
-          type="number"
-          min={1}
-          max={200}
-          value={wanted.units}
-          onChange={(event) => set({ units: Number(event.target.value) })}
-          error={errors['units']}
-        />
-        <CheckField
-          label="It has lamps"
-          isChecked={wanted.hasLamps}
-          onChange={(hasLamps) => set({ hasLamps })}
-        />
-        <CheckField
-          label="It is covered"
-          isChecked={wanted.isCovered}
-          onChange={(isCovered) => set({ isCovered })}
-        />
-        <div className="actions">
-          <Button type="submit" kind="go" waiting={isSending && 'Keeping…'}>
-            Save area
-          </Button>
-          <Button onClick={onClose}>Not now</Button>
-        </div>
-      </form>
-    </Dialog>
+    <FormDialog
+      {...dialog}
+      title={area ? `Change ${area.name}` : 'New area'}
+      action="Save area"
+      onClose={onClose}
+    >
+      <SelectField
+        label="What it is"
+        value={wanted.kind}
+        options={AREA_KINDS}
+        onChange={(kind) => setWanted(usual(kind as AreaKind))}
+      />
+      <Field
+        label="Name"
+        value={wanted.name}
+        onChange={(event) => set({ name: event.target.value })}
+        error={errors['name']}
+      />
+      <Field
+        label="Bays, mats or holes"
+        type="number"
+        min={1}
+        max={200}
+        value={wanted.units}
+        onChange={(event) => set({ units: Number(event.target.value) })}
+        error={errors['units']}
+      />
+      <CheckField
+        label="It has lamps"
+        isChecked={wanted.hasLamps}
+        onChange={(hasLamps) => set({ hasLamps })}
+      />
+      <CheckField
+        label="It is covered"
+        isChecked={wanted.isCovered}
+        onChange={(isCovered) => set({ isCovered })}
+      />
+    </FormDialog>
   )
 }
 

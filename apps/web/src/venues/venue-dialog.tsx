@@ -3,10 +3,8 @@ import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { ApiProblem } from '../api/problem'
-import { Button } from '../ui/button'
-import { Dialog } from '../ui/dialog'
 import { Field, TextArea } from '../ui/field'
-import { Notice } from '../ui/notice'
+import { FormDialog } from '../ui/form-dialog'
 import { readDegrees, type Venue } from './area-words'
 
 /** A venue's name and where it lies. */
@@ -31,60 +29,56 @@ export function VenueDialog(props: { slug: string; venue: Venue | null; onClose:
       ? call('venues.change', { academy: slug, params: { venueId: venue.id }, body })
       : call('venues.add', { academy: slug, body })
   })
-  const { form, errors, sentence, isSending } = useForm(async () => {
+  const { errors, ...dialog } = useForm(async () => {
     await keep.mutateAsync(undefined)
     onClose()
   })
   return (
-    <Dialog title={venue ? `Change ${venue.name}` : 'New venue'} isOpen onClose={onClose}>
-      <form {...form}>
-        {sentence && <Notice kind="flag">{sentence}</Notice>}
+    <FormDialog
+      {...dialog}
+      title={venue ? `Change ${venue.name}` : 'New venue'}
+      action="Save venue"
+      onClose={onClose}
+    >
+      <Field
+        label="Name"
+        value={wanted.name}
+        onChange={(event) => set({ name: event.target.value })}
+        error={errors['name']}
+      />
+      <div className="f two">
         <Field
-          label="Name"
-          value={wanted.name}
-          onChange={(event) => set({ name: event.target.value })}
-          error={errors['name']}
+          label="Degrees north"
+          inputMode="decimal"
+          hint="South is minus."
+          value={wanted.latitude}
+          onChange={(event) => set({ latitude: event.target.value })}
+          error={errors['latitudeDeg']}
         />
-        <div className="f two">
-          <Field
-            label="Degrees north"
-            inputMode="decimal"
-            hint="South is minus."
-            value={wanted.latitude}
-            onChange={(event) => set({ latitude: event.target.value })}
-            error={errors['latitudeDeg']}
-          />
-          <Field
-            label="Degrees east"
-            inputMode="decimal"
-            hint="West is minus."
-            value={wanted.longitude}
-            onChange={(event) => set({ longitude: event.target.value })}
-            error={errors['longitudeDeg']}
-          />
-        </div>
-        <TextArea
-          label="Address"
-          rows={2}
-          value={wanted.address}
-          onChange={(event) => set({ address: event.target.value })}
-          error={errors['address']}
+        <Field
+          label="Degrees east"
+          inputMode="decimal"
+          hint="West is minus."
+          value={wanted.longitude}
+          onChange={(event) => set({ longitude: event.target.value })}
+          error={errors['longitudeDeg']}
         />
-        <TextArea
-          label="Getting here"
-          rows={2}
-          value={wanted.gettingHere}
-          onChange={(event) => set({ gettingHere: event.target.value })}
-          error={errors['gettingHere']}
-        />
-        <div className="actions">
-          <Button type="submit" kind="go" waiting={isSending && 'Keeping…'}>
-            Save venue
-          </Button>
-          <Button onClick={onClose}>Not now</Button>
-        </div>
-      </form>
-    </Dialog>
+      </div>
+      <TextArea
+        label="Address"
+        rows={2}
+        value={wanted.address}
+        onChange={(event) => set({ address: event.target.value })}
+        error={errors['address']}
+      />
+      <TextArea
+        label="Getting here"
+        rows={2}
+        value={wanted.gettingHere}
+        onChange={(event) => set({ gettingHere: event.target.value })}
+        error={errors['gettingHere']}
+      />
+    </FormDialog>
   )
 }
 
