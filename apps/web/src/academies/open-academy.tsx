@@ -1,8 +1,7 @@
-import { useQueryClient } from '@tanstack/react-query'
-import { useDeferredValue, useState, type SubmitEvent } from 'react'
-import { useQuery } from '@tanstack/react-query'
+import { useQuery, useQueryClient } from '@tanstack/react-query'
+import { useDeferredValue, useState } from 'react'
 import { call } from '../api/client'
-import { ApiProblem } from '../api/problem'
+import { useForm } from '../api/form'
 import { routeQuery } from '../api/query'
 import { SignInFields, useSignInFields } from '../accounts/sign-in-fields'
 import { useSession } from '../accounts/queries'
@@ -27,8 +26,6 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
   const client = useQueryClient()
   const { data: session } = useSession()
   const signIn = useSignInFields()
-  const [problem, setProblem] = useState<ApiProblem | null>(null)
-  const [isWorking, setIsWorking] = useState(false)
   const [wanted, setWanted] = useState<Wanted>(() => {
     const zone = ownZone()
     const currency = likelyCurrency(zone)
@@ -39,31 +36,22 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
   const address = useAddress(wanted.slug || wanted.name, session?.account !== null)
   const slug = wanted.slug || address.suggestion
 
-  const submit = async (event: SubmitEvent) => {
-    event.preventDefault()
-    setProblem(null)
-    setIsWorking(true)
-    try {
-      if (!session?.account) await signIn.submit()
-      const opened = await call('academies.open', { body: { ...wanted, slug } })
-      await client.invalidateQueries()
-      onOpened(opened.slug)
-    } catch (caught) {
-      if (caught instanceof ApiProblem) setProblem(caught)
-    } finally {
-      setIsWorking(false)
-    }
-  }
+  const { form, errors, all, isSending } = useForm(async () => {
+    if (!session?.account) await signIn.submit()
+    const opened = await call('academies.open', { body: { ...wanted, slug } })
+    await client.invalidateQueries()
+    onOpened(opened.slug)
+  })
 
   return (
-    <form onSubmit={(event) => void submit(event)} noValidate>
+    <form {...form}>
       <Sentence>
         We are{' '}
         <InputWord
           label="Name of the academy"
           value={wanted.name}
           placeholder="your academy"
-          isWrong={Boolean(problem?.fields['name'])}
+          isWrong={Boolean(errors['name'])}
           onChange={(name) => set({ name })}
         />{' '}
         in{' '}
@@ -71,7 +59,7 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
           label="Place"
           value={wanted.place}
           placeholder="county or town"
-          isWrong={Boolean(problem?.fields['place'])}
+          isWrong={Boolean(errors['place'])}
           onChange={(place) => set({ place })}
         />
         . Our page is {location.host}/
@@ -79,7 +67,7 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
           label="Address of the page"
           value={slug}
           placeholder="your-academy"
-          isWrong={Boolean(problem?.fields['slug']) || !address.isFree}
+          isWrong={Boolean(errors['slug']) || !address.isFree}
           onChange={(written) => set({ slug: written.toLowerCase() })}
         />
         . We keep{' '}
@@ -113,12 +101,12 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
       )}
       {session && !session.account && (
         <div className="my-4 max-w-[28rem]">
-          <SignInFields fields={signIn} errors={problem?.fields ?? {}} returnTo={paths.open()} />
+          <SignInFields fields={signIn} errors={errors} returnTo={paths.open()} />
         </div>
       )}
-      {problem && <Notice kind="flag">{sentences(problem)}</Notice>}
+      {all && <Notice kind="flag">{all}</Notice>}
       <p className="rowb2 mt-4">
-        <Button type="submit" kind="go" isBig waiting={isWorking && 'Opening…'}>
+        <Button type="submit" kind="go" isBig waiting={isSending && 'Opening…'}>
           Open the academy
         </Button>
         <span className="soft">All of it can be changed later but the currency.</span>
@@ -142,6 +130,3 @@ function useAddress(text: string, maySay: boolean): { isFree: boolean; suggestio
     .replace(/^-|-$/g, '')
   return { isFree: data?.isFree ?? true, suggestion: data?.suggestion ?? plain }
 }
-
-const sentences = ({ message, fields }: ApiProblem): string =>
-  [message, ...Object.values(fields)].join(' ')

@@ -31,6 +31,8 @@ export function useForm(send: () => Promise<unknown>) {
     errors,
     /** What is wrong with the whole of it; null where each wrong field says so itself. */
     sentence: problem && Object.keys(errors).length === 0 ? problem.message : null,
+    /** All that is wrong, for a form whose fields stand inside a sentence. */
+    all: problem && [problem.message, ...Object.values(errors)].join(' '),
     form: {
       ref,
       noValidate: true,

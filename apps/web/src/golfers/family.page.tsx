@@ -1,15 +1,14 @@
 import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
-import { useRef, useState, type SubmitEvent } from 'react'
+import { useState } from 'react'
 import { useParams, type LoaderFunctionArgs } from 'react-router'
 import { SignOut } from '../accounts/sign-out'
 import { call } from '../api/client'
+import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
-import { ApiProblem } from '../api/problem'
 import { academyPageQuery } from '../clinics/queries'
 import { myGolfersQuery } from '../enrolments/queries'
 import { useTitle } from '../layouts/accent'
 import { Button } from '../ui/button'
-import { focusFirstWrong } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
 import { DependantFields, EMPTY_DEPENDANT, toDependant } from './dependant-fields'
@@ -76,44 +75,28 @@ export default function FamilyPage() {
 }
 
 function AddDependant(props: { slug: string; safeguarding: string; onDone: () => void }) {
-  const form = useRef<HTMLFormElement>(null)
   const [draft, setDraft] = useState(EMPTY_DEPENDANT)
-  const [problem, setProblem] = useState<ApiProblem | null>(null)
   const add = useAcademyMutation(props.slug, () =>
     call('golfers.add-dependant', { academy: props.slug, body: toDependant(draft) }),
   )
-  const submit = async (event: SubmitEvent) => {
-    event.preventDefault()
-    setProblem(null)
-    try {
-      const golfer = await add.mutateAsync(undefined)
-      toast(`${golfer.name} is in your family here.`)
-      props.onDone()
-    } catch (error) {
-      if (error instanceof ApiProblem) setProblem(error)
-      focusFirstWrong(form.current)
-    }
-  }
+  const { form, errors, sentence, isSending } = useForm(async () => {
+    const golfer = await add.mutateAsync(undefined)
+    toast(`${golfer.name} is in your family here.`)
+    props.onDone()
+  })
   return (
-    <form
-      ref={form}
-      className="panel max-w-[34rem]"
-      onSubmit={(event) => void submit(event)}
-      noValidate
-    >
+    <form {...form} className="panel max-w-[34rem]">
       <div className="pad">
-        {problem && Object.keys(problem.fields).length === 0 && (
-          <Notice kind="flag">{problem.message}</Notice>
-        )}
+        {sentence && <Notice kind="flag">{sentence}</Notice>}
         <DependantFields
           draft={draft}
           onChange={setDraft}
-          errors={problem?.fields ?? {}}
+          errors={errors}
           prefix=""
           safeguarding={props.safeguarding}
         />
         <div className="actions">
-          <Button type="submit" kind="go" waiting={add.isPending && 'Adding…'}>
+          <Button type="submit" kind="go" waiting={isSending && 'Adding…'}>
             Add them
           </Button>
           <Button onClick={props.onDone}>Not now</Button>

@@ -1,11 +1,12 @@
 import { useQuery } from '@tanstack/react-query'
-import { useDeferredValue, useState, type SubmitEvent } from 'react'
+import { useDeferredValue, useState } from 'react'
 import { Link, useNavigate, useParams } from 'react-router'
 import type { Sent } from '@marram/contract'
 import { call } from '../api/client'
+import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { routeQuery } from '../api/query'
-import { ApiProblem, sentenceOf } from '../api/problem'
+import { sentenceOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
 import { useMay } from '../layouts/staff.layout'
 import { paths } from '../paths'
@@ -111,38 +112,29 @@ function Cell(props: { label: string; value: string | number | null; isText?: bo
 function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
   const navigate = useNavigate()
   const [fields, setFields] = useState({ name: '', email: '', phone: '', handicap: '' })
-  const [problem, setProblem] = useState<ApiProblem | null>(null)
   const enter = useAcademyMutation(slug, (body: Sent<'golfers.enter', 'body'>) =>
     call('golfers.enter', { academy: slug, body }),
   )
   const set = (change: Partial<typeof fields>) => setFields({ ...fields, ...change })
-  const submit = async (event: SubmitEvent) => {
-    event.preventDefault()
-    setProblem(null)
-    try {
-      const golfer = await enter.mutateAsync({
-        name: fields.name,
-        ...(fields.email ? { email: fields.email } : {}),
-        ...(fields.phone ? { phone: fields.phone } : {}),
-        ...(fields.handicap ? { handicap: Number(fields.handicap.replace(',', '.')) } : {}),
-      })
-      onDone()
-      await navigate(paths.golfer(slug, golfer.id))
-    } catch (error) {
-      if (error instanceof ApiProblem) setProblem(error)
-    }
-  }
+  const { form, errors, sentence, isSending } = useForm(async () => {
+    const golfer = await enter.mutateAsync({
+      name: fields.name,
+      ...(fields.email ? { email: fields.email } : {}),
+      ...(fields.phone ? { phone: fields.phone } : {}),
+      ...(fields.handicap ? { handicap: Number(fields.handicap.replace(',', '.')) } : {}),
+    })
+    onDone()
+    await navigate(paths.golfer(slug, golfer.id))
+  })
   return (
-    <form className="panel mb-6 max-w-[38rem]" onSubmit={(event) => void submit(event)} noValidate>
+    <form {...form} className="panel mb-6 max-w-[38rem]">
       <div className="pad">
-        {problem && Object.keys(problem.fields).length === 0 && (
-          <Notice kind="flag">{problem.message}</Notice>
-        )}
+        {sentence && <Notice kind="flag">{sentence}</Notice>}
         <Field
           label="Name"
           value={fields.name}
           onChange={(event) => set({ name: event.target.value })}
-          error={problem?.fields['name']}
+          error={errors['name']}
         />
         <div className="f two">
           <Field
@@ -151,14 +143,14 @@ function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
             hint="If they have one"
             value={fields.email}
             onChange={(event) => set({ email: event.target.value })}
-            error={problem?.fields['email']}
+            error={errors['email']}
           />
           <Field
             label="Telephone"
             type="tel"
             value={fields.phone}
             onChange={(event) => set({ phone: event.target.value })}
-            error={problem?.fields['phone']}
+            error={errors['phone']}
           />
         </div>
         <Field
@@ -166,10 +158,10 @@ function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
           inputMode="decimal"
           value={fields.handicap}
           onChange={(event) => set({ handicap: event.target.value })}
-          error={problem?.fields['handicap']}
+          error={errors['handicap']}
         />
         <div className="actions">
-          <Button type="submit" kind="go" waiting={enter.isPending && 'Entering…'}>
+          <Button type="submit" kind="go" waiting={isSending && 'Entering…'}>
             Enter them
           </Button>
           <Button onClick={onDone}>Not now</Button>

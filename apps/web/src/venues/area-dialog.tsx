@@ -4,7 +4,7 @@ import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { CheckField, Field, SelectField } from '../ui/field'
 import { FormDialog } from '../ui/form-dialog'
-import { AREA_KINDS, type Area, type AreaBody, type AreaKind } from './area-words'
+import { AREA_KINDS, usualArea, type Area, type AreaBody, type AreaKind } from './area-words'
 
 /** A part of a venue: what it is, how many bays, and whether it can be used in the dark or the wet. */
 export function AreaDialog(props: {
@@ -14,9 +14,7 @@ export function AreaDialog(props: {
   onClose: () => void
 }) {
   const { slug, venueId, area, onClose } = props
-  const [wanted, setWanted] = useState<AreaBody>(() =>
-    area ? bodyOf(area) : usual(AREA_KINDS[0]?.value ?? 'range'),
-  )
+  const [wanted, setWanted] = useState<AreaBody>(() => (area ? bodyOf(area) : usualArea('range')))
   const set = (change: Partial<AreaBody>) => setWanted((had) => ({ ...had, ...change }))
   const keep = useAcademyMutation(slug, () =>
     area
@@ -38,7 +36,7 @@ export function AreaDialog(props: {
         label="What it is"
         value={wanted.kind}
         options={AREA_KINDS}
-        onChange={(kind) => setWanted(usual(kind as AreaKind))}
+        onChange={(kind) => setWanted(usualArea(kind as AreaKind))}
       />
       <Field
         label="Name"
@@ -71,15 +69,4 @@ export function AreaDialog(props: {
 
 function bodyOf({ name, kind, units, hasLamps, isCovered }: Area): AreaBody {
   return { name, kind, units, hasLamps, isCovered }
-}
-
-function usual(kind: AreaKind): AreaBody {
-  const found = AREA_KINDS.find(({ value }) => value === kind)
-  return {
-    name: found?.name ?? '',
-    kind,
-    units: found?.units ?? 1,
-    hasLamps: found?.hasLamps ?? false,
-    isCovered: found?.isCovered ?? false,
-  }
 }

@@ -53,8 +53,14 @@ export function lightOf({ kind, hasLamps }: Pick<Area, 'kind' | 'hasLamps'>): st
   return hasLamps ? 'Lamps' : 'None'
 }
 
-/** Half a degree to five decimals: about a metre on the ground. */
-export function readDegrees(text: string): number | null {
-  const degrees = Number(text.replace(',', '.').trim())
-  return text.trim() === '' || !Number.isFinite(degrees) ? null : degrees
+/** An area as one of its kind usually is. */
+export function usualArea(kind: AreaKind): AreaBody {
+  const found = AREA_KINDS.find(({ value }) => value === kind)
+  return {
+    name: found?.name ?? '',
+    kind,
+    units: found?.units ?? 1,
+    hasLamps: found?.hasLamps ?? false,
+    isCovered: found?.isCovered ?? false,
+  }
 }

@@ -1,11 +1,12 @@
-import { useState, type SubmitEvent } from 'react'
+import { useState } from 'react'
 import { call } from '../api/client'
+import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
-import { sentenceOf } from '../api/problem'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { InputWord, SelectWord, Sentence } from '../ui/sentence'
-import { AREA_KINDS, readDegrees, type AreaKind, type Venue } from './area-words'
+import { AREA_KINDS, usualArea, type AreaKind, type Venue } from './area-words'
+import { readPosition } from './position'
 
 interface Wanted {
   name: string
@@ -39,35 +40,22 @@ export function FirstVenue(props: {
     cover: 'covered',
     coach: props.me.name,
   })
-  const [error, setError] = useState('')
   const set = (change: Partial<Wanted>) => setWanted((had) => ({ ...had, ...change }))
   const keep = useAcademyMutation(props.slug, () => keepVenue(props, wanted))
 
-  const submit = async (event: SubmitEvent) => {
-    event.preventDefault()
-    setError('')
-    if (readDegrees(wanted.latitude) === null || readDegrees(wanted.longitude) === null) {
-      setError('Sunset needs the place in degrees, like 53.8512 north and 6.2410 west.')
-      return
-    }
-    try {
-      await keep.mutateAsync(undefined)
-    } catch (caught) {
-      setError(sentenceOf(caught))
-    }
-  }
+  const { form, all, isSending } = useForm(() => keep.mutateAsync(undefined))
   const chooseKind = (kind: AreaKind) => {
-    const usual = AREA_KINDS.find(({ value }) => value === kind)
+    const { units, hasLamps, isCovered } = usualArea(kind)
     set({
       kind,
-      units: String(usual?.units ?? 1),
-      lamps: usual?.hasLamps ? 'lamps' : 'no lamps',
-      cover: usual?.isCovered ? 'covered' : 'open',
+      units: String(units),
+      lamps: hasLamps ? 'lamps' : 'no lamps',
+      cover: isCovered ? 'covered' : 'open',
     })
   }
 
   return (
-    <form onSubmit={(event) => void submit(event)} noValidate>
+    <form {...form}>
       <Sentence>
         At{' '}
         <InputWord
@@ -142,9 +130,9 @@ export function FirstVenue(props: {
         . <InputWord label="Coach" value={wanted.coach} onChange={(coach) => set({ coach })} />{' '}
         teaches.
       </Sentence>
-      {error && <Notice kind="flag">{error}</Notice>}
+      {all && <Notice kind="flag">{all}</Notice>}
       <p className="rowb2 mt-4">
-        <Button type="submit" kind="go" isBig waiting={keep.isPending && 'Keeping…'}>
+        <Button type="submit" kind="go" isBig waiting={isSending && 'Keeping…'}>
           Keep the place
         </Button>
         <span className="soft">A map shows the two numbers when a point on it is pressed.</span>
@@ -158,26 +146,23 @@ async function keepVenue(
   { slug, me, kept }: Pick<Parameters<typeof FirstVenue>[0], 'slug' | 'me' | 'kept'>,
   wanted: Wanted,
 ) {
-  const side = (text: string, isNegative: boolean) =>
-    (readDegrees(text) ?? 0) * (isNegative ? -1 : 1)
+  const { latitudeDeg, longitudeDeg } = readPosition(wanted)
   const venue =
     kept.venue ??
     (await call('venues.add', {
       academy: slug,
       body: {
         name: wanted.name,
-        latitudeDeg: side(wanted.latitude, wanted.northOrSouth === 'south'),
-        longitudeDeg: side(wanted.longitude, wanted.eastOrWest === 'west'),
+        latitudeDeg: wanted.northOrSouth === 'south' ? -latitudeDeg : latitudeDeg,
+        longitudeDeg: wanted.eastOrWest === 'west' ? -longitudeDeg : longitudeDeg,
       },
     }))
-  const usual = AREA_KINDS.find(({ value }) => value === wanted.kind)
   if (venue.areas.length === 0) {
     await call('areas.add', {
       academy: slug,
       params: { venueId: venue.id },
       body: {
-        name: usual?.name ?? 'Area',
-        kind: wanted.kind,
+        ...usualArea(wanted.kind),
         units: Number(wanted.units),
         hasLamps: wanted.lamps === 'lamps',
         isCovered: wanted.cover === 'covered',

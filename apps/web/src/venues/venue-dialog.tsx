@@ -2,10 +2,10 @@ import { useState } from 'react'
 import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
-import { ApiProblem } from '../api/problem'
 import { Field, TextArea } from '../ui/field'
 import { FormDialog } from '../ui/form-dialog'
-import { readDegrees, type Venue } from './area-words'
+import type { Venue } from './area-words'
+import { readPosition } from './position'
 
 /** A venue's name and where it lies. */
 export function VenueDialog(props: { slug: string; venue: Venue | null; onClose: () => void }) {
@@ -80,20 +80,4 @@ export function VenueDialog(props: { slug: string; venue: Venue | null; onClose:
       />
     </FormDialog>
   )
-}
-
-function readPosition(wanted: { latitude: string; longitude: string }) {
-  const latitudeDeg = readDegrees(wanted.latitude)
-  const longitudeDeg = readDegrees(wanted.longitude)
-  if (latitudeDeg !== null && longitudeDeg !== null) return { latitudeDeg, longitudeDeg }
-  const sentence = 'Degrees as a number, like 53.8512.'
-  throw new ApiProblem({
-    code: 'invalid-fields',
-    status: 422,
-    detail: 'Sunset needs the place in degrees.',
-    fields: {
-      ...(latitudeDeg === null ? { latitudeDeg: sentence } : {}),
-      ...(longitudeDeg === null ? { longitudeDeg: sentence } : {}),
-    },
-  })
 }
