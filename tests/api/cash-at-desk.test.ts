@@ -30,9 +30,15 @@ describe('cash at the desk', () => {
     expect(await owedByTheBooks(academy)).toBe(0)
   })
 
-  it('is refused for a part of what is owed', async () => {
-    const { take } = await promised()
-    expect((await take(1_000)).problem?.fields).toHaveProperty('amountMinor')
+  it('may come in parts, and never comes to more than is owed', async () => {
+    const { academy, take } = await promised()
+    const part = await take(1_000)
+    expect(part.answer).toMatchObject({ payment: 'at-desk', owedMinor: 23_000 })
+    expect(await owedByTheBooks(academy)).toBe(23_000)
+    expect((await take(24_000)).problem?.fields).toHaveProperty('amountMinor')
+    expect((await take(0)).problem?.fields).toHaveProperty('amountMinor')
+    expect((await take(23_000)).answer).toMatchObject({ payment: 'paid', owedMinor: 0 })
+    expect(await owedByTheBooks(academy)).toBe(0)
   })
 
   it('is refused for a place that was given up', async () => {

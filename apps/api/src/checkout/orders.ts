@@ -196,10 +196,7 @@ export async function promiseAtDesk(
   await oweForCalledOff(services, trx, { academy, enrolmentId })
 }
 
-/**
- * Staff take what is owed in cash: all of it, since a place is either paid or not when its money goes
- * back. Throws `invalid-fields` for another amount.
- */
+/** Staff take cash: all that is owed, or a part of it. Throws `invalid-fields` for more than that. */
 export async function takeCash(
   services: Services,
   given: { academyId: string; enrolmentId: string; amountMinor: number; takenBy: string },
@@ -211,9 +208,9 @@ export async function takeCash(
       throw new Problem('already-decided', 'Nothing is owed at the desk for this place.')
     }
     const owedMinor = await readOwedAtDesk(trx, order.id)
-    if (owedMinor === 0 || given.amountMinor !== owedMinor) {
+    if (given.amountMinor === 0 || given.amountMinor > owedMinor) {
       const sentence =
-        owedMinor === 0 ? 'Nothing is owed for this place.' : 'That is not the amount that is owed.'
+        owedMinor === 0 ? 'Nothing is owed for this place.' : 'That is not an amount that is owed.'
       throw new Problem('invalid-fields', sentence, { amountMinor: sentence })
     }
     const now = services.clock.now()
