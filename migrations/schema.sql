@@ -531,23 +531,6 @@ ALTER TABLE ONLY public.orders FORCE ROW LEVEL SECURITY;
 
 ALTER TABLE public.orders OWNER TO marram_owner;
 
-CREATE TABLE public.owed_places (
-    academy_id uuid NOT NULL,
-    place_id uuid NOT NULL,
-    amount_minor bigint NOT NULL,
-    choice text,
-    chosen_by text,
-    choose_by timestamp with time zone NOT NULL,
-    settled_at timestamp with time zone,
-    CONSTRAINT owed_places_amount_minor_check CHECK ((amount_minor >= 0)),
-    CONSTRAINT owed_places_choice_check CHECK ((choice = ANY (ARRAY['credit'::text, 'money'::text]))),
-    CONSTRAINT owed_places_chosen_by_check CHECK ((chosen_by = ANY (ARRAY['golfer'::text, 'default'::text])))
-);
-
-ALTER TABLE ONLY public.owed_places FORCE ROW LEVEL SECURITY;
-
-ALTER TABLE public.owed_places OWNER TO marram_owner;
-
 CREATE TABLE public.payments (
     academy_id uuid NOT NULL,
     id uuid NOT NULL,
@@ -588,6 +571,63 @@ CREATE TABLE public.places (
 ALTER TABLE ONLY public.places FORCE ROW LEVEL SECURITY;
 
 ALTER TABLE public.places OWNER TO marram_owner;
+
+CREATE TABLE public.transfers (
+    academy_id uuid NOT NULL,
+    id uuid NOT NULL,
+    kind text NOT NULL,
+    source_type text NOT NULL,
+    source_id uuid NOT NULL,
+    revision integer DEFAULT 0 NOT NULL,
+    what text NOT NULL,
+    happened_on date NOT NULL,
+    posted_at timestamp with time zone NOT NULL,
+    written_in xid8 DEFAULT pg_current_xact_id() NOT NULL
+);
+
+ALTER TABLE ONLY public.transfers FORCE ROW LEVEL SECURITY;
+
+ALTER TABLE public.transfers OWNER TO marram_owner;
+
+CREATE VIEW public.owed_at_desk WITH (security_invoker='true') AS
+ SELECT o.academy_id,
+    o.id AS order_id,
+    o.enrolment_id,
+    ( SELECT (COALESCE(sum(n.amount_minor), (0)::numeric))::bigint AS "coalesce"
+           FROM (public.transfers t
+             JOIN public.entries n ON (((n.academy_id = t.academy_id) AND (n.transfer_id = t.id))))
+          WHERE ((t.academy_id = o.academy_id) AND (n.account_code = 'receivable'::text) AND (t.source_type = ANY (ARRAY['order'::text, 'payment'::text, 'place'::text, 'enrolment'::text])) AND (t.source_id IN ( SELECT o.id
+                UNION ALL
+                 SELECT o.enrolment_id
+                UNION ALL
+                 SELECT y.id
+                   FROM public.payments y
+                  WHERE ((y.academy_id = o.academy_id) AND (y.order_id = o.id))
+                UNION ALL
+                 SELECT p.id
+                   FROM public.places p
+                  WHERE ((p.academy_id = o.academy_id) AND (p.enrolment_id = o.enrolment_id)))))) AS owed_minor
+   FROM public.orders o
+  WHERE (o.method = 'desk'::text);
+
+ALTER TABLE public.owed_at_desk OWNER TO marram_owner;
+
+CREATE TABLE public.owed_places (
+    academy_id uuid NOT NULL,
+    place_id uuid NOT NULL,
+    amount_minor bigint NOT NULL,
+    choice text,
+    chosen_by text,
+    choose_by timestamp with time zone NOT NULL,
+    settled_at timestamp with time zone,
+    CONSTRAINT owed_places_amount_minor_check CHECK ((amount_minor >= 0)),
+    CONSTRAINT owed_places_choice_check CHECK ((choice = ANY (ARRAY['credit'::text, 'money'::text]))),
+    CONSTRAINT owed_places_chosen_by_check CHECK ((chosen_by = ANY (ARRAY['golfer'::text, 'default'::text])))
+);
+
+ALTER TABLE ONLY public.owed_places FORCE ROW LEVEL SECURITY;
+
+ALTER TABLE public.owed_places OWNER TO marram_owner;
 
 CREATE TABLE public.provider_events (
     provider text NOT NULL,
@@ -744,23 +784,6 @@ CREATE TABLE public.silenced_addresses (
 );
 
 ALTER TABLE public.silenced_addresses OWNER TO marram_owner;
-
-CREATE TABLE public.transfers (
-    academy_id uuid NOT NULL,
-    id uuid NOT NULL,
-    kind text NOT NULL,
-    source_type text NOT NULL,
-    source_id uuid NOT NULL,
-    revision integer DEFAULT 0 NOT NULL,
-    what text NOT NULL,
-    happened_on date NOT NULL,
-    posted_at timestamp with time zone NOT NULL,
-    written_in xid8 DEFAULT pg_current_xact_id() NOT NULL
-);
-
-ALTER TABLE ONLY public.transfers FORCE ROW LEVEL SECURITY;
-
-ALTER TABLE public.transfers OWNER TO marram_owner;
 
 CREATE TABLE public.venues (
     academy_id uuid NOT NULL,
@@ -1418,6 +1441,33 @@ GRANT SELECT,INSERT ON TABLE public.minor_look_ups TO marram_app;
 
 GRANT SELECT,INSERT,UPDATE ON TABLE public.orders TO marram_app;
 
+GRANT SELECT,INSERT,UPDATE ON TABLE public.payments TO marram_app;
+
+GRANT SELECT,INSERT,UPDATE ON TABLE public.places TO marram_app;
+
+GRANT SELECT ON TABLE public.transfers TO marram_app;
+GRANT SELECT ON TABLE public.transfers TO marram_sees_all;
+
+GRANT INSERT(academy_id) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(id) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(kind) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(source_type) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(source_id) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(revision) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(what) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(happened_on) ON TABLE public.transfers TO marram_app;
+
+GRANT INSERT(posted_at) ON TABLE public.transfers TO marram_app;
+
+GRANT SELECT ON TABLE public.owed_at_desk TO marram_app;
+
 GRANT SELECT,INSERT,UPDATE ON TABLE public.owed_places TO marram_app;
 
 GRANT SELECT(academy_id) ON TABLE public.owed_places TO marram_dispatch;
@@ -1427,10 +1477,6 @@ GRANT SELECT(place_id) ON TABLE public.owed_places TO marram_dispatch;
 GRANT SELECT(choice) ON TABLE public.owed_places TO marram_dispatch;
 
 GRANT SELECT(choose_by) ON TABLE public.owed_places TO marram_dispatch;
-
-GRANT SELECT,INSERT,UPDATE ON TABLE public.payments TO marram_app;
-
-GRANT SELECT,INSERT,UPDATE ON TABLE public.places TO marram_app;
 
 GRANT SELECT,INSERT ON TABLE public.provider_events TO marram_app;
 
@@ -1458,27 +1504,6 @@ GRANT SELECT(id_hash) ON TABLE public.sign_in_sessions TO marram_dispatch;
 GRANT SELECT(expires_at) ON TABLE public.sign_in_sessions TO marram_dispatch;
 
 GRANT SELECT,INSERT,UPDATE ON TABLE public.silenced_addresses TO marram_app;
-
-GRANT SELECT ON TABLE public.transfers TO marram_app;
-GRANT SELECT ON TABLE public.transfers TO marram_sees_all;
-
-GRANT INSERT(academy_id) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(id) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(kind) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(source_type) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(source_id) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(revision) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(what) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(happened_on) ON TABLE public.transfers TO marram_app;
-
-GRANT INSERT(posted_at) ON TABLE public.transfers TO marram_app;
 
 GRANT SELECT,INSERT,UPDATE ON TABLE public.venues TO marram_app;
 

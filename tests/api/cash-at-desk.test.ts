@@ -22,6 +22,14 @@ async function owedByTheBooks({ slug, owner }: OpenAcademy): Promise<number> {
   return owedAtDeskMinor
 }
 
+/** What the coach reads beside the only golfer's name, in the run's second session. */
+async function isUnpaidInRegister({ slug, owner, clinic }: OpenAcademy): Promise<boolean> {
+  const params = { academy: slug, sessionId: clinic.sessions[1]!.id }
+  const { rows } = await owner.person.must('register.read', { params })
+  expect(rows).toHaveLength(1)
+  return rows[0]!.isUnpaid
+}
+
 describe('cash at the desk', () => {
   it('is taken once, however often it is pressed', async () => {
     const { academy, take } = await promised()
@@ -61,7 +69,9 @@ describe('cash at the desk', () => {
       owedMinor: 21_000,
     })
     expect((await take(24_000)).status).toBe(422)
+    expect(await isUnpaidInRegister(academy)).toBe(true)
     expect((await take(21_000)).answer).toMatchObject({ payment: 'paid', owedMinor: 0 })
     expect(await owedByTheBooks(academy)).toBe(0)
+    expect(await isUnpaidInRegister(academy)).toBe(false)
   })
 })

@@ -22,6 +22,15 @@ export async function listTables(db: Knex): Promise<Table[]> {
   return rows
 }
 
+/** Views, and whether they read as whoever asks, so that row-level security is theirs. */
+export async function listViews(db: Knex): Promise<{ name: string; readsAsAsker: boolean }[]> {
+  const { rows } = await db.raw<{ rows: { name: string; readsAsAsker: boolean }[] }>(`
+    SELECT relname AS name,
+           coalesce('security_invoker=true' = ANY(reloptions), false) AS reads_as_asker
+    FROM pg_class WHERE relnamespace = 'public'::regnamespace AND relkind IN ('v', 'm')`)
+  return rows
+}
+
 export interface Policy {
   table: string
   name: string

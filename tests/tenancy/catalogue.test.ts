@@ -8,6 +8,7 @@ import {
   listPolicies,
   listPrivileges,
   listTables,
+  listViews,
 } from './catalogue-queries'
 
 /** Tables that belong to no academy. A new table without `academy_id` has to be argued for here. */
@@ -55,6 +56,12 @@ describe('tables', () => {
     expect(others.sort()).toEqual([...REFERENCE_TABLES].sort())
     expect(tables.length - others.length).toBeGreaterThanOrEqual(29)
     expect(tables.filter(({ isNullable }) => isNullable)).toEqual([])
+  })
+
+  it('are read through views only as whoever asks', async () => {
+    const views = await listViews(db)
+    expect(views).toContainEqual({ name: 'owed_at_desk', readsAsAsker: true })
+    expect(views.filter(({ readsAsAsker }) => !readsAsAsker)).toEqual([])
   })
 
   it('of an academy have row-level security, enabled and forced', async () => {

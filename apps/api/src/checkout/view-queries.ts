@@ -68,27 +68,11 @@ const PLACES = `
     LEFT JOIN owed_places o ON o.academy_id = p.academy_id AND o.place_id = p.id
   WHERE p.academy_id = e.academy_id AND p.enrolment_id = e.id`
 
-/**
- * What of an order is still to be paid at the desk, by the ledger: what was sold, less what came in
- * and what is no longer owed, since a place was called off or given up.
- */
-const OWED = `
-  CASE WHEN r.method = 'desk' THEN (
-    SELECT coalesce(sum(n.amount_minor), 0)::bigint FROM transfers t
-      JOIN entries n ON n.academy_id = t.academy_id AND n.transfer_id = t.id
-    WHERE t.academy_id = r.academy_id AND n.account_code = 'receivable'
-      AND t.source_type IN ('order', 'payment', 'place', 'enrolment') AND t.source_id IN (
-        SELECT r.id UNION ALL SELECT r.enrolment_id
-        UNION ALL SELECT y.id FROM payments y
-          WHERE y.academy_id = r.academy_id AND y.order_id = r.id
-        UNION ALL SELECT p.id FROM places p
-          WHERE p.academy_id = r.academy_id AND p.enrolment_id = r.enrolment_id)) ELSE 0 END`
-
 /** What of an order is still to be paid at the desk; 0 for one that is paid by card. */
 export async function readOwedAtDesk(trx: AcademyTrx, orderId: string): Promise<number> {
   const [row] = await ask<{ owedMinor: number }>(trx, {
     name: 'owed-at-desk',
-    text: `SELECT ${OWED} AS "owedMinor" FROM orders r WHERE r.id = $1`,
+    text: 'SELECT owed_minor AS "owedMinor" FROM owed_at_desk WHERE order_id = $1',
     values: [orderId],
   })
   return row?.owedMinor ?? 0
@@ -97,7 +81,8 @@ export async function readOwedAtDesk(trx: AcademyTrx, orderId: string): Promise<
 const ORDERS = `
   SELECT coalesce(json_agg(json_build_object(
     'state', r.state, 'lastRefusal', r.last_refusal, 'totalMinor', r.net_minor + r.tax_minor,
-    'owedMinor', ${OWED},
+    'owedMinor', coalesce((SELECT d.owed_minor FROM owed_at_desk d
+      WHERE d.academy_id = r.academy_id AND d.order_id = r.id), 0),
     'paidMinor', (SELECT coalesce(sum(y.amount_minor), 0) FROM payments y
       WHERE y.academy_id = r.academy_id AND y.order_id = r.id)) ORDER BY r.created_at), '[]')
   FROM orders r WHERE r.academy_id = e.academy_id AND r.enrolment_id = e.id`

@@ -49,10 +49,8 @@ export async function listRegisterRows(
        (SELECT min(t.number) FROM places q
           JOIN sessions t ON t.academy_id = q.academy_id AND t.id = q.session_id
           WHERE q.enrolment_id = p.enrolment_id) AS joined_at_number,
-       EXISTS (SELECT 1 FROM orders o WHERE o.enrolment_id = p.enrolment_id AND o.state = 'paid'
-          AND o.method = 'desk' AND o.net_minor + o.tax_minor >
-            (SELECT coalesce(sum(y.amount_minor), 0) FROM payments y WHERE y.order_id = o.id)
-       ) AS is_unpaid
+       EXISTS (SELECT 1 FROM owed_at_desk o WHERE o.academy_id = p.academy_id
+          AND o.enrolment_id = p.enrolment_id AND o.owed_minor > 0) AS is_unpaid
      FROM places p
      JOIN sessions s ON s.academy_id = p.academy_id AND s.id = p.session_id
      JOIN golfers g ON g.academy_id = p.academy_id AND g.id = p.golfer_id
