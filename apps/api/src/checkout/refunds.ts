@@ -49,15 +49,20 @@ export async function settleRefund(
     const { zone } = await readAcademy(trx)
     const about = { sourceId: refundId, happenedOn: localDayOf(now, zone) }
     const { amountMinor, currency } = refund
+    // A late payment is owed back until the provider takes the refund on; others left the books
+    // when they were asked for.
+    const isToPost = refund.reason === 'late-payment' && refund.providerRefund === null
     if (answer.state === 'failed') {
-      const what = 'Refund failed at the provider'
-      const posting = refundFailed({ ...about, what, amountMinor })
       await updateRefund(trx, refundId, { state: 'failed', providerRefund: answer.id })
-      await post(services, trx, { posting, currency })
+      if (!isToPost) {
+        const what = 'Refund failed at the provider'
+        const posting = refundFailed({ ...about, what, amountMinor })
+        await post(services, trx, { posting, currency })
+      }
       services.log.warn({ refundId, academyId }, 'a refund failed at the provider')
       return
     }
-    if (refund.state === 'asked' && refund.reason === 'late-payment') {
+    if (isToPost) {
       const what = 'Late payment given back'
       await post(services, trx, {
         posting: unplacedRefund({ ...about, what, amountMinor }),
