@@ -15,6 +15,7 @@ export {
   sessionBrief,
 } from './clinics'
 export { enrolmentView, giveUpQuote, placeView, waitlistView } from './enrolments'
+export { isSlug } from './fields'
 export { dependantFields, golferListItem, golferView, ownGolferView } from './golfers'
 export { LEDGER_ACCOUNTS, figure } from './ledger'
 export { MARKS, registerRow, registerView } from './register'

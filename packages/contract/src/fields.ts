@@ -1,6 +1,10 @@
 import { z } from 'zod'
 
-/** One line of text: trimmed, 1 to `max` characters, no control characters (CR, LF, NUL …). */
+/** What takes no room, or turns the words around it: a name made of it reads as another's. */
+const UNSEEN = /[\u00ad\u061c\u180e\u200b\u200e\u200f\u202a-\u202e\u2060-\u2069\ufeff]/u
+const SEEN = /[\p{L}\p{N}\p{P}\p{S}]/u
+
+/** One line of text: trimmed, 1 to `max` characters that can be seen (no CR, LF, NUL …). */
 export const line = (max: number) =>
   z
     .string()
@@ -8,6 +12,8 @@ export const line = (max: number) =>
     .min(1, 'Please fill this in.')
     .max(max, `This is longer than ${max} characters.`)
     .regex(/^[^\p{Cc}\p{Cs}\u2028\u2029]*$/u, 'This holds a character that cannot be shown.')
+    .refine((text) => !UNSEEN.test(text), 'This holds a character that cannot be seen.')
+    .refine((text) => text === '' || SEEN.test(text), 'Please fill this in.')
 
 /** Several lines of text; line breaks stay, other control characters are refused. */
 export const prose = (max: number) =>
@@ -21,9 +27,13 @@ export const prose = (max: number) =>
     )
 
 export const id = z.uuid('This is not one of our numbers.')
+const SLUG = /^[a-z0-9]+(-[a-z0-9]+)*$/
+
+/** Whether a text is written as the address of an academy or a clinic is. */
+export const isSlug = (text: string): boolean => SLUG.test(text)
 export const slug = z
   .string()
-  .regex(/^[a-z0-9]+(-[a-z0-9]+)*$/, 'Small letters, figures and single hyphens only.')
+  .regex(SLUG, 'Small letters, figures and single hyphens only.')
   .min(2)
   .max(60)
 export const email = z

@@ -1,6 +1,7 @@
 import {
   ROUTES,
   SCHEMAS,
+  isSlug,
   scopeOf,
   type Access,
   type Role,
@@ -17,7 +18,6 @@ import { Download, type Handlers, type RequestContext } from './context'
 import { fieldSentences } from './field-sentences'
 import { signInAs, signOut } from './sign-in-session'
 import { tokenOf } from './request-token'
-import { isSlug } from '../tenancy/slug'
 
 type Schemas = Partial<Record<'params' | 'query' | 'body', ZodType>>
 

@@ -1,9 +1,9 @@
+import { isSlug } from '@marram/contract'
 import type { Knex } from 'knex'
 import type pg from 'pg'
 import type { BeginOptions } from '../db/client'
 import { invariant } from '../invariant'
 import { askBetween, type Question } from './ask'
-import { isSlug } from './slug'
 
 declare const inside: unique symbol
 
@@ -63,11 +63,22 @@ export function inPlain<T>(db: Knex, work: (trx: PlainTrx) => Promise<T>): Promi
   return begin(db, {}, (trx) => work(trx as PlainTrx))
 }
 
-function begin<T>(
+const DEADLOCK = '40P01'
+const TRIES = 3
+
+/** Two transactions that waited for each other: one was undone whole, and is simply run again. */
+async function begin<T>(
   db: Knex,
   options: BeginOptions & { readOnly?: boolean },
   work: (trx: Knex.Transaction) => Promise<T>,
 ): Promise<T> {
-  // Knex hands unknown options on to the transaction class, where BEGIN reads them.
-  return db.transaction(work, options as Knex.TransactionConfig)
+  for (let tried = 1; ; tried += 1) {
+    try {
+      // Knex hands unknown options on to the transaction class, where BEGIN reads them.
+      return await db.transaction(work, options as Knex.TransactionConfig)
+    } catch (error) {
+      const { code } = Object(error) as { code?: string }
+      if (code !== DEADLOCK || tried === TRIES) throw error
+    }
+  }
 }
