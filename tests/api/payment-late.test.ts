@@ -1,7 +1,8 @@
-import { describe, expect, it } from 'vitest'
+import { beforeEach, describe, expect, it } from 'vitest'
 import { readBooks } from '../support/books'
-import { takePlace, signUp } from '../support/builders'
+import { openAcademy, signUp, takePlace } from '../support/builders'
 import { useWorld } from '../support/use-world'
+import { WORLD_BEGINS } from '../support/world'
 import {
   holdRun,
   justAfter,
@@ -13,9 +14,20 @@ import {
 
 const world = await useWorld()
 
+/** The provider's test card whose refunds fail. */
+const REFUND_FAILS = '4000000000005126'
+
 /** A hold of the clinic's only place that lapsed while a payment page of its order stayed open. */
-async function lapsedWithPage(): Promise<{ hold: Hold; page: string }> {
-  const hold = await holdRun(world, { capacity: 1 })
+async function lapsedWithPage(
+  given: { minutesAhead?: number } = {},
+): Promise<{ hold: Hold; page: string }> {
+  const academy = await openAcademy(world, { clinic: { capacity: 1 } })
+  const [first] = academy.clinic.sessions
+  const { minutesAhead } = given
+  if (minutesAhead) {
+    world.clock.moveTo(new Date(Date.parse(first!.startsAt) - minutesAhead * 60_000))
+  }
+  const hold = await holdRun(world, { academy })
   await startPaying(hold)
   const page = await openStrayPage(world, hold)
   world.clock.moveTo(justAfter(hold))
@@ -23,6 +35,8 @@ async function lapsedWithPage(): Promise<{ hold: Hold; page: string }> {
   expect(await readEnrolment(hold)).toMatchObject({ state: 'cancelled', endedBecause: 'lapsed' })
   return { hold, page }
 }
+
+beforeEach(() => world.clock.moveTo(WORLD_BEGINS))
 
 const refundsAtProvider = (page: string) => {
   const { payment = null } = world.payments.state.checkouts[page] ?? {}
@@ -80,6 +94,34 @@ describe('a payment that comes when the hold has lapsed', () => {
       'unplaced-payment': 1,
       'unplaced-refund': 1,
     })
+  })
+
+  it('goes back by itself when the first session has begun', async () => {
+    const { hold, page } = await lapsedWithPage({ minutesAhead: 30 })
+    world.clock.moveTo(new Date(hold.academy.clinic.sessions[0]!.startsAt))
+    world.payments.pay(page)
+    await world.drain()
+
+    expect((await readEnrolment(hold)).state).toBe('cancelled')
+    expect(refundsAtProvider(page)).toMatchObject([{ amount: 24_000, status: 'succeeded' }])
+  })
+
+  it('is owed back once when the provider cannot give it back, and its answer was lost', async () => {
+    const { hold, page } = await lapsedWithPage()
+    await takePlace(await signUp(world), hold.academy, { clinic: hold.academy.clinic })
+    world.payments.loseNextAnswers(2)
+    world.payments.pay(page, REFUND_FAILS)
+    await world.drain()
+    expect(world.takeErrors()).toHaveLength(1)
+    // It fails a little later, and that is the first we hear of it.
+    world.clock.moveBy(2_000)
+    world.payments.advanceClock(0)
+    await world.drain()
+
+    expect(refundsAtProvider(page)).toMatchObject([{ status: 'failed' }])
+    const { balances } = await readBooks(world, hold.academy.slug)
+    expect(balances['refunds-due']).toBe(-24_000)
+    expect(balances['provider-clearing']).toBe(24_000 - 625)
   })
 
   it('goes back once when the answer to it was lost', async () => {

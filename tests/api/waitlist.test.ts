@@ -162,6 +162,27 @@ describe('a run and its sessions', () => {
     expect(one?.places.map(({ sessionId }) => sessionId)).toEqual([third])
   })
 
+  it('offers the rest of a run when the only full session of it is called off', async () => {
+    const full = await fillClinic(world, 1)
+    const [waits] = full.others
+    await join(full, waits!)
+    const { academy, clinic } = full
+    for (const { id: sessionId } of clinic.sessions.slice(1)) {
+      const params = { academy: academy.slug, sessionId }
+      await academy.owner.person.must('sessions.change', { params, body: { capacity: 3 } })
+    }
+    await world.drain()
+    expect((await look(full, waits!)).entry).toMatchObject({ state: 'waiting' })
+
+    await academy.owner.person.must('sessions.call-off', {
+      params: { academy: academy.slug, sessionId: clinic.sessions[0]!.id },
+      body: { reason: 'Lightning' },
+    })
+    await world.drain()
+    expect((await look(full, waits!)).enrolment).toMatchObject({ isOffer: true, kind: 'run' })
+    expect((await look(full, waits!)).enrolment?.places).toHaveLength(7)
+  })
+
   it('passes a run by while one of its sessions is taken, and offers that session', async () => {
     const full = await fillClinic(world, 2)
     const [forOne, forRun] = full.others

@@ -9,8 +9,10 @@ import {
   lockConfirmedPlaces,
   lockEnrolment,
   lockOwnEnrolment,
+  lockSeatsOf,
   type Place,
 } from '../enrolments/enrolments'
+import { offerFreedPlaces } from '../enrolments/waitlist'
 import { post, type PlaceAmount } from '../ledger/ledger'
 import { calledOffCredit, calledOffMoney } from '../ledger/postings'
 import { Problem, notFound } from '../platform/errors'
@@ -42,9 +44,12 @@ export async function owePlacesOfSession(
     const session = await findSession(trx, sessionId)
     if (session?.state !== 'called-off') return
     const academy = await readAcademy(trx)
+    await lockSeatsOf(trx, session.clinicId)
     for (const place of await lockConfirmedPlaces(trx, sessionId)) {
       await owe(services, trx, { academy, place })
     }
+    // A full session may have been all that kept the rest of the run from those who wait.
+    await offerFreedPlaces(services, trx, { academyId, clinicId: session.clinicId })
     await services.outbox.emit(trx, 'session.owed', { academyId, sessionId })
   })
 }

@@ -1,5 +1,6 @@
 import type { Parsed } from '@marram/contract'
 import { joinAsGolfer } from '../academies/academies'
+import { listSessionsOf } from '../clinics/clinics'
 import {
   addDependant,
   checkOwnGolfer,
@@ -15,19 +16,21 @@ import { together } from '../platform/tenancy/together'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { refuseFull, takePlaces } from './hold'
 import type { EndedBecause, Enrolment, Place } from './models'
-import { checkFit, findOnSale } from './on-sale'
+import { checkFit, checkOpen, findOnSale } from './on-sale'
 import { readStanding, type GolferToPlace } from './on-sale-queries'
 import {
   confirmSeats,
   findActiveEnrolment,
   listPlaces,
   lockEnrolment,
+  lockSeatsOf,
   returnSeats,
   setPlacesState,
   settleOffer,
   takeSeats,
   updateEnrolment,
 } from './queries'
+import { sessionsAhead } from './rules'
 import { offerFreedPlaces } from './waitlist'
 
 interface Wish {
@@ -72,6 +75,7 @@ async function tryHold<View>(
     findOnSale(trx, wanted, now),
     readStanding(trx, { accountId: person.id, golferId, clinicId }),
   )
+  checkOpen(onSale)
   if (!standing.isMember) await joinAsGolfer(trx, { accountId: person.id, now })
   const known = whom.kind === 'new' ? null : standing.golfer
   const golfer = await golferFor(services, trx, { person, whom, known })
@@ -187,7 +191,8 @@ export async function confirmHold(
 
 /**
  * Takes the places of a hold that has ended again, for a payment that came late. All of them or none:
- * resolves to false when any is gone, or when they were confirmed and then given up or called off.
+ * resolves to false when any is gone or has begun, or when they were confirmed and then given up or
+ * called off.
  */
 export async function retakeLapsed(
   services: Services,
@@ -199,6 +204,9 @@ export async function retakeLapsed(
   if (!wasHold) return false
   const places = await listPlaces(trx, enrolmentId)
   const sessionIds = places.map(({ sessionId }) => sessionId)
+  const sessions = await listSessionsOf(trx, enrolment.clinicId)
+  const ahead = new Set(sessionsAhead(sessions, services.clock.now()).map(({ id }) => id))
+  if (!sessionIds.every((id) => ahead.has(id))) return false
   if (await findActiveEnrolment(trx, { golferId: enrolment.golferId, sessionIds })) return false
   const seats = await takeSeats(trx, { sessionIds, as: 'confirmed' })
   if (seats.length < sessionIds.length) {
@@ -221,6 +229,7 @@ export async function releaseHold(
   const { academyId, enrolmentId, because } = given
   const enrolment = await lockEnrolment(trx, enrolmentId)
   if (enrolment?.state !== 'held') return false
+  await lockSeatsOf(trx, enrolment.clinicId)
   const held = (await listPlaces(trx, enrolmentId)).filter(({ state }) => state === 'held')
   await end(services, trx, { enrolment, places: held, because, from: 'held' })
   await settleOffer(trx, { enrolmentId, state: 'passed' })
@@ -235,6 +244,7 @@ export async function giveUpPlaces(
   given: { academyId: string; enrolment: Enrolment; places: readonly Place[] },
 ): Promise<void> {
   const { academyId, enrolment, places } = given
+  await lockSeatsOf(trx, enrolment.clinicId)
   await end(services, trx, { enrolment, places, because: 'given-up', from: 'confirmed' })
   await offerFreedPlaces(services, trx, { academyId, clinicId: enrolment.clinicId })
 }
@@ -289,6 +299,7 @@ export {
   listWaitlist,
   lockConfirmedPlaces,
   lockEnrolment,
+  lockSeatsOf,
   type EnrolmentRow,
   type PlaceRow,
 } from './queries'

@@ -20,7 +20,7 @@ export interface SessionOnSale {
 export type AcademyOnSale = Pick<
   Academy,
   'academyId' | 'currency' | 'taxMode' | 'taxBasisPoints' | 'waiver' | 'holdMinutes' | 'offerHours'
->
+> & { isOpen: boolean }
 
 export type ClinicOnSale = Pick<
   Clinic,
@@ -47,7 +47,7 @@ export interface OfferRow {
 const ACADEMY = `json_build_object(
   'academyId', a.academy_id, 'currency', a.currency, 'taxMode', a.tax_mode,
   'taxBasisPoints', a.tax_basis_points, 'waiver', a.waiver, 'holdMinutes', a.hold_minutes,
-  'offerHours', a.offer_hours)`
+  'offerHours', a.offer_hours, 'isOpen', a.published_at IS NOT NULL)`
 
 const CLINIC = `json_build_object(
   'id', c.id, 'state', c.state, 'saleMode', c.sale_mode, 'payMode', c.pay_mode,

@@ -62,6 +62,11 @@ export async function findOnSale(
   return { academy, clinic, kind, taken, price }
 }
 
+/** An academy that is not open yet sells nothing by itself; its staff may give places all the same. */
+export function checkOpen({ academy }: OnSale): void {
+  if (!academy.isOpen) throw notOnSale('This academy is not open yet.')
+}
+
 const notOnSale = (sentence: string) => new Problem('not-on-sale', sentence)
 
 /** Throws `golfer-does-not-fit` with the reason in words. */

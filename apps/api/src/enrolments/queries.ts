@@ -120,6 +120,16 @@ export async function takeSeats(
   return rows.map(({ id }) => id)
 }
 
+/**
+ * Locks the seats of a whole clinic, in id order. Whoever gives seats back does this first: what is
+ * then offered to those who wait is counted while nobody else can take it.
+ */
+export async function lockSeatsOf(trx: AcademyTrx, clinicId: string): Promise<void> {
+  await trx.raw('SELECT id FROM sessions WHERE clinic_id = ? ORDER BY id FOR NO KEY UPDATE', [
+    clinicId,
+  ])
+}
+
 /** Gives seats back, in id order. */
 export async function returnSeats(
   trx: AcademyTrx,

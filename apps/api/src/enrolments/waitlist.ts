@@ -9,13 +9,14 @@ import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { takePlaces } from './hold'
 import type { WaitlistEntry } from './models'
-import { checkFit, findOnSale, type OnSale, type WantedPlaces } from './on-sale'
+import { checkFit, checkOpen, findOnSale, type OnSale, type WantedPlaces } from './on-sale'
 import {
   findActiveEnrolment,
   findWaitlistEntry,
   insertWaitlistEntry,
   listWaitlist,
   lockQueue,
+  lockSeatsOf,
   updateWaitlistEntry,
   type WaitlistRow,
 } from './queries'
@@ -36,6 +37,7 @@ export async function joinWaitlist(
     const golfer = await whoWaits(services, trx, { person, wanted })
     const golferId = golfer.id
     const onSale = await findOnSale(trx, wanted, now)
+    checkOpen(onSale)
     checkFit(golfer, onSale)
     const sessionIds = onSale.taken.map(({ id }) => id)
     if (await findActiveEnrolment(trx, { golferId, sessionIds })) {
@@ -83,7 +85,7 @@ export async function leaveWaitlist(
 
 /**
  * Offers freed places to those who wait, in the transaction that freed them, so that nobody can
- * snipe them in between. Somebody who waits for a whole run is offered it only when every session
+ * snipe them in between; that transaction has locked the clinic's seats. Somebody who waits for a whole run is offered it only when every session
  * still to come has a place.
  */
 export async function offerFreedPlaces(
@@ -114,9 +116,10 @@ export async function offerOpenedPlaces(
   services: Services,
   { academyId, clinicId }: { academyId: string; clinicId: string },
 ): Promise<void> {
-  await inAcademy(services.db, academyId, (trx) =>
-    offerFreedPlaces(services, trx, { academyId, clinicId }),
-  )
+  await inAcademy(services.db, academyId, async (trx) => {
+    await lockSeatsOf(trx, clinicId)
+    await offerFreedPlaces(services, trx, { academyId, clinicId })
+  })
 }
 
 async function offer(
