@@ -1,4 +1,5 @@
 import { expect, it } from 'vitest'
+import { lockSession } from '../../apps/api/src/clinics/clinics'
 import { inAcademy, type AcademyTrx } from '../../apps/api/src/platform/tenancy/transaction'
 import { asSuperuser } from '../support/books'
 import { openAcademy } from '../support/builders'
@@ -18,10 +19,23 @@ function meeting(parties: number): () => Promise<void> {
   }
 }
 
-const touch = (trx: AcademyTrx, sessionId: string) =>
-  trx.raw('UPDATE sessions SET calendar_sequence = calendar_sequence + 1 WHERE id = ?', [sessionId])
+const raise = 'UPDATE sessions SET calendar_sequence = calendar_sequence + 1 WHERE id = ?'
 
-it('runs a transaction again that was undone because two waited for each other', async () => {
+it.each([
+  [
+    'a raw question',
+    async (trx: AcademyTrx, sessionId: string) => {
+      await trx.raw(raise, [sessionId])
+    },
+  ],
+  [
+    'a model',
+    async (trx: AcademyTrx, sessionId: string) => {
+      await lockSession(trx, sessionId)
+      await trx.raw(raise, [sessionId])
+    },
+  ],
+])('runs a transaction again that a deadlock undid in %s', async (_what, touch) => {
   const { slug, clinic } = await openAcademy(world)
   const [one, other] = clinic.sessions.map(({ id }) => id)
   const academyId = await asSuperuser(world, async (db) => {

@@ -2,6 +2,7 @@ import type { Answer } from '@marram/contract'
 import { findClashesBetween, type TakenTime } from '@marram/schedule'
 import { formatTime } from '@marram/schedule/format'
 import { findCoaches } from '../coaches/coaches'
+import { refusalOf } from '../platform/db/refusal'
 import { Problem } from '../platform/errors'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 import { findAreas } from '../venues/venues'
@@ -81,7 +82,7 @@ export async function sayClashes<T>(work: () => Promise<T>): Promise<T> {
   try {
     return await work()
   } catch (error) {
-    const { code, constraint } = Object(error) as { code?: string; constraint?: string }
+    const { code, constraint } = refusalOf(error)
     if (code !== EXCLUSION_VIOLATION) throw error
     throw new Problem(
       'clash',

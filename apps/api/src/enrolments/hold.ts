@@ -1,3 +1,4 @@
+import { refusalOf } from '../platform/db/refusal'
 import { Problem } from '../platform/errors'
 import { newId } from '../platform/ids'
 import type { Services } from '../platform/services'
@@ -74,7 +75,7 @@ async function sayDouble<T>(writing: Promise<T>): Promise<T> {
   try {
     return await writing
   } catch (error) {
-    const { code, constraint } = Object(error) as { code?: string; constraint?: string }
+    const { code, constraint } = refusalOf(error)
     if (code === UNIQUE_VIOLATION && constraint === 'places_one_while_active') {
       throw new Problem('already-has-place', 'This golfer has a place there already.')
     }

@@ -2,6 +2,7 @@ import { isSlug } from '@marram/contract'
 import type { Knex } from 'knex'
 import type pg from 'pg'
 import type { BeginOptions } from '../db/client'
+import { refusalOf } from '../db/refusal'
 import { invariant } from '../invariant'
 import { askBetween, type Question } from './ask'
 
@@ -77,8 +78,7 @@ async function begin<T>(
       // Knex hands unknown options on to the transaction class, where BEGIN reads them.
       return await db.transaction(work, options as Knex.TransactionConfig)
     } catch (error) {
-      const { code } = Object(error) as { code?: string }
-      if (code !== DEADLOCK || tried === TRIES) throw error
+      if (refusalOf(error).code !== DEADLOCK || tried === TRIES) throw error
     }
   }
 }
