@@ -654,6 +654,7 @@ CREATE TABLE public.refunds (
     provider_refund text,
     created_at timestamp with time zone NOT NULL,
     done_at timestamp with time zone,
+    asked_at timestamp with time zone NOT NULL,
     CONSTRAINT refunds_amount_minor_check CHECK ((amount_minor > 0)),
     CONSTRAINT refunds_method_check CHECK ((method = ANY (ARRAY['card'::text, 'cash'::text, 'credit'::text]))),
     CONSTRAINT refunds_reason_check CHECK ((reason = ANY (ARRAY['given-up'::text, 'called-off'::text, 'late-payment'::text]))),
@@ -1489,6 +1490,8 @@ GRANT SELECT(id) ON TABLE public.refunds TO marram_dispatch;
 GRANT SELECT(state) ON TABLE public.refunds TO marram_dispatch;
 
 GRANT SELECT(created_at) ON TABLE public.refunds TO marram_dispatch;
+
+GRANT SELECT(asked_at) ON TABLE public.refunds TO marram_dispatch;
 
 GRANT SELECT,INSERT,DELETE,UPDATE ON TABLE public.session_areas TO marram_app;
 

@@ -131,7 +131,7 @@ describe('the product’s payments adapter', () => {
     expect(asked).toMatchObject({ refundId: 'refund-1', state: first })
     expect(await provider.refund({ ...wanted, refundId: 'refund-1' })).toEqual(asked)
     fake.advanceClock(2)
-    expect(await provider.readRefund(account, asked.id)).toMatchObject({ state: last })
+    expect(await provider.readRefund(account, asked.id!)).toMatchObject({ state: last })
     // Back to the test's own time, which deliveries are dated by.
     fake.advanceClock(-2)
   })

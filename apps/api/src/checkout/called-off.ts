@@ -5,6 +5,7 @@ import {
   endCalledOffPlaces,
   findEnrolment,
   findPlace,
+  listEnrolmentsIn,
   listPlaces,
   lockConfirmedPlaces,
   lockEnrolment,
@@ -44,6 +45,8 @@ export async function owePlacesOfSession(
     const session = await findSession(trx, sessionId)
     if (session?.state !== 'called-off') return
     const academy = await readAcademy(trx)
+    // Enrolments before their places, in one order, as everybody does who ends them.
+    for (const id of await listEnrolmentsIn(trx, sessionId)) await lockEnrolment(trx, id)
     await lockSeatsOf(trx, session.clinicId)
     for (const place of await lockConfirmedPlaces(trx, sessionId)) {
       await owe(services, trx, { academy, place })
@@ -248,6 +251,7 @@ async function giveMoneyBack(
     currency: academy.currency,
     state: isCard ? 'asked' : 'done',
     createdAt: now,
+    askedAt: now,
     doneAt: isCard ? null : now,
   })
   const { academyId } = academy

@@ -170,6 +170,7 @@ async function askRefund(
     currency: academy.currency,
     state: isCard ? 'asked' : 'done',
     createdAt: now,
+    askedAt: now,
     doneAt: isCard ? null : now,
   })
   const { academyId } = academy

@@ -51,6 +51,8 @@ export class Refund extends AcademyModel {
   state!: 'asked' | 'done' | 'failed'
   providerRefund!: string | null
   createdAt!: Date
+  /** When the provider was last asked for it, or after it. */
+  askedAt!: Date
   doneAt!: Date | null
 }
 

@@ -61,7 +61,8 @@ export interface ProviderPayment {
 }
 
 export interface ProviderRefund {
-  id: string
+  /** Null for one that the provider would not begin. */
+  id: string | null
   refundId: string | null
   state: 'asked' | 'done' | 'failed'
 }

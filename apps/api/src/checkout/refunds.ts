@@ -8,7 +8,10 @@ import { inAcademy } from '../platform/tenancy/transaction'
 import type { PaymentsProvider, ProviderRefund } from './provider'
 import { findPayment, lockRefund, updateRefund } from './queries'
 
-/** Carries a refund out at the provider. The same refund asked again is the same one there. */
+/**
+ * Carries a refund out at the provider. One that the provider has taken on is only asked after: what
+ * it once knew as the same request it forgets in time, and would pay again.
+ */
 export async function carryOutRefund(
   services: Services,
   provider: PaymentsProvider,
@@ -20,18 +23,21 @@ export async function carryOutRefund(
     const payment = await findPayment(trx, refund.paymentId)
     const { paymentsAccount } = await readAcademy(trx)
     invariant(payment?.providerPayment && paymentsAccount, 'a card refund has a card payment')
+    await updateRefund(trx, refundId, { askedAt: services.clock.now() })
     return { refund, payment: payment.providerPayment, account: paymentsAccount }
   })
   if (!asked) return
   const { refund, payment, account } = asked
-  const answer = await provider.refund({
-    account,
-    payment,
-    amountMinor: refund.amountMinor,
-    currency: refund.currency,
-    refundId,
-    orderId: refund.orderId,
-  })
+  const answer = refund.providerRefund
+    ? await provider.readRefund(account, refund.providerRefund)
+    : await provider.refund({
+        account,
+        payment,
+        amountMinor: refund.amountMinor,
+        currency: refund.currency,
+        refundId,
+        orderId: refund.orderId,
+      })
   await settleRefund(services, { academyId, answer: { ...answer, refundId } })
 }
 

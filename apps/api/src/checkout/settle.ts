@@ -1,6 +1,6 @@
 import { readAcademy, type Academy } from '../academies/academies'
 import { findClinic } from '../clinics/clinics'
-import { confirmHold, findEnrolment, retakeLapsed } from '../enrolments/enrolments'
+import { confirmHold, findEnrolment, lockEnrolment, retakeLapsed } from '../enrolments/enrolments'
 import { post } from '../ledger/ledger'
 import { fees, saleByCard, unplacedPayment } from '../ledger/postings'
 import { newId } from '../platform/ids'
@@ -10,7 +10,14 @@ import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { oweForCalledOff } from './called-off'
 import type { Order } from './models'
 import type { Checkout, PaymentsProvider, ProviderPayment } from './provider'
-import { insertPayment, insertRefund, listEnrolmentPlaces, lockOrder, updateOrder } from './queries'
+import {
+  findOrder,
+  insertPayment,
+  insertRefund,
+  listEnrolmentPlaces,
+  lockOrder,
+  updateOrder,
+} from './queries'
 
 /**
  * A checkout was paid: the hold is confirmed and the sale posted, once, however often and in
@@ -28,7 +35,7 @@ export async function settlePaidCheckout(
   const payment = await provider.readPayment(account, checkout.payment)
   if (!payment.isSucceeded) return
   await inAcademy(services.db, academyId, async (trx) => {
-    const order = await lockOrder(trx, orderId)
+    const order = await lockWithEnrolment(trx, orderId)
     if (!order) return
     const now = services.clock.now()
     const paymentId = newId(now)
@@ -48,6 +55,14 @@ export async function settlePaidCheckout(
     const academy = await readAcademy(trx)
     await place(services, trx, { academy, order, payment, paymentId })
   })
+}
+
+/** Locks an order behind its enrolment, as everybody does who changes both. */
+async function lockWithEnrolment(trx: AcademyTrx, orderId: string): Promise<Order | undefined> {
+  const order = await findOrder(trx, orderId)
+  if (!order) return undefined
+  await lockEnrolment(trx, order.enrolmentId)
+  return lockOrder(trx, orderId)
 }
 
 interface Paid {
@@ -121,6 +136,7 @@ async function giveBack(services: Services, trx: AcademyTrx, paid: Paid): Promis
     currency: order.currency,
     state: 'asked',
     createdAt: now,
+    askedAt: now,
   })
   const { academyId } = academy
   await services.outbox.emit(trx, 'refund.asked', { academyId, refundId })

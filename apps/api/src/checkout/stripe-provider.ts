@@ -10,8 +10,6 @@ import type {
 } from './provider'
 
 const WEBHOOK_TOLERANCE_SECONDS = 300
-/** The provider takes amounts in three decimals only when the last one is 0. */
-const THREE_DECIMALS = new Set(['KWD', 'BHD', 'JOD', 'OMR', 'TND'])
 
 /** The payment provider, through its own SDK; the only file that knows it. */
 export function makeStripeProvider(config: Config['payments']): PaymentsProvider {
@@ -84,18 +82,20 @@ export function makeStripeProvider(config: Config['payments']): PaymentsProvider
         await asked(() => stripe.paymentIntents.retrieve(id, { expand }, on(account))),
       )
     },
-    async refund({ account, payment, amountMinor, currency, refundId, orderId }) {
-      const refund = await asked(() =>
-        stripe.refunds.create(
-          {
-            payment_intent: payment,
-            amount: toProviderAmount(amountMinor, currency),
-            metadata: { refund_id: refundId, order_id: orderId },
-          },
-          { ...on(account), idempotencyKey: `order:${orderId}:refund-${refundId}:1` },
-        ),
-      )
-      return toRefund(refund)
+    async refund({ account, payment, amountMinor, refundId, orderId }) {
+      const metadata = { refund_id: refundId, order_id: orderId }
+      const idempotencyKey = `order:${orderId}:refund-${refundId}:1`
+      try {
+        const refund = await stripe.refunds.create(
+          { payment_intent: payment, amount: amountMinor, metadata },
+          { ...on(account), idempotencyKey },
+        )
+        return toRefund(refund)
+      } catch (error) {
+        // Charged back, or given back in the provider's own pages: asking again changes nothing.
+        if (!(error instanceof Stripe.errors.StripeInvalidRequestError)) throw unavailable(error)
+        return { id: null, refundId, state: 'failed' }
+      }
     },
     readRefund: async (account, id) =>
       toRefund(await asked(() => stripe.refunds.retrieve(id, {}, on(account)))),
@@ -136,7 +136,7 @@ function checkoutParams(checkout: NewCheckout): Stripe.Checkout.SessionCreatePar
         quantity: 1,
         price_data: {
           currency: currency.toLowerCase(),
-          unit_amount: toProviderAmount(checkout.amountMinor, currency),
+          unit_amount: checkout.amountMinor,
           product_data: { name: checkout.title },
         },
       },
@@ -144,18 +144,13 @@ function checkoutParams(checkout: NewCheckout): Stripe.Checkout.SessionCreatePar
     payment_intent_data: {
       metadata,
       ...(checkout.applicationFeeMinor > 0
-        ? { application_fee_amount: toProviderAmount(checkout.applicationFeeMinor, currency) }
+        ? { application_fee_amount: checkout.applicationFeeMinor }
         : {}),
     },
     success_url: checkout.successUrl,
     cancel_url: checkout.cancelUrl,
     expires_at: Math.floor(checkout.expiresAt.getTime() / 1000),
   }
-}
-
-/** Our minor units are the provider's for every currency we offer; three decimals end in 0. */
-function toProviderAmount(amountMinor: number, currency: string): number {
-  return THREE_DECIMALS.has(currency) ? Math.round(amountMinor / 10) * 10 : amountMinor
 }
 
 function localAddress(url: string) {

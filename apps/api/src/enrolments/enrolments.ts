@@ -294,6 +294,7 @@ export {
   findEnrolment,
   findPlace,
   listEnrolments,
+  listEnrolmentsIn,
   listPlaceRows,
   listPlaces,
   listWaitlist,

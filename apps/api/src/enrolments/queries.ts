@@ -321,6 +321,15 @@ export async function listPlaceRows(
   return rows
 }
 
+/** The enrolments with a confirmed place in a session, by id. */
+export async function listEnrolmentsIn(trx: AcademyTrx, sessionId: string): Promise<string[]> {
+  const rows = await Place.query(trx)
+    .where({ sessionId, state: 'confirmed' })
+    .distinct('enrolmentId')
+    .orderBy('enrolmentId')
+  return rows.map(({ enrolmentId }) => enrolmentId)
+}
+
 /** Confirmed places of a session, locked. */
 export async function lockConfirmedPlaces(trx: AcademyTrx, sessionId: string): Promise<Place[]> {
   return Place.query(trx).where({ sessionId, state: 'confirmed' }).orderBy('id').forUpdate()

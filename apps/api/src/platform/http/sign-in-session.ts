@@ -16,18 +16,13 @@ const isSecure = (config: Services['config']): boolean => config.publicUrl.start
 
 /** The middleware that carries a sign-in from request to request. */
 export function signInSessions(services: Services): RequestHandler {
-  const store = new SignInStore(services)
   return session({
     name: cookieName(services.config),
     secret: services.config.secret,
-    store,
+    store: new SignInStore(services),
     resave: false,
     saveUninitialized: false,
-    genid: () => {
-      const id = randomBytes(32).toString('base64url')
-      store.expectNew(id)
-      return id
-    },
+    genid: () => randomBytes(32).toString('base64url'),
     cookie: {
       httpOnly: true,
       sameSite: 'lax',

@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto'
-import { Store, type SessionData } from 'express-session'
+import type { Request } from 'express'
+import { Store, type Session, type SessionData } from 'express-session'
 import type { Services } from '../services'
 
 declare module 'express-session' {
@@ -19,16 +20,19 @@ type Done<T> = (error: unknown, value?: T) => void
  */
 export class SignInStore extends Store {
   readonly #services: Pick<Services, 'db' | 'clock'>
-  readonly #fresh = new Set<string>()
+  /** Sessions that stand in the database; any other has an id that this process has just made. */
+  readonly #kept = new WeakSet<SessionData>()
 
   constructor(services: Pick<Services, 'db' | 'clock'>) {
     super()
     this.#services = services
   }
 
-  /** Called for ids that this process has just generated, which may be inserted. */
-  expectNew(id: string): void {
-    this.#fresh.add(id)
+  /** The library makes the session of a request here, from what was read. */
+  override createSession(request: Request, data: SessionData): Session & SessionData {
+    const session = super.createSession(request, data)
+    this.#kept.add(session)
+    return session
   }
 
   override get(id: string, done: Done<SessionData | null>): void {
@@ -76,9 +80,10 @@ export class SignInStore extends Store {
       data: JSON.stringify(session),
       expiresAt: new Date(clock.now().getTime() + (session.cookie.originalMaxAge ?? 0)),
     }
-    if (this.#fresh.delete(id)) {
+    if (!this.#kept.has(session)) {
       const key = { idHash: hashOf(id), createdAt: clock.now() }
       await db('sign_in_sessions').insert({ ...key, ...row })
+      this.#kept.add(session)
       return
     }
     await db('sign_in_sessions')

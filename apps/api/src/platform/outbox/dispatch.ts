@@ -1,5 +1,9 @@
+import { setTimeout } from 'node:timers/promises'
 import PgBoss from 'pg-boss'
 import { ALL_QUEUES, queueOf, type EventName, type Handlers, type Listener } from './events'
+
+/** Taken from a queue at once: few enough to be handled, one after another, before they expire. */
+const BATCH = 5
 
 type AnyHandler = (payload: object) => Promise<void>
 
@@ -42,6 +46,19 @@ export function makeDispatcher(options: {
     }
   }
 
+  const pace = makePace()
+  let listening: Promise<unknown> = Promise.resolve()
+  const listen = async (queue: string): Promise<void> => {
+    while (!pace.isOver) {
+      try {
+        await drainQueue(boss, queue, handle, pace)
+      } catch (error) {
+        options.onError(error, queue)
+      }
+      await pace.pause()
+    }
+  }
+
   let isOpen = false
   const open = async (): Promise<void> => {
     if (!isOpen) await boss.start()
@@ -51,23 +68,36 @@ export function makeDispatcher(options: {
   return {
     async start() {
       await open()
-      for (const queue of ALL_QUEUES) {
-        const pace = { pollingIntervalSeconds: 0.5, batchSize: 1 }
-        await boss.work<object>(queue, pace, async ([job]) => {
-          if (job) await handle(queue, job.data)
-        })
-      }
+      listening = Promise.all(ALL_QUEUES.map(({ name }) => listen(name)))
     },
     async drain() {
       await open()
       let handled = 0
       for (let before = -1; before !== handled;) {
         before = handled
-        for (const queue of ALL_QUEUES) handled += await drainQueue(boss, queue, handle)
+        for (const { name } of ALL_QUEUES) handled += await drainQueue(boss, name, handle)
       }
       return handled
     },
-    stop: () => boss.stop({ graceful: true, timeout: 10_000 }),
+    async stop() {
+      pace.end()
+      await listening
+      await boss.stop({ graceful: false })
+    },
+  }
+}
+
+const PAUSE_MS = 500
+
+/** Pauses between looks into an empty queue, cut short when it is over. */
+function makePace() {
+  const over = new AbortController()
+  return {
+    get isOver() {
+      return over.signal.aborted
+    },
+    end: () => over.abort(),
+    pause: () => setTimeout(PAUSE_MS, undefined, { signal: over.signal }).catch(() => undefined),
   }
 }
 
@@ -75,10 +105,12 @@ async function drainQueue(
   boss: PgBoss,
   queue: string,
   handle: (queue: string, payload: object) => Promise<void>,
+  until: { isOver: boolean } = { isOver: false },
 ): Promise<number> {
   let handled = 0
   for (;;) {
-    const jobs = await boss.fetch<object>(queue, { batchSize: 50 })
+    if (until.isOver) return handled
+    const jobs = await boss.fetch<object>(queue, { batchSize: BATCH })
     if (jobs.length === 0) return handled
     for (const job of jobs) {
       try {
@@ -100,7 +132,7 @@ function handlersByQueue(listeners: Record<Listener, Handlers>): Map<string, Any
       byQueue.set(queueOf(event as EventName, listener), handler as AnyHandler)
     }
   }
-  const missing = ALL_QUEUES.filter((queue) => !byQueue.has(queue))
+  const missing = ALL_QUEUES.filter(({ name }) => !byQueue.has(name)).map(({ name }) => name)
   if (missing.length > 0) throw new Error(`Nobody handles: ${missing.join(', ')}.`)
   return byQueue
 }

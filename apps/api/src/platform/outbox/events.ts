@@ -45,6 +45,16 @@ export const LISTENERS = {
   'mail.told': ['messaging'],
 } as const satisfies Record<EventName, readonly string[]>
 
+/**
+ * What the sweep finds due, and by which id. It finds it again for as long as it is due, so that one
+ * waiting job for each is enough, and a job that fails is not tried again by itself.
+ */
+export const SWEPT: { [E in EventName]?: keyof OutboxEvents[E] } = {
+  'hold.lapsed': 'enrolmentId',
+  'choice.due': 'placeId',
+  'refund.asked': 'refundId',
+}
+
 export type Listener = 'checkout' | 'messaging'
 
 /** The handlers of one listener, by event. */
@@ -52,6 +62,12 @@ export type Handlers = { [E in EventName]?: (payload: OutboxEvents[E]) => Promis
 
 export const queueOf = (event: EventName, listener: string): string => `${listener}.${event}`
 
-export const ALL_QUEUES: readonly string[] = Object.entries(LISTENERS).flatMap(
-  ([event, listeners]) => listeners.map((listener) => `${listener}.${event}`),
+export interface Queue {
+  name: string
+  isSwept: boolean
+}
+
+export const ALL_QUEUES: readonly Queue[] = Object.entries(LISTENERS).flatMap(
+  ([event, listeners]) =>
+    listeners.map((listener) => ({ name: `${listener}.${event}`, isSwept: event in SWEPT })),
 )

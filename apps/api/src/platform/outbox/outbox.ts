@@ -1,7 +1,7 @@
 import type { Knex } from 'knex'
 import PgBoss from 'pg-boss'
 import { invariant } from '../invariant'
-import { ALL_QUEUES, LISTENERS, queueOf, type EventName, type OutboxEvents } from './events'
+import { ALL_QUEUES, LISTENERS, SWEPT, queueOf, type EventName, type OutboxEvents } from './events'
 
 export interface Outbox {
   /** Writes an event in the caller's transaction; it is heard only if that commits. */
@@ -23,10 +23,12 @@ export function makeOutbox(): Outbox {
   return {
     async emit(trx, event, payload) {
       const db = { executeSql: (sql: string, values: unknown[]) => runOn(trx, sql, values) }
+      const key = SWEPT[event]
+      const once = key ? { singletonKey: String(payload[key]) } : {}
       for (const listener of LISTENERS[event]) {
-        const id = await boss.send(queueOf(event, listener), payload, { db })
-        // pg-boss answers null for a queue that was never made.
-        invariant(id, `the queue of ${event} for ${listener} is missing`)
+        const id = await boss.send(queueOf(event, listener), payload, { db, ...once })
+        // pg-boss answers null for a job that waits already, and for a queue that was never made.
+        invariant(id ?? key, `the queue of ${event} for ${listener} is missing`)
       }
     },
   }
@@ -61,14 +63,17 @@ export async function makeQueues(owner: { url: string; knex: Knex }): Promise<vo
   })
   await boss.start()
   const known = new Set((await boss.getQueues()).map((queue) => queue.name))
-  for (const name of ALL_QUEUES.filter((queue) => !known.has(queue))) {
-    await boss.createQueue(name, {
+  for (const { name, isSwept } of ALL_QUEUES) {
+    const options: PgBoss.Queue = {
       name,
-      retryLimit: 30,
+      policy: isSwept ? 'short' : 'standard',
+      retryLimit: isSwept ? 0 : 30,
       retryDelay: 2,
       retryBackoff: true,
       expireInSeconds: 120,
-    })
+    }
+    if (known.has(name)) await boss.updateQueue(name, options)
+    else await boss.createQueue(name, options)
   }
   await boss.stop({ graceful: false, close: true })
   await owner.knex.raw(`

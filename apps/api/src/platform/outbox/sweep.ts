@@ -4,8 +4,8 @@ import type { Services } from '../services'
 import { inAcademy } from '../tenancy/transaction'
 
 const BATCH = 500
-/** A refund that the provider has not answered for this long is asked for again. */
-const REFUND_PATIENCE_MS = 10 * 60_000
+/** How long a refund may go unanswered before it is asked after; each pause doubles the last. */
+const REFUND_PATIENCE = '10 minutes'
 
 /**
  * Finds what has become due by our clock, across academies, and tells each academy's listeners.
@@ -17,7 +17,8 @@ export async function sweepDue(services: Services, dispatch: Knex): Promise<numb
   const holds = await dispatch('enrolments')
     .where({ state: 'held' })
     .andWhere('heldUntil', '<', now)
-    .orderBy('heldUntil')
+    // In no order: those that the provider does not answer for hold up no others.
+    .orderByRaw('random()')
     .limit(BATCH)
     .select<{ academyId: string; id: string }[]>('academyId', 'id')
   for (const { academyId, id: enrolmentId } of holds) {
@@ -37,7 +38,11 @@ export async function sweepDue(services: Services, dispatch: Knex): Promise<numb
   }
   const refunds = await dispatch('refunds')
     .where({ state: 'asked' })
-    .andWhere('createdAt', '<', new Date(now.getTime() - REFUND_PATIENCE_MS))
+    .andWhereRaw('asked_at + greatest(?::interval, asked_at - created_at) < ?', [
+      REFUND_PATIENCE,
+      now,
+    ])
+    .orderBy('askedAt')
     .limit(BATCH)
     .select<{ academyId: string; id: string }[]>('academyId', 'id')
   for (const { academyId, id: refundId } of refunds) {
