@@ -103,6 +103,18 @@ export const boundaries = [
     ],
   ),
   rule(
+    ['apps/api/src/ledger/**/*.ts'],
+    [
+      pattern(
+        FEATURES_UPWARDS.flat().map((name) => `../${name}/**`),
+        'The ledger knows no feature.',
+      ),
+      vendorRule,
+      databaseRule,
+    ],
+    AT_THE_EDGE,
+  ),
+  rule(
     ['apps/api/src/platform/**/*.ts'],
     [
       pattern(
@@ -127,7 +139,7 @@ export const boundaries = [
     ],
   ),
   {
-    files: ['apps/api/src/**/*.ts'],
+    files: ['apps/api/src/**/*.ts', 'packages/{money,schedule}/src/**/*.ts'],
     ignores: ['apps/api/src/platform/clock.ts', '**/*.test.ts'],
     rules: {
       'no-restricted-syntax': [
