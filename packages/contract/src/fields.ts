@@ -62,7 +62,8 @@ export const zone = z
   .string()
   .max(60)
   .refine(isZone, 'This is not a time zone we know, like Europe/Dublin.')
-export const currency = z.enum(['EUR', 'USD', 'GBP', 'CAD', 'AUD', 'NZD', 'JPY', 'KWD'])
+/** None of three decimals: cards take those in steps of ten only. */
+export const currency = z.enum(['EUR', 'USD', 'GBP', 'CAD', 'AUD', 'NZD', 'JPY'])
 export const colour = z.string().regex(/^#[0-9a-f]{6}$/, 'A colour looks like #1d5470.')
 export const phone = z
   .string()

@@ -16,7 +16,6 @@ const BY_CURRENCY: Record<string, StartingSettings> = {
   AUD: { locale: 'en-AU', taxName: 'GST', taxBasisPoints: 1000 },
   NZD: { locale: 'en-NZ', taxName: 'GST', taxBasisPoints: 1500 },
   JPY: { locale: 'en-GB', taxName: 'Tax', taxBasisPoints: 1000 },
-  KWD: { locale: 'en-GB', taxName: 'Tax', taxBasisPoints: 0 },
 }
 
 export function startingSettings(currency: string): StartingSettings {

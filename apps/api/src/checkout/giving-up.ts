@@ -21,12 +21,11 @@ import { policySentence } from './rules'
 
 type Quote = Answer<'checkout.quote-giving-up'>
 
-/** Whose place is given up: the person's own, or anybody's when staff do it. */
 export interface GivingUp {
   academyId: string
   enrolmentId: string
-  /** `staff` for a member of staff, who needs no share in it. */
-  accountId: string
+  /** A golfer gives up what is theirs or their child's; staff give up anybody's. */
+  by: { kind: 'golfer'; accountId: string } | { kind: 'staff' }
 }
 
 interface Reckoning {
@@ -103,8 +102,10 @@ async function reckon(trx: AcademyTrx, given: GivingUp, now: Date): Promise<Reck
 }
 
 async function lockFor(trx: AcademyTrx, given: GivingUp): Promise<Enrolment> {
-  const { enrolmentId, accountId } = given
-  if (accountId !== 'staff') return lockOwnEnrolment(trx, { enrolmentId, accountId })
+  const { enrolmentId, by } = given
+  if (by.kind === 'golfer') {
+    return lockOwnEnrolment(trx, { enrolmentId, accountId: by.accountId })
+  }
   const enrolment = await lockEnrolment(trx, enrolmentId)
   if (!enrolment) throw notFound('place')
   return enrolment
@@ -134,7 +135,7 @@ export async function giveUp(
     await giveUpPlaces(services, trx, { academyId, enrolment, places })
     const posting = givenUp({
       sourceId: enrolment.id,
-      what: 'Given up by the golfer',
+      what: given.by.kind === 'golfer' ? 'Given up by the golfer' : 'Given up at the desk',
       happenedOn: localDayOf(now, academy.zone),
       places: reckoning.places,
       from: source.from,

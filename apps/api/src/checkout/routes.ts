@@ -1,17 +1,16 @@
-import { readAcademy } from '../academies/academies'
 import { findClinic, isCoachOfClinic } from '../clinics/clinics'
-import { givePlaces, listWaitlist, lockEnrolment } from '../enrolments/enrolments'
+import { listWaitlist } from '../enrolments/enrolments'
 import { viewEntry } from '../enrolments/waitlist'
 import { changeGolfer, findGolfer, readGolfer } from '../golfers/golfers'
 import { notFound } from '../platform/errors'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
-import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import { inAcademy } from '../platform/tenancy/transaction'
 import { chooseForOwedPlace } from './called-off'
-import { giveUp, quoteGivingUp } from './giving-up'
-import { letGo, payAtDesk, promiseAtDesk, startCheckout, takeCash } from './orders'
+import { givePlace } from './give-place'
+import { giveUp, quoteGivingUp, type GivingUp } from './giving-up'
+import { letGo, payAtDesk, startCheckout, takeCash } from './orders'
 import { connectPayments, readPaymentsAccount } from './payments-account'
 import type { PaymentsProvider } from './provider'
 import { readCreditOfGolfer } from './queries'
@@ -28,8 +27,14 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
     const { academyId, account } = asStaff(context)
     return { academyId, enrolmentId, accountId: account.id }
   }
-  const byStaff = (context: RequestContext, enrolmentId: string) =>
-    ({ academyId: asAcademy(context).academyId, enrolmentId, accountId: 'staff' }) as const
+  const byGolfer = (context: RequestContext, enrolmentId: string): GivingUp => {
+    const { academyId, account } = asStaff(context)
+    return { academyId, enrolmentId, by: { kind: 'golfer', accountId: account.id } }
+  }
+  const byStaff = (context: RequestContext, enrolmentId: string): GivingUp => {
+    const { academyId } = asAcademy(context)
+    return { academyId, enrolmentId, by: { kind: 'staff' } }
+  }
   const readOneGolfer = (context: RequestContext, golferId: string) => {
     const { academyId, account, scope } = asStaff(context)
     const reach = { academyId, accountId: account.id, scope: scope ?? 'own' }
@@ -51,11 +56,7 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
     },
     'enrolments.give': async ({ body }, context) => {
       const { academyId } = asAcademy(context)
-      const id = await givePlaces(services, { academyId, wanted: body }, async (trx, given) => {
-        const enrolment = await lockEnrolment(trx, given)
-        invariant(enrolment, 'the enrolment was just written')
-        await promiseAtDesk(services, trx, { academy: await readAcademy(trx), enrolment })
-      })
+      const id = await givePlace(services, { academyId, wanted: body })
       return show(academyId, id)
     },
     'enrolments.of-clinic': ({ params }, context) => {
@@ -78,9 +79,9 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
         return { enrolments: await showEnrolments(trx, { golferId }) }
       }),
     'checkout.quote-giving-up': ({ params }, context) =>
-      quoteGivingUp(services, own(context, params.enrolmentId)),
+      quoteGivingUp(services, byGolfer(context, params.enrolmentId)),
     'checkout.give-up': async ({ params, body }, context) => {
-      const mine = own(context, params.enrolmentId)
+      const mine = byGolfer(context, params.enrolmentId)
       await giveUp(services, { ...mine, ...body })
       return show(mine.academyId, mine.enrolmentId)
     },

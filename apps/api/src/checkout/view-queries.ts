@@ -11,7 +11,6 @@ export type WantedViews =
 export interface OrderInView {
   state: 'open' | 'paid' | 'void'
   method: 'card' | 'desk'
-  owedAtDeskMinor: number
   lastRefusal: string | null
   totalMinor: number
   paidMinor: number

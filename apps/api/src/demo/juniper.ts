@@ -43,7 +43,6 @@ export const JUNIPER: AcademyScript = {
     },
   ],
   golfers: 38,
-  familyNames: [],
   mailDomain: 'golfer.example',
   clinics: [
     {

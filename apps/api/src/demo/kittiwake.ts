@@ -76,7 +76,6 @@ export const KITTIWAKE: AcademyScript = {
     },
   ],
   golfers: 118,
-  familyNames: [],
   mailDomain: 'golfer.example',
   clinics: KITTIWAKE_CLINICS,
 }

@@ -32,7 +32,7 @@ const WEEKS_BEHIND = 11
 /** Mail of the last days is in the mailbox; what was written earlier has been read long ago. */
 const MAIL_DAYS = 2
 
-/** Loads the demo academies through the use cases, unless an academy is there already. */
+/** Loads the demo academies through the use cases, unless an academy is open already. */
 export async function loadDemo(services: Services, { clock, say }: DemoLoading): Promise<void> {
   if ((await listPublishedAcademies(services.db)).length > 0) return
   const today = clock.now()

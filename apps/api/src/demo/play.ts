@@ -187,7 +187,8 @@ function planSecondThoughts(
 ): void {
   const { academyId } = academy
   season.plan(new Date(services.clock.now().getTime() + 2 * DAY_MS), async () => {
-    const given = { ...own, academyId }
+    const { enrolmentId, accountId } = own
+    const given = { academyId, enrolmentId, by: { kind: 'golfer', accountId } } as const
     const { refundMinor } = await quoteGivingUp(services, given)
     await giveUp(services, { ...given, refundMinor })
   })

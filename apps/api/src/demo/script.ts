@@ -9,7 +9,6 @@ export interface AcademyScript {
   coaches: { name: string; email: string; about: string }[]
   venues: (Parsed<'venues.add', 'body'> & { areas: Parsed<'areas.add', 'body'>[] })[]
   golfers: number
-  familyNames: readonly string[]
   mailDomain: string
   clinics: ClinicScript[]
 }

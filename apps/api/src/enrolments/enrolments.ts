@@ -237,7 +237,7 @@ export async function releaseHold(
   return true
 }
 
-/** Gives confirmed places up; when no place is left ahead, the enrolment ends with them. */
+/** Gives confirmed places up: all that are still ahead, so that the enrolment ends with them. */
 export async function giveUpPlaces(
   services: Services,
   trx: AcademyTrx,

@@ -164,7 +164,7 @@ export async function setPlacesState(
     .whereIn('id', [...placeIds])
 }
 
-/** Active enrolments of a golfer in any of these sessions. */
+/** The newest active enrolment of a golfer in any of these sessions. */
 export async function findActiveEnrolment(
   trx: AcademyTrx,
   { golferId, sessionIds }: { golferId: string; sessionIds: readonly string[] },
@@ -299,6 +299,7 @@ export interface PlaceRow extends Place {
   startsAt: Date
   endsAt: Date
   sessionState: 'planned' | 'called-off'
+  calendarSequence: number
   mark: 'present' | 'late' | 'absent' | 'excused' | null
   areas: string[]
 }
@@ -308,7 +309,8 @@ export async function listPlaceRows(
   enrolmentIds: readonly string[],
 ): Promise<PlaceRow[]> {
   const { rows } = await trx.raw<{ rows: PlaceRow[] }>(
-    `SELECT p.*, s.number, s.starts_at, s.ends_at, s.state AS session_state, m.mark,
+    `SELECT p.*, s.number, s.starts_at, s.ends_at, s.state AS session_state,
+       s.calendar_sequence, m.mark,
        (SELECT coalesce(json_agg(a.name ORDER BY sa.position), '[]') FROM session_areas sa
           JOIN areas a ON a.academy_id = sa.academy_id AND a.id = sa.area_id
           WHERE sa.academy_id = p.academy_id AND sa.session_id = p.session_id) AS areas

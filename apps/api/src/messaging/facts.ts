@@ -8,7 +8,6 @@ import {
   type EnrolmentRow,
   type PlaceRow,
 } from '../enrolments/enrolments'
-import { findSession } from '../clinics/clinics'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 import { findVenue, type Venue } from '../venues/venues'
 import { findAddressee, type Addressee } from './queries'
@@ -37,10 +36,7 @@ export async function readEnrolmentFacts(
   const venue = clinic && (await findVenue(trx, clinic.venueId))
   if (!addressee || !clinic || !venue) return null
   const places = await listPlaceRows(trx, [enrolmentId])
-  let changes = 0
-  for (const { sessionId } of places) {
-    changes += (await findSession(trx, sessionId))?.calendarSequence ?? 0
-  }
+  const changes = places.reduce((sum, { calendarSequence }) => sum + calendarSequence, 0)
   return { academy: await readAcademy(trx), clinic, venue, enrolment, places, addressee, changes }
 }
 

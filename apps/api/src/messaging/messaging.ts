@@ -24,7 +24,10 @@ import {
   noteSent,
 } from './queries'
 
-/** Writes the mails of the product. Each goes out once, however often it is asked for. */
+/**
+ * Writes the mails of the product. What is said of places goes out once, however often it is asked
+ * for; links and invitations go out each time, since each carries a secret of its own.
+ */
 export interface Messenger {
   sendAccountLink(wanted: { accountId: string; purpose: 'verify' | 'reset' }): Promise<void>
   sendInvitation(wanted: { academyId: string; invitationId: string }): Promise<void>

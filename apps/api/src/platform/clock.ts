@@ -19,13 +19,3 @@ export function makeMovableClock(start: Date): MovableClock {
     moveBy: (milliseconds) => (current += milliseconds),
   }
 }
-
-/** An offset clock: real time plus a number of milliseconds that tests of a running server can move. */
-export function makeOffsetClock(): MovableClock {
-  let offset = 0
-  return {
-    now: () => new Date(Date.now() + offset),
-    moveTo: (instant) => (offset = instant.getTime() - Date.now()),
-    moveBy: (milliseconds) => (offset += milliseconds),
-  }
-}

@@ -19,7 +19,6 @@ export const CURRENCIES = [
   { value: 'AUD', label: 'Australian dollars' },
   { value: 'NZD', label: 'New Zealand dollars' },
   { value: 'JPY', label: 'yen' },
-  { value: 'KWD', label: 'Kuwaiti dinars' },
 ] as const
 
 export type Currency = (typeof CURRENCIES)[number]['value']
@@ -34,5 +33,5 @@ export function likelyCurrency(zone: string): Currency {
   }
   if (/^America\//.test(zone)) return 'USD'
   if (zone === 'Asia/Tokyo') return 'JPY'
-  return zone === 'Asia/Kuwait' ? 'KWD' : 'EUR'
+  return 'EUR'
 }
