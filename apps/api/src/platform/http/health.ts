@@ -1,4 +1,4 @@
-import { Router } from 'express'
+import { Router, type Request } from 'express'
 import type { Services } from '../services'
 
 /** `/healthz`: the process lives. `/readyz`: it can serve. `/metrics`: for Prometheus, loopback only. */
@@ -20,7 +20,7 @@ export function healthRoutes({ db, metrics }: Services, isStopping: () => boolea
     }
   })
   router.get('/metrics', async (request, response) => {
-    if (!['127.0.0.1', '::1', '::ffff:127.0.0.1'].includes(request.socket.remoteAddress ?? '')) {
+    if (!isFromHere(request)) {
       response.status(404).end()
       return
     }
@@ -29,4 +29,12 @@ export function healthRoutes({ db, metrics }: Services, isStopping: () => boolea
     response.type(metrics.registry.contentType).send(await metrics.registry.metrics())
   })
   return router
+}
+
+const LOOPBACK = new Set(['127.0.0.1', '::1', '::ffff:127.0.0.1'])
+
+/** Whether somebody on this machine asks for themselves; a proxy on it passes strangers on. */
+function isFromHere(request: Request): boolean {
+  const isPassedOn = request.headers['x-forwarded-for'] ?? request.headers.forwarded
+  return !isPassedOn && LOOPBACK.has(request.socket.remoteAddress ?? '')
 }
