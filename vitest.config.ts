@@ -20,6 +20,8 @@ export default defineConfig({
           name: 'api',
           include: ['tests/{api,tenancy}/**/*.test.ts'],
           globalSetup: ['tests/support/template.ts'],
+          // Each file makes a world of its own, so that the product need be loaded only once.
+          isolate: false,
           testTimeout: 60_000,
           hookTimeout: 60_000,
         },

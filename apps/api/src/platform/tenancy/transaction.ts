@@ -1,3 +1,5 @@
+import { randomInt } from 'node:crypto'
+import { setTimeout } from 'node:timers/promises'
 import { isSlug } from '@marram/contract'
 import type { Knex } from 'knex'
 import type pg from 'pg'
@@ -67,7 +69,10 @@ export function inPlain<T>(db: Knex, work: (trx: PlainTrx) => Promise<T>): Promi
 const DEADLOCK = '40P01'
 const TRIES = 3
 
-/** Two transactions that waited for each other: one was undone whole, and is simply run again. */
+/**
+ * Two transactions that waited for each other: one was undone whole, and is simply run again, a
+ * little later, so that the other has what it waited for by then.
+ */
 async function begin<T>(
   db: Knex,
   options: BeginOptions & { readOnly?: boolean },
@@ -79,6 +84,7 @@ async function begin<T>(
       return await db.transaction(work, options as Knex.TransactionConfig)
     } catch (error) {
       if (refusalOf(error).code !== DEADLOCK || tried === TRIES) throw error
+      await setTimeout(randomInt(20, 80) * tried)
     }
   }
 }
