@@ -53,14 +53,27 @@ async function openFor(
   return context.newPage()
 }
 
-/** A refusal that is shown beside its field is no fault of the page; all else is. */
-const EXPECTED = /the server responded with a status of 4\d\d/
+/** What the journeys provoke on purpose, each as status, method and path. */
+const EXPECTED_REFUSALS = [
+  // A password that is too short.
+  /^422 POST \/api\/accounts$/,
+  // A card that is declined.
+  /^402 POST \/pay\//,
+]
 
 function listen(page: Page, complaints: string[]): void {
   page.on('console', (message) => {
     const text = message.text()
-    if (['error', 'warning'].includes(message.type()) && !EXPECTED.test(text)) {
+    const isRefusal = /the server responded with a status of 4\d\d/.test(text)
+    if (['error', 'warning'].includes(message.type()) && !isRefusal) {
       complaints.push(`${page.url()}: ${text.slice(0, 300)}`)
+    }
+  })
+  page.on('response', (response) => {
+    const status = response.status()
+    const what = `${status} ${response.request().method()} ${new URL(response.url()).pathname}`
+    if (status >= 400 && !EXPECTED_REFUSALS.some((pattern) => pattern.test(what))) {
+      complaints.push(`${page.url()}: ${what}`)
     }
   })
   page.on('pageerror', (error) => complaints.push(`${page.url()}: ${error.message}`))
