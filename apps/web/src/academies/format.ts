@@ -1,4 +1,4 @@
-import { formatMoney, toCurrencyCode } from '@marram/money'
+import { formatMoney, formatNothing, minorDigitsOf, toCurrencyCode } from '@marram/money'
 import {
   formatDay,
   formatSessionTime,
@@ -16,6 +16,7 @@ export interface Place {
 /** Amounts and times as an academy writes them. */
 export function makeFormat({ locale, currency, zone }: Place) {
   const code = toCurrencyCode(currency)
+  const minorOfOne = 10 ** minorDigitsOf(code)
   return {
     locale,
     currency: code,
@@ -24,7 +25,15 @@ export function makeFormat({ locale, currency, zone }: Place) {
     money: (amountMinor: number) => formatMoney({ amountMinor, currency: code }, { locale }),
     /** "€108", for cards and lists; cents only where there are some. */
     shortMoney: (amountMinor: number) =>
-      formatMoney({ amountMinor, currency: code }, { locale, whole: amountMinor % 100 === 0 }),
+      formatMoney(
+        { amountMinor, currency: code },
+        { locale, whole: amountMinor % minorOfOne === 0 },
+      ),
+    /** "1,080" in a card whose header carries the currency; nothing is an en rule. */
+    cardMoney: (amountMinor: number) =>
+      amountMinor === 0
+        ? formatNothing()
+        : formatMoney({ amountMinor, currency: code }, { locale, whole: true, sign: false }),
     day: (at: string, style?: DayStyle) =>
       formatDay({ at, zone, locale, ...(style ? { style } : {}) }),
     time: (at: string) => formatTime({ at, zone, locale }),
