@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { makeFormat } from './format'
 
 const moneyIn = (currency: string, locale = 'en-IE') =>
-  makeFormat({ currency, locale, zone: 'Europe/Dublin' })
+  makeFormat({ currency, locale, zone: 'Europe/Dublin', duskKind: 'sunset' })
 
 describe('money as an academy writes it', () => {
   // By ISO 4217 the yen has no minor unit, the euro a hundred, the dinar of Kuwait a thousand.
@@ -28,5 +28,13 @@ describe('money as an academy writes it', () => {
     ['KWD', 12_100, /12\.100$/],
   ])('has cents in a list only where there are some, in %s: %i', (currency, amountMinor, text) => {
     expect(moneyIn(currency).shortMoney(amountMinor)).toMatch(text)
+  })
+})
+
+describe('the dusk an academy goes by', () => {
+  it('has the name of what was chosen', () => {
+    const place = { currency: 'EUR', locale: 'en-IE', zone: 'Europe/Dublin' }
+    expect(makeFormat({ ...place, duskKind: 'sunset' }).dusk.word).toBe('Sunset')
+    expect(makeFormat({ ...place, duskKind: 'civil' }).dusk.word).toBe('End of twilight')
   })
 })

@@ -11,16 +11,24 @@ export interface Place {
   locale: string
   currency: string
   zone: string
+  duskKind: 'sunset' | 'civil'
 }
 
+/** The moment that an academy goes by, as it opens a line and as it stands inside one. */
+const DUSK = {
+  sunset: { word: 'Sunset', inText: 'sunset' },
+  civil: { word: 'End of twilight', inText: 'the end of twilight' },
+} as const
+
 /** Amounts and times as an academy writes them. */
-export function makeFormat({ locale, currency, zone }: Place) {
+export function makeFormat({ locale, currency, zone, duskKind }: Place) {
   const code = toCurrencyCode(currency)
   const minorOfOne = 10 ** minorDigitsOf(code)
   return {
     locale,
     currency: code,
     zone,
+    dusk: DUSK[duskKind],
     /** "€108.00" */
     money: (amountMinor: number) => formatMoney({ amountMinor, currency: code }, { locale }),
     /** "€108", for cards and lists; cents only where there are some. */

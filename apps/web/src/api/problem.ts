@@ -23,7 +23,7 @@ export const noConnection = () =>
   new ApiProblem({
     code: 'no-connection',
     status: 0,
-    detail: 'No connection. Nothing was lost; try again when there is signal.',
+    detail: 'No connection. Please try again when there is signal.',
   })
 
 export function fromDocument(document: ProblemDocument): ApiProblem {
