@@ -1,4 +1,6 @@
-import type { Answer } from '@marram/contract'
+import { keepPreviousData, queryOptions, skipToken } from '@tanstack/react-query'
+import type { Answer, Sent } from '@marram/contract'
+import { call } from '../api/client'
 import { routeQuery } from '../api/query'
 
 export type AcademyPage = Answer<'page.read'>
@@ -18,3 +20,12 @@ export const boardQuery = (academy: string, from: string, to: string) =>
   routeQuery('sessions.list', { academy, query: { from, to } })
 export const cardQuery = (academy: string, clinicId: string) =>
   routeQuery('register.card', { academy, params: { clinicId } })
+
+/** The dates of a clinic while it is being written; nothing is asked while a word is missing. */
+export const previewQuery = (academy: string, body: Sent<'clinics.preview', 'body'> | null) =>
+  queryOptions({
+    queryKey: [academy, 'clinics.preview', JSON.stringify(body)],
+    queryFn: body ? ({ signal }) => call('clinics.preview', { academy, body, signal }) : skipToken,
+    placeholderData: keepPreviousData,
+    retry: false,
+  })

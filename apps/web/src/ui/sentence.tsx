@@ -10,6 +10,7 @@ interface WordProps<Value extends string> {
   label: string
   value: Value
   onChange: (value: Value) => void
+  isWrong?: boolean
 }
 
 export function SelectWord<Value extends string>({
@@ -17,10 +18,12 @@ export function SelectWord<Value extends string>({
   value,
   onChange,
   options,
+  isWrong,
 }: WordProps<Value> & { options: readonly { value: Value; label: string }[] }) {
   return (
     <select
       aria-label={label}
+      aria-invalid={isWrong || undefined}
       value={value}
       // A select holds the value of one of its options, and of nothing else.
       onChange={(event) => onChange(event.target.value as Value)}
@@ -38,6 +41,7 @@ export function InputWord({
   label,
   value,
   onChange,
+  isWrong,
   type = 'text',
   ...rest
 }: WordProps<string> & {
@@ -48,12 +52,10 @@ export function InputWord({
   size?: number
   placeholder?: string
   inputMode?: 'decimal'
-  isWrong?: boolean
 }) {
-  const { isWrong, ...input } = rest
   return (
     <input
-      {...input}
+      {...rest}
       type={type}
       aria-label={label}
       aria-invalid={isWrong || undefined}
