@@ -1,4 +1,4 @@
-import { localDayOf } from '../academies/local-day'
+import { localDayOf, weekdayOf } from '../academies/local-day'
 
 /** What a clinic's sentence says of its rule: how often, on which days, and how long it goes on. */
 export interface RuleWords {
@@ -24,7 +24,7 @@ export const WEEKDAYS = ['MO', 'TU', 'WE', 'TH', 'FR', 'SA', 'SU'] as const
 
 /** The weekday of a local day. */
 export function dayCodeOf(day: string): string {
-  return WEEKDAYS[(new Date(`${day}T12:00:00Z`).getUTCDay() + 6) % 7] ?? 'MO'
+  return WEEKDAYS[weekdayOf(day)] ?? 'MO'
 }
 
 /** The words for a saved rule; null for one that is not weekly, which the sentence cannot say. */

@@ -121,13 +121,17 @@ function Grid({
           {hasTotal && <th className="tot" />}
         </tr>
         <tr className="under">
-          <th scope="row">Sunset</th>
+          <th scope="row">{format.dusk.word}</th>
           {halves.map((part, index) => (
             <Fragment key={index}>
               {part.map((session) => (
                 <th key={session.id} className={session.darkMinutes > 0 ? 'ctr flagtext' : 'ctr'}>
                   {session.darkMinutes > 0 && (
-                    <Drawing of="flag" className="inline-flag" label="Runs past sunset" />
+                    <Drawing
+                      of="flag"
+                      className="inline-flag"
+                      label={`Runs past ${format.dusk.inText}`}
+                    />
                   )}
                   {session.duskAt ? format.time(session.duskAt) : '–'}
                 </th>
