@@ -4,6 +4,7 @@ import {
   formatSessionTime,
   formatTime,
   formatTimeRange,
+  formatZoneIfElsewhere,
   type DayStyle,
 } from '@marram/schedule/format'
 
@@ -49,6 +50,13 @@ export function makeFormat({ locale, currency, zone, duskKind }: Place) {
       formatTimeRange({ ...session, zone, locale }),
     session: (session: { startsAt: string; endsAt: string }) =>
       formatSessionTime({ ...session, zone, locale }),
+    /** "Dublin time", for a reader whose own clock shows another time then; else null. */
+    zoneIfElsewhere: (at: string) =>
+      formatZoneIfElsewhere({
+        at,
+        zone,
+        readerZone: new Intl.DateTimeFormat().resolvedOptions().timeZone,
+      }),
   }
 }
 

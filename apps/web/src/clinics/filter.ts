@@ -12,6 +12,24 @@ export interface Filter {
 
 export const NO_FILTER: Filter = { ages: '', level: '', day: '', coach: '', full: '' }
 
+/** The filter that an address carries; a word that the sentence does not have is left out. */
+export function filterOf(query: URLSearchParams): Filter {
+  const wordOf = <Word extends string>(name: keyof Filter, words: readonly Word[]) =>
+    words.find((word) => word === query.get(name)) ?? ''
+  return {
+    ages: wordOf('ages', ['juniors', 'adults']),
+    level: wordOf('level', ['beginner', 'middle', 'low']),
+    day: wordOf('day', ['0', '1', '2', '3', '4', '5', '6']),
+    coach: query.get('coach') ?? '',
+    full: wordOf('full', ['hide']),
+  }
+}
+
+/** The query of an address that carries the filter: only the words that leave something out. */
+export function queryOf(filter: Filter): Record<string, string> {
+  return Object.fromEntries(Object.entries(filter).filter(([, word]) => word !== ''))
+}
+
 /** A handicap in the middle of each level's range. */
 const LEVELS = { beginner: 36, middle: 18, low: 6 } as const
 const ADULT_YEARS = 18
@@ -27,11 +45,11 @@ export function filterClinics(clinics: readonly PageClinic[], filter: Filter): P
   )
 }
 
+/** A clinic is for juniors, or for adults, when one of that age may take part. */
 function fitsAges({ ageMin, ageMax }: PageClinic, ages: Filter['ages']): boolean {
   if (ages === '') return true
-  const isJunior = ageMax !== null && ageMax < ADULT_YEARS
-  if (ages === 'juniors') return isJunior || (ageMin === null && ageMax === null)
-  return !isJunior
+  if (ages === 'juniors') return ageMin === null || ageMin < ADULT_YEARS
+  return ageMax === null || ageMax >= ADULT_YEARS
 }
 
 function fitsLevel({ handicapMin, handicapMax }: PageClinic, level: Filter['level']): boolean {
