@@ -18,8 +18,6 @@ export const clinicQuery = (academy: string, clinicId: string) =>
   routeQuery('clinics.read', { academy, params: { clinicId } })
 export const boardQuery = (academy: string, from: string, to: string) =>
   routeQuery('sessions.list', { academy, query: { from, to } })
-export const cardQuery = (academy: string, clinicId: string) =>
-  routeQuery('register.card', { academy, params: { clinicId } })
 
 /** The dates of a clinic while it is being written; nothing is asked while a word is missing. */
 export const previewQuery = (academy: string, body: Sent<'clinics.preview', 'body'> | null) =>

@@ -9,6 +9,10 @@ export type Register = Answer<'register.read'>
 export type RegisterRow = Register['rows'][number]
 export type SetMark = NonNullable<RegisterRow['mark']>
 
+export type CardRow = Answer<'register.card'>['rows'][number]
+
+export const cardQuery = (academy: string, clinicId: string) =>
+  routeQuery('register.card', { academy, params: { clinicId } })
 export const dayQuery = (academy: string, date: string) =>
   routeQuery('register.day', { academy, params: { date } })
 
