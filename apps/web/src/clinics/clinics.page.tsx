@@ -1,8 +1,9 @@
-import { useQuery } from '@tanstack/react-query'
-import { Link, useParams } from 'react-router'
+import { useQuery, type QueryClient } from '@tanstack/react-query'
+import { Link, useParams, type LoaderFunctionArgs } from 'react-router'
 import { academyQuery } from '../academies/queries'
 import { makeFormat } from '../academies/format'
 import { sentenceOf } from '../api/problem'
+import { together } from '../api/together'
 import { useTitle } from '../layouts/accent'
 import { useMay } from '../layouts/staff.layout'
 import { paths } from '../paths'
@@ -15,6 +16,15 @@ import { clinicsQuery } from './queries'
 
 const STATES = { draft: 'Draft', published: 'On the page', withdrawn: 'Off the page' } as const
 
+export const loader =
+  (client: QueryClient) =>
+  ({ params }: LoaderFunctionArgs) => {
+    const { academy = '' } = params
+    void client.query(clinicsQuery(academy)).catch(() => undefined)
+    void client.query(academyQuery(academy)).catch(() => undefined)
+    return null
+  }
+
 /** Every clinic of the academy: what runs, what comes, what has been. */
 export default function ClinicsPage() {
   const { academy: slug = '' } = useParams()
@@ -22,10 +32,11 @@ export default function ClinicsPage() {
   const clinics = useQuery(clinicsQuery(slug))
   const academy = useQuery(academyQuery(slug))
   useTitle('Clinics')
-  if (clinics.isError) {
+  const { error, retry } = together(clinics, academy)
+  if (error) {
     return (
       <main id="main" className="wrap py-8">
-        <ErrorState sentence={sentenceOf(clinics.error)} onRetry={() => void clinics.refetch()} />
+        <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
       </main>
     )
   }

@@ -1,4 +1,11 @@
-import { Link, Outlet, ScrollRestoration, isRouteErrorResponse, useRouteError } from 'react-router'
+import {
+  Link,
+  Outlet,
+  ScrollRestoration,
+  isRouteErrorResponse,
+  useNavigation,
+  useRouteError,
+} from 'react-router'
 import { ApiProblem, sentenceOf } from '../api/problem'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
@@ -9,9 +16,20 @@ export function RootLayout() {
       <a className="skip" href="#main">
         Skip to the page
       </a>
+      <UnderWay />
       <Outlet />
       <ScrollRestoration />
     </>
+  )
+}
+
+/** A line along the top edge while the next page is on its way; a quick one comes without it. */
+function UnderWay() {
+  const isUnderWay = useNavigation().state !== 'idle'
+  return (
+    <div role="status" className={isUnderWay ? 'underway on' : 'underway'}>
+      {isUnderWay && <span className="vh">The page is on its way.</span>}
+    </div>
   )
 }
 

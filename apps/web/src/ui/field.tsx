@@ -74,6 +74,7 @@ export function SelectField<Value extends string>({
         id={id}
         value={value}
         aria-describedby={describedBy}
+        aria-invalid={error ? true : undefined}
         // A select holds the value of one of its options, and of nothing else.
         onChange={(event) => onChange(event.target.value as Value)}
       >
