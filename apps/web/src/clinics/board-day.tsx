@@ -19,21 +19,13 @@ export function BoardDay(props: {
 }) {
   const { academy, board, day, format, at, now, isToday, nowAt } = props
   const { dayLocal, duskAt } = day
-  const { locale } = format
-  const [weekday] = formatLocalDay({ dayLocal, locale, style: 'weekday' }).split(/[ ,]/)
   const duskLeft = duskAt && `${at(minutesOfDay(duskAt, board.zone))}%`
   const sessions = board.sessions.filter(
     ({ startsAt }) => localDayOf(startsAt, board.zone) === dayLocal,
   )
   return (
     <>
-      <div className={isToday ? 'dname today' : 'dname'}>
-        {weekday}
-        <small>
-          {isToday ? 'Today, ' : ''}
-          {formatLocalDay({ dayLocal, locale, style: 'short' })}
-        </small>
-      </div>
+      <DayName dayLocal={dayLocal} locale={format.locale} isToday={isToday} />
       <ul className="areas">
         {board.areas.map(({ id, name }) => (
           <li key={id}>{name}</li>
@@ -76,6 +68,20 @@ export function BoardDay(props: {
         ))}
       </div>
     </>
+  )
+}
+
+function DayName(props: { dayLocal: string; locale: string; isToday: boolean }) {
+  const { dayLocal, locale, isToday } = props
+  const [weekday] = formatLocalDay({ dayLocal, locale, style: 'weekday' }).split(/[ ,]/)
+  return (
+    <div className={isToday ? 'dname today' : 'dname'}>
+      {weekday}
+      <small>
+        {isToday ? 'Today, ' : ''}
+        {formatLocalDay({ dayLocal, locale, style: 'short' })}
+      </small>
+    </div>
   )
 }
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { NO_FILTER, filterClinics, filterOf, queryOf, type Filter } from './filter'
+import { NO_FILTER, dayOf, filterClinics, filterOf, queryOf, type Filter } from './filter'
 import type { PageClinic } from './queries'
 
 /** A clinic by its ages; the filter looks at nothing else unless it is asked to. */
@@ -42,5 +42,13 @@ describe('the filter in the address', () => {
   it('has no words that the sentence does not have', () => {
     const query = new URLSearchParams('ages=babies&level=&day=7&full=yes&from=mail')
     expect(filterOf(query)).toEqual(NO_FILTER)
+  })
+})
+
+describe('the filter of days', () => {
+  it('goes by the venue’s own clock, with Sunday as 0', () => {
+    const startsAt = '2026-09-20T23:30:00Z'
+    expect(dayOf({ startsAt, zone: 'America/Denver' })).toBe('0')
+    expect(dayOf({ startsAt, zone: 'Europe/Dublin' })).toBe('1')
   })
 })

@@ -1,3 +1,4 @@
+import { localDayOf, weekdayOf } from '../academies/local-day'
 import type { PageClinic } from './queries'
 
 /** The words of the filter's sentence; an empty word leaves everything in. */
@@ -59,8 +60,6 @@ function fitsLevel({ handicapMin, handicapMax }: PageClinic, level: Filter['leve
 }
 
 /** The weekday of the next session on the venue's own clock, as JavaScript counts. */
-export function dayOf(clinic: PageClinic): string {
-  const name = new Intl.DateTimeFormat('en', { weekday: 'short', timeZone: clinic.zone })
-  const days = ['Sun', 'Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat']
-  return String(days.indexOf(name.format(new Date(clinic.startsAt))))
+export function dayOf({ startsAt, zone }: Pick<PageClinic, 'startsAt' | 'zone'>): string {
+  return String((weekdayOf(localDayOf(startsAt, zone)) + 1) % 7)
 }

@@ -3,6 +3,9 @@ import type { Session } from '../clinics/queries'
 import { Drawing } from '../ui/drawing'
 import { Across, type Layout } from './across'
 
+/** Dates and light come to no sum. */
+const NOTHING_SUMMED = { sum: () => <th className="sum" />, total: <th className="tot" /> }
+
 /** The sessions of a card: number, date, and dusk with a flag where it comes too early. */
 export function AttendanceHead(props: {
   layout: Layout
@@ -53,8 +56,7 @@ export function AttendanceHead(props: {
               {format.day(session.startsAt, 'short')}
             </th>
           )}
-          sum={() => <th className="sum" />}
-          total={<th className="tot" />}
+          {...NOTHING_SUMMED}
         />
       </tr>
       <tr className="under">
@@ -73,8 +75,7 @@ export function AttendanceHead(props: {
               {session.duskAt ? format.time(session.duskAt) : '–'}
             </th>
           )}
-          sum={() => <th className="sum" />}
-          total={<th className="tot" />}
+          {...NOTHING_SUMMED}
         />
       </tr>
     </thead>

@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react'
-import { makeFormat } from '../academies/format'
+import { makeFormat, type Format } from '../academies/format'
 import type { Academy } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
 import { listOf } from '../clinics/list-of'
@@ -53,19 +53,7 @@ export function DaySheet(props: { academy: Academy; date: string; register: Regi
 
   return (
     <>
-      <div className="p-4">
-        <h2>{session.clinicTitle}</h2>
-        <p>
-          {listOf(session.areas.map(({ name }) => name))}, until {format.time(session.endsAt)}.
-          <br />
-          {isClosed ? 'The register is closed. ' : 'Press a name for present. '}
-          {session.duskAt && (
-            <b className="haartext">
-              {format.dusk.word} {format.time(session.duskAt)}
-            </b>
-          )}
-        </p>
-      </div>
+      <SheetHead session={session} format={format} />
       {session.state === 'called-off' && (
         <Notice drawing="wind">Called off: {session.calledOffReason}. There is no register.</Notice>
       )}
@@ -90,6 +78,25 @@ export function DaySheet(props: { academy: Academy; date: string; register: Regi
         </div>
       )}
     </>
+  )
+}
+
+function SheetHead({ session, format }: { session: Register['session']; format: Format }) {
+  const isClosed = session.registerState === 'closed'
+  return (
+    <div className="p-4">
+      <h2>{session.clinicTitle}</h2>
+      <p>
+        {listOf(session.areas.map(({ name }) => name))}, until {format.time(session.endsAt)}.
+        <br />
+        {isClosed ? 'The register is closed. ' : 'Press a name for present. '}
+        {session.duskAt && (
+          <b className="haartext">
+            {format.dusk.word} {format.time(session.duskAt)}
+          </b>
+        )}
+      </p>
+    </div>
   )
 }
 
