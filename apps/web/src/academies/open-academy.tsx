@@ -81,14 +81,14 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
         <SelectWord
           label="Currency"
           value={wanted.currency}
-          onChange={(currency) => set({ currency: currency as Currency })}
+          onChange={(currency) => set({ currency })}
           options={CURRENCIES}
         />
         , with tax{' '}
         <SelectWord
           label="Tax"
           value={wanted.taxMode}
-          onChange={(taxMode) => set({ taxMode: taxMode as Wanted['taxMode'] })}
+          onChange={(taxMode) => set({ taxMode })}
           options={[
             { value: 'included', label: 'in the price' },
             { value: 'added', label: 'added on top' },

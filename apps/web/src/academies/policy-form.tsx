@@ -51,7 +51,7 @@ export function PolicyForm({ academy }: { academy: Academy }) {
                 { value: 'included', label: 'In the price' },
                 { value: 'added', label: 'Added on top' },
               ]}
-              onChange={(taxMode) => set({ taxMode: taxMode as Academy['taxMode'] })}
+              onChange={(taxMode) => set({ taxMode })}
             />
             <div className="f two">
               <Field
@@ -85,9 +85,7 @@ export function PolicyForm({ academy }: { academy: Academy }) {
                 { value: 'credit', label: 'Credit after seven days' },
                 { value: 'money', label: 'Money back after seven days' },
               ]}
-              onChange={(owedDefault) =>
-                set({ owedDefault: owedDefault as Academy['owedDefault'] })
-              }
+              onChange={(owedDefault) => set({ owedDefault })}
             />
             <CheckField
               label="Golfers may pay at the desk"
@@ -125,7 +123,7 @@ export function PolicyForm({ academy }: { academy: Academy }) {
                 { value: 'sunset', label: 'Sunset' },
                 { value: 'civil', label: 'The end of civil twilight' },
               ]}
-              onChange={(duskKind) => set({ duskKind: duskKind as Academy['duskKind'] })}
+              onChange={(duskKind) => set({ duskKind })}
             />
             <TextArea
               label="What golfers accept"

@@ -107,12 +107,7 @@ function Invite({ slug }: { slug: string }) {
         onChange={(event) => setEmail(event.target.value)}
         error={errors['email']}
       />
-      <SelectField
-        label="As"
-        value={role}
-        options={ROLE_WORDS}
-        onChange={(chosen) => setRole(chosen as StaffRole)}
-      />
+      <SelectField label="As" value={role} options={ROLE_WORDS} onChange={setRole} />
       <Button type="submit" waiting={isSending && 'Sending…'}>
         Send invitation
       </Button>

@@ -4,7 +4,7 @@ import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { CheckField, Field, SelectField } from '../ui/field'
 import { FormDialog } from '../ui/form-dialog'
-import { AREA_KINDS, usualArea, type Area, type AreaBody, type AreaKind } from './area-words'
+import { AREA_KINDS, usualArea, type Area, type AreaBody } from './area-words'
 
 /** A part of a venue: what it is, how many bays, and whether it can be used in the dark or the wet. */
 export function AreaDialog(props: {
@@ -36,7 +36,7 @@ export function AreaDialog(props: {
         label="What it is"
         value={wanted.kind}
         options={AREA_KINDS}
-        onChange={(kind) => setWanted(usualArea(kind as AreaKind))}
+        onChange={(kind) => setWanted(usualArea(kind))}
       />
       <Field
         label="Name"

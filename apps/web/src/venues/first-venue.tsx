@@ -75,8 +75,8 @@ export function FirstVenue(props: {
         <SelectWord
           label="North or south"
           value={wanted.northOrSouth}
-          onChange={(side) => set({ northOrSouth: side as Wanted['northOrSouth'] })}
-          options={['north', 'south'].map((value) => ({ value, label: value }))}
+          onChange={(side) => set({ northOrSouth: side })}
+          options={words('north', 'south')}
         />
         ,{' '}
         <InputWord
@@ -89,16 +89,11 @@ export function FirstVenue(props: {
         <SelectWord
           label="East or west"
           value={wanted.eastOrWest}
-          onChange={(side) => set({ eastOrWest: side as Wanted['eastOrWest'] })}
-          options={['east', 'west'].map((value) => ({ value, label: value }))}
+          onChange={(side) => set({ eastOrWest: side })}
+          options={words('east', 'west')}
         />
         . It has{' '}
-        <SelectWord
-          label="Area"
-          value={wanted.kind}
-          onChange={(kind) => chooseKind(kind as AreaKind)}
-          options={AREA_KINDS}
-        />{' '}
+        <SelectWord label="Area" value={wanted.kind} onChange={chooseKind} options={AREA_KINDS} />{' '}
         with{' '}
         <InputWord
           label="Bays"
@@ -115,8 +110,8 @@ export function FirstVenue(props: {
             <SelectWord
               label="Lamps"
               value={wanted.lamps}
-              onChange={(lamps) => set({ lamps: lamps as Wanted['lamps'] })}
-              options={['lamps', 'no lamps'].map((value) => ({ value, label: value }))}
+              onChange={(lamps) => set({ lamps })}
+              options={words('lamps', 'no lamps')}
             />
           </>
         )}
@@ -124,8 +119,8 @@ export function FirstVenue(props: {
         <SelectWord
           label="Cover"
           value={wanted.cover}
-          onChange={(cover) => set({ cover: cover as Wanted['cover'] })}
-          options={['covered', 'open'].map((value) => ({ value, label: value }))}
+          onChange={(cover) => set({ cover })}
+          options={words('covered', 'open')}
         />
         . <InputWord label="Coach" value={wanted.coach} onChange={(coach) => set({ coach })} />{' '}
         teaches.
@@ -139,6 +134,11 @@ export function FirstVenue(props: {
       </p>
     </form>
   )
+}
+
+/** Options that are shown as they are kept. */
+function words<Value extends string>(...values: readonly Value[]) {
+  return values.map((value) => ({ value, label: value }))
 }
 
 /** Goes on where an earlier try stopped, so that nothing is kept twice. */
