@@ -49,8 +49,7 @@ export default function OpenPage() {
         <div className="head">
           <h1>Open your academy</h1>
           <p className="sub">
-            Five sentences. Change the green words, leave the rest. Everything is kept as you go,
-            and everything can be changed later.
+            Five sentences. Change the green words, leave the rest. Everything is kept as you go.
           </p>
         </div>
         {slug ? (

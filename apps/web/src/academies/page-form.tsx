@@ -25,12 +25,15 @@ export function PageForm({ academy }: { academy: Academy }) {
   const keep = useAcademyMutation(academy.slug, (body: Settings) =>
     call('academies.change', { academy: academy.slug, body }),
   )
-  const { form, errors, sentence, isSending } = useForm(async () => {
+  const send = async () => {
     const { accent: name, ...rest } = wanted
     const chosen = ACCENTS.find((each) => each.name === name)
     const colours = chosen ? { accent: chosen.accent, accentDusk: chosen.accentDusk } : {}
     await keep.mutateAsync({ ...rest, ...colours })
     toast('Kept. The page shows it now.')
+  }
+  const { form, errors, sentence, isSending } = useForm(send, {
+    beside: ['name', 'place', 'lead', 'address'],
   })
   return (
     <section aria-labelledby="the-page">

@@ -12,6 +12,16 @@ import { RefundTiers } from './refund-tiers'
 
 type Settings = Sent<'academies.change', 'body'>
 
+const SHOWN = [
+  'taxName',
+  'taxBasisPoints',
+  'refundTiers',
+  'holdMinutes',
+  'offerHours',
+  'waiver',
+  'safeguarding',
+]
+
 /** What golfers agree to and what it costs them to change their mind. */
 export function PolicyForm({ academy }: { academy: Academy }) {
   const [wanted, setWanted] = useState({
@@ -31,10 +41,11 @@ export function PolicyForm({ academy }: { academy: Academy }) {
   const keep = useAcademyMutation(academy.slug, (body: Settings) =>
     call('academies.change', { academy: academy.slug, body }),
   )
-  const { form, errors, sentence, isSending } = useForm(async () => {
+  const send = async () => {
     await keep.mutateAsync(wanted)
     toast('Kept. It holds for places taken from now on.')
-  })
+  }
+  const { form, errors, sentence, isSending } = useForm(send, { beside: SHOWN })
   return (
     <section aria-labelledby="policies">
       <div className="sect">
@@ -77,6 +88,7 @@ export function PolicyForm({ academy }: { academy: Academy }) {
             <RefundTiers
               tiers={wanted.refundTiers}
               onChange={(refundTiers) => set({ refundTiers })}
+              errors={errors}
             />
             <SelectField
               label="When we call a session off and the golfer does not choose"

@@ -91,11 +91,14 @@ function Invite({ slug }: { slug: string }) {
   const send = useAcademyMutation(slug, () =>
     call('invitations.send', { academy: slug, body: { email, role } }),
   )
-  const { form, errors, sentence, isSending } = useForm(async () => {
-    await send.mutateAsync(undefined)
-    toast(`${email} gets a mail with an invitation.`)
-    setEmail('')
-  })
+  const { form, errors, sentence, isSending } = useForm(
+    async () => {
+      await send.mutateAsync(undefined)
+      toast(`${email} gets a mail with an invitation.`)
+      setEmail('')
+    },
+    { beside: ['email'] },
+  )
   return (
     <form {...form} className="inline-form">
       {sentence && <Notice kind="flag">{sentence}</Notice>}
