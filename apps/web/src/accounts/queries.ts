@@ -1,11 +1,10 @@
 import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
 import type { Answer, Sent } from '@marram/contract'
 import { call } from '../api/client'
+import { SESSION_KEY } from '../api/session-key'
 
 export type Session = Answer<'session.read'>
 export type Membership = Session['memberships'][number]
-
-const SESSION_KEY = ['', 'session.read'] as const
 
 export const sessionQuery = queryOptions({
   queryKey: SESSION_KEY,

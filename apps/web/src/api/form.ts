@@ -13,20 +13,26 @@ export function useForm(send: () => Promise<unknown>, shown: ShownFields = {}) {
   const ref = useRef<HTMLFormElement>(null)
   const [problem, setProblem] = useState<ApiProblem | null>(null)
   const [isSending, setIsSending] = useState(false)
+  const refuse = (refused: ApiProblem | null) => {
+    setProblem(refused)
+    if (refused) focusFirstWrong(ref.current)
+  }
   const submit = async () => {
-    setProblem(null)
+    refuse(null)
     setIsSending(true)
     try {
       await send()
     } catch (caught) {
-      setProblem(problemOf(caught))
-      focusFirstWrong(ref.current)
+      refuse(problemOf(caught))
     } finally {
       setIsSending(false)
     }
   }
   return {
     isSending,
+    problem,
+    /** Shows what another press on the form was refused for; null clears it. */
+    refuse,
     errors: problem?.fields ?? NONE,
     /** All that is wrong and that no field of the form says beside itself. */
     sentence: problem && noticeOf(problem, shown),

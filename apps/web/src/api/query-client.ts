@@ -1,5 +1,6 @@
 import { MutationCache, QueryClient } from '@tanstack/react-query'
 import { ApiProblem } from './problem'
+import { SESSION_KEY } from './session-key'
 
 const MOST_RETRIES = 2
 
@@ -8,7 +9,7 @@ export const queryClient = new QueryClient({
     // The sign-in has ended elsewhere: asked anew, so that a form can offer it beside what is typed.
     onError: (error) => {
       if (!(error instanceof ApiProblem) || error.code !== 'not-signed-in') return
-      void queryClient.invalidateQueries({ queryKey: ['', 'session.read'] })
+      void queryClient.invalidateQueries({ queryKey: SESSION_KEY })
     },
   }),
   defaultOptions: {

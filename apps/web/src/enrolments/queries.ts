@@ -10,7 +10,10 @@ export type PlaceOfEnrolment = Enrolment['places'][number]
 export const myPlacesQuery = (academy: string) => routeQuery('enrolments.mine', { academy })
 export const enrolmentQuery = (academy: string, enrolmentId: string) =>
   routeQuery('enrolments.read', { academy, params: { enrolmentId } })
-export const myGolfersQuery = (academy: string) => routeQuery('golfers.mine', { academy })
+export const placesOfGolferQuery = (academy: string, golferId: string) =>
+  routeQuery('enrolments.of-golfer', { academy, params: { golferId } })
+export const placesOfClinicQuery = (academy: string, clinicId: string) =>
+  routeQuery('enrolments.of-clinic', { academy, params: { clinicId } })
 
 export const useHold = (academy: string) =>
   useAcademyMutation(academy, (body: Sent<'enrolments.hold', 'body'>) =>

@@ -6,12 +6,12 @@ import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { academyPageQuery } from '../clinics/queries'
-import { myGolfersQuery } from '../enrolments/queries'
 import { useTitle } from '../layouts/accent'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
 import { DEPENDANT_FIELDS, DependantFields, EMPTY_DEPENDANT, toDependant } from './dependant-fields'
+import { myGolfersQuery } from './queries'
 
 export const loader =
   (client: QueryClient) =>
