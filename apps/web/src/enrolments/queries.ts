@@ -5,6 +5,7 @@ import { routeQuery } from '../api/query'
 
 export type Enrolment = Answer<'enrolments.read'>
 export type MyPlaces = Answer<'enrolments.mine'>
+export type ClinicInList = Answer<'clinics.list'>['clinics'][number]
 export type PlaceOfEnrolment = Enrolment['places'][number]
 
 export const myPlacesQuery = (academy: string) => routeQuery('enrolments.mine', { academy })
@@ -23,4 +24,14 @@ export const useHold = (academy: string) =>
 export const useJoinWaitlist = (academy: string) =>
   useAcademyMutation(academy, (body: Sent<'waitlist.join', 'body'>) =>
     call('waitlist.join', { academy, body }),
+  )
+
+export const useLeaveWaitlist = (academy: string) =>
+  useAcademyMutation(academy, (entryId: string) =>
+    call('waitlist.leave', { academy, params: { entryId } }),
+  )
+
+export const useGivePlace = (academy: string) =>
+  useAcademyMutation(academy, (body: Sent<'enrolments.give', 'body'>) =>
+    call('enrolments.give', { academy, body }),
   )
