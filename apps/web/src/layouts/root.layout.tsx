@@ -2,6 +2,7 @@ import { Link, Outlet, ScrollRestoration, isRouteErrorResponse, useRouteError } 
 import { ApiProblem, sentenceOf } from '../api/problem'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
+import { SignInHere } from './signed-out'
 
 export function RootLayout() {
   return (
@@ -22,6 +23,7 @@ export function PageError() {
     error instanceof ApiProblem
       ? error.status === 404
       : isRouteErrorResponse(error) && error.status === 404
+  const isSignedOut = error instanceof ApiProblem && error.code === 'not-signed-in'
   return (
     <main id="main" className="wrap narrow py-16">
       <h1>{isMissing ? 'There is nothing here' : 'This page did not come up'}</h1>
@@ -30,9 +32,12 @@ export function PageError() {
           ? 'The address may be old, or the clinic may be off the page.'
           : sentenceOf(error)}
       </p>
-      <Link className={buttonClass()} to={paths.home()}>
-        Go to the front page
-      </Link>
+      <p className="actions">
+        {isSignedOut && <SignInHere />}
+        <Link className={buttonClass()} to={paths.home()}>
+          Go to the front page
+        </Link>
+      </p>
     </main>
   )
 }
