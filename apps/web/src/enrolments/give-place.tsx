@@ -2,14 +2,14 @@ import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
 import { makeFormat, type Format } from '../academies/format'
 import { ApiProblem, sentenceOf } from '../api/problem'
-import { clinicQuery, clinicsQuery, type Clinic } from '../clinics/queries'
+import { clinicQuery, clinicsQuery, type Clinic, type ClinicInList } from '../clinics/queries'
 import { Button } from '../ui/button'
 import { CheckField, SelectField } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { ErrorState, SkeletonRows } from '../ui/states'
 import { toast } from '../ui/toast'
 import { useNow } from '../ui/use-now'
-import { useGivePlace, type ClinicInList } from './queries'
+import { useGivePlace } from './queries'
 
 interface Golfer {
   academy: string

@@ -5,7 +5,6 @@ import { routeQuery } from '../api/query'
 
 export type Enrolment = Answer<'enrolments.read'>
 export type MyPlaces = Answer<'enrolments.mine'>
-export type ClinicInList = Answer<'clinics.list'>['clinics'][number]
 export type PlaceOfEnrolment = Enrolment['places'][number]
 
 export const myPlacesQuery = (academy: string) => routeQuery('enrolments.mine', { academy })
