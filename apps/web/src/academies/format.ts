@@ -29,6 +29,7 @@ export function makeFormat({ locale, currency, zone, duskKind }: Place) {
     locale,
     currency: code,
     zone,
+    duskKind,
     dusk: DUSK[duskKind],
     /** "€108.00" */
     money: (amountMinor: number) => formatMoney({ amountMinor, currency: code }, { locale }),

@@ -30,6 +30,13 @@ export function fromDocument(document: ProblemDocument): ApiProblem {
   return new ApiProblem(document)
 }
 
+/** Anything that was thrown, as a refusal with a sentence. What is no refusal is a fault, and told. */
+export function problemOf(error: unknown): ApiProblem {
+  if (error instanceof ApiProblem) return error
+  reportError(error)
+  return new ApiProblem({ code: 'unexpected', status: 0, detail: sentenceOf(error) })
+}
+
 /** The sentence to show for anything that was thrown. */
 export function sentenceOf(error: unknown): string {
   return error instanceof ApiProblem

@@ -2,19 +2,25 @@ import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
 import type { Answer, Sent } from '@marram/contract'
 import type { Format } from '../academies/format'
-import { coachesQuery, venuesQuery } from '../academies/queries'
 import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { sentenceOf } from '../api/problem'
 import { together } from '../api/together'
+import { coachesQuery } from '../coaches/queries'
 import { Button } from '../ui/button'
 import { Field, SelectField } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { ErrorState, SkeletonRows } from '../ui/states'
 import { toast } from '../ui/toast'
+import { venuesQuery } from '../venues/queries'
 import type { Session } from './queries'
 import { changeOf, wishOf, type SessionWish } from './session-wish'
+
+/** All of its fields say beside themselves what is wrong. */
+const SHOWN = {
+  beside: ['startsOnLocal', 'startsAtLocal', 'durationMinutes', 'capacity', 'coachIds', 'areas'],
+}
 
 interface ChangeProps {
   academy: string
@@ -50,7 +56,7 @@ function ChangeForm(
     await change.mutateAsync(changeOf(wish, session))
     toast('Changed. Golfers get a mail where the time or the place is another.')
     onDone()
-  })
+  }, SHOWN)
   return (
     <form {...form}>
       {sentence && <Notice kind="flag">{sentence}</Notice>}

@@ -8,6 +8,7 @@ export type PageClinic = AcademyPage['clinics'][number]
 export type ClinicPage = Answer<'page.clinic'>
 export type AcademyFace = AcademyPage['academy']
 export type Clinic = Answer<'clinics.read'>
+export type ClinicInList = Answer<'clinics.list'>['clinics'][number]
 export type Session = Clinic['sessions'][number]
 
 export const academyPageQuery = (academy: string) => routeQuery('page.read', { academy })

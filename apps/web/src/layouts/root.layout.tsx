@@ -9,6 +9,7 @@ import {
 import { ApiProblem, sentenceOf } from '../api/problem'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
+import { SignInHere } from './signed-out'
 
 export function RootLayout() {
   return (
@@ -40,6 +41,7 @@ export function PageError() {
     error instanceof ApiProblem
       ? error.status === 404
       : isRouteErrorResponse(error) && error.status === 404
+  const isSignedOut = error instanceof ApiProblem && error.code === 'not-signed-in'
   return (
     <main id="main" className="wrap narrow py-16">
       <h1>{isMissing ? 'There is nothing here' : 'This page did not come up'}</h1>
@@ -48,9 +50,12 @@ export function PageError() {
           ? 'The address may be old, or the clinic may be off the page.'
           : sentenceOf(error)}
       </p>
-      <Link className={buttonClass()} to={paths.home()}>
-        Go to the front page
-      </Link>
+      <p className="actions">
+        {isSignedOut && <SignInHere />}
+        <Link className={buttonClass()} to={paths.home()}>
+          Go to the front page
+        </Link>
+      </p>
     </main>
   )
 }

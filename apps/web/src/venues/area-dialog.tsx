@@ -21,10 +21,13 @@ export function AreaDialog(props: {
       ? call('areas.change', { academy: slug, params: { areaId: area.id }, body: wanted })
       : call('areas.add', { academy: slug, params: { venueId }, body: wanted }),
   )
-  const { errors, ...dialog } = useForm(async () => {
-    await keep.mutateAsync(undefined)
-    onClose()
-  })
+  const { errors, ...dialog } = useForm(
+    async () => {
+      await keep.mutateAsync(undefined)
+      onClose()
+    },
+    { beside: ['name', 'units'] },
+  )
   return (
     <FormDialog
       {...dialog}
