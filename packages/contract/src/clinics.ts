@@ -156,6 +156,7 @@ export const academyFace = z.object({
   refundTiers: z.array(z.object({ noticeHours: z.int(), refundBasisPoints: z.int() })),
   waiver: z.string(),
   safeguarding: z.string(),
+  duskKind: z.enum(['sunset', 'civil']),
   holdMinutes: z.int(),
   canPayAtDesk: z.boolean(),
   isPublished: z.boolean(),

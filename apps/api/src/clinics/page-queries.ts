@@ -18,6 +18,7 @@ export interface FaceRow {
   refundTiers: { noticeHours: number; refundBasisPoints: number }[]
   waiver: string
   safeguarding: string
+  duskKind: 'sunset' | 'civil'
   holdMinutes: number
   canPayAtDesk: boolean
   isPublished: boolean
@@ -61,7 +62,7 @@ const FACE = `
     'locale', locale, 'currency', currency, 'accent', accent, 'accentDusk', accent_dusk,
     'taxMode', tax_mode, 'taxName', tax_name, 'taxBasisPoints', tax_basis_points,
     'refundTiers', refund_tiers, 'waiver', waiver, 'safeguarding', safeguarding,
-    'holdMinutes', hold_minutes, 'canPayAtDesk', can_pay_at_desk,
+    'duskKind', dusk_kind, 'holdMinutes', hold_minutes, 'canPayAtDesk', can_pay_at_desk,
     'isPublished', published_at IS NOT NULL)
   FROM academies`
 

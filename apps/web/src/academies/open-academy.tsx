@@ -17,8 +17,18 @@ interface Wanted {
   /** Empty while the owner has not written one: the name's own is used. */
   slug: string
   zone: string
-  currency: Currency
-  taxMode: 'included' | 'added'
+  /** Null while the owner has chosen none: what is likely for the zone is used. */
+  currency: Currency | null
+  taxMode: 'included' | 'added' | null
+}
+
+const WORD_NAMES = {
+  name: 'Name of the academy',
+  place: 'Place',
+  slug: 'Address of the page',
+  zone: 'Time zone',
+  currency: 'Currency',
+  taxMode: 'Tax',
 }
 
 /** The first sentence: who the academy is, where its page is, its time and its money. */
@@ -26,21 +36,29 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
   const client = useQueryClient()
   const { data: session } = useSession()
   const signIn = useSignInFields()
-  const [wanted, setWanted] = useState<Wanted>(() => {
-    const zone = ownZone()
-    const currency = likelyCurrency(zone)
-    const taxMode = currency === 'USD' ? 'added' : 'included'
-    return { name: '', place: '', slug: '', zone, currency, taxMode }
-  })
+  const [wanted, setWanted] = useState<Wanted>(() => ({
+    name: '',
+    place: '',
+    slug: '',
+    zone: ownZone(),
+    currency: null,
+    taxMode: null,
+  }))
   const set = (change: Partial<Wanted>) => setWanted((had) => ({ ...had, ...change }))
   const address = useAddress(wanted.slug || wanted.name, session?.account !== null)
   const slug = wanted.slug || address.suggestion
+  const currency = wanted.currency ?? likelyCurrency(wanted.zone)
+  const taxMode = wanted.taxMode ?? (currency === 'USD' ? 'added' : 'included')
 
-  const { form, errors, all, isSending } = useForm(async () => {
+  const send = async () => {
     if (!session?.account) await signIn.submit()
-    const opened = await call('academies.open', { body: { ...wanted, slug } })
+    const opened = await call('academies.open', { body: { ...wanted, slug, currency, taxMode } })
     await client.invalidateQueries()
     onOpened(opened.slug)
+  }
+  const { form, errors, sentence, isSending } = useForm(send, {
+    beside: ['account'],
+    named: WORD_NAMES,
   })
 
   return (
@@ -74,21 +92,21 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
         <SelectWord
           label="Time zone"
           value={wanted.zone}
-          onChange={(zone) => set({ zone, currency: likelyCurrency(zone) })}
+          onChange={(zone) => set({ zone })}
           options={zoneOptions}
         />{' '}
         and count in{' '}
         <SelectWord
           label="Currency"
-          value={wanted.currency}
-          onChange={(currency) => set({ currency: currency as Currency })}
+          value={currency}
+          onChange={(chosen) => set({ currency: chosen })}
           options={CURRENCIES}
         />
         , with tax{' '}
         <SelectWord
           label="Tax"
-          value={wanted.taxMode}
-          onChange={(taxMode) => set({ taxMode: taxMode as Wanted['taxMode'] })}
+          value={taxMode}
+          onChange={(chosen) => set({ taxMode: chosen })}
           options={[
             { value: 'included', label: 'in the price' },
             { value: 'added', label: 'added on top' },
@@ -104,12 +122,14 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
           <SignInFields fields={signIn} errors={errors} returnTo={paths.open()} />
         </div>
       )}
-      {all && <Notice kind="flag">{all}</Notice>}
+      {sentence && <Notice kind="flag">{sentence}</Notice>}
       <p className="rowb2 mt-4">
         <Button type="submit" kind="go" isBig waiting={isSending && 'Opening…'}>
           Open the academy
         </Button>
-        <span className="soft">All of it can be changed later but the currency.</span>
+        <span className="soft">
+          The address, the time zone and the currency stay. The rest can be changed later.
+        </span>
       </p>
     </form>
   )

@@ -21,15 +21,15 @@ export function ConfirmedPlace(props: {
     <>
       <h1>{clinic.title}</h1>
       <div className="my-5">
-        {enrolment.payment === 'at-desk' ? (
+        {enrolment.owedMinor > 0 ? (
           <Notice kind="ok">
-            <b>The place is yours.</b> {format.money(enrolment.totalMinor)} is to be paid at the
+            <b>The place is yours.</b> {format.money(enrolment.owedMinor)} is to be paid at the
             desk.
           </Notice>
         ) : (
           <Notice kind="ok">
-            <b>{isBack ? 'Paid: the place is yours.' : 'The place is yours.'}</b> A mail with the
-            dates for your calendar is on its way.
+            <b>{isBack ? 'Paid: the place is yours.' : 'The place is yours.'}</b> The dates for your
+            calendar come by mail.
           </Notice>
         )}
       </div>
@@ -80,7 +80,7 @@ export function ConfirmedPlace(props: {
               </tbody>
             </table>
           </div>
-          <GiveUp enrolment={enrolment} academy={academy} format={format} />
+          <GiveUp academy={academy.slug} enrolment={enrolment} format={format} />
         </div>
       </div>
     </>

@@ -14,7 +14,6 @@ import type { Session } from './queries'
 /** One session: change it, or call it off. */
 export function SessionDialog(props: {
   academy: string
-  clinicId: string
   session: Session
   format: Format
   onClose: () => void

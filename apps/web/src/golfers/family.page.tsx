@@ -6,12 +6,12 @@ import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { academyPageQuery } from '../clinics/queries'
-import { myGolfersQuery } from '../enrolments/queries'
 import { useTitle } from '../layouts/accent'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
-import { DependantFields, EMPTY_DEPENDANT, toDependant } from './dependant-fields'
+import { DEPENDANT_FIELDS, DependantFields, EMPTY_DEPENDANT, toDependant } from './dependant-fields'
+import { myGolfersQuery } from './queries'
 
 export const loader =
   (client: QueryClient) =>
@@ -79,11 +79,14 @@ function AddDependant(props: { slug: string; safeguarding: string; onDone: () =>
   const add = useAcademyMutation(props.slug, () =>
     call('golfers.add-dependant', { academy: props.slug, body: toDependant(draft) }),
   )
-  const { form, errors, sentence, isSending } = useForm(async () => {
-    const golfer = await add.mutateAsync(undefined)
-    toast(`${golfer.name} is in your family here.`)
-    props.onDone()
-  })
+  const { form, errors, sentence, isSending } = useForm(
+    async () => {
+      const golfer = await add.mutateAsync(undefined)
+      toast(`${golfer.name} is in your family here.`)
+      props.onDone()
+    },
+    { beside: DEPENDANT_FIELDS },
+  )
   return (
     <form {...form} className="panel max-w-[34rem]">
       <div className="pad">

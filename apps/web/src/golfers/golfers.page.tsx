@@ -116,7 +116,7 @@ function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
     call('golfers.enter', { academy: slug, body }),
   )
   const set = (change: Partial<typeof fields>) => setFields({ ...fields, ...change })
-  const { form, errors, sentence, isSending } = useForm(async () => {
+  const send = async () => {
     const golfer = await enter.mutateAsync({
       name: fields.name,
       ...(fields.email ? { email: fields.email } : {}),
@@ -125,6 +125,9 @@ function EnterGolfer({ slug, onDone }: { slug: string; onDone: () => void }) {
     })
     onDone()
     await navigate(paths.golfer(slug, golfer.id))
+  }
+  const { form, errors, sentence, isSending } = useForm(send, {
+    beside: ['name', 'email', 'phone', 'handicap'],
   })
   return (
     <form {...form} className="panel mb-6 max-w-[38rem]">
