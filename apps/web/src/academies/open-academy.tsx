@@ -2,24 +2,19 @@ import { useQuery, useQueryClient } from '@tanstack/react-query'
 import { useDeferredValue, useState } from 'react'
 import { call } from '../api/client'
 import { useForm } from '../api/form'
-import { routeQuery } from '../api/query'
 import { SignInFields, useSignInFields } from '../accounts/sign-in-fields'
 import { useSession } from '../accounts/queries'
 import { paths } from '../paths'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
-import { InputWord, SelectWord, Sentence } from '../ui/sentence'
-import { CURRENCIES, likelyCurrency, ownZone, zoneOptions, type Currency } from './zones'
+import { OpeningWords, type Opening } from './opening-words'
+import { checkSlugQuery } from './queries'
+import { likelyCurrency, ownZone, type Currency } from './zones'
 
-interface Wanted {
-  name: string
-  place: string
-  /** Empty while the owner has not written one: the name's own is used. */
-  slug: string
-  zone: string
+interface Wanted extends Pick<Opening, 'name' | 'place' | 'slug' | 'zone'> {
   /** Null while the owner has chosen none: what is likely for the zone is used. */
   currency: Currency | null
-  taxMode: 'included' | 'added' | null
+  taxMode: Opening['taxMode'] | null
 }
 
 const WORD_NAMES = {
@@ -39,6 +34,7 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
   const [wanted, setWanted] = useState<Wanted>(() => ({
     name: '',
     place: '',
+    // Empty while the owner has not written one: the name's own is used.
     slug: '',
     zone: ownZone(),
     currency: null,
@@ -63,57 +59,12 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
 
   return (
     <form {...form}>
-      <Sentence>
-        We are{' '}
-        <InputWord
-          label="Name of the academy"
-          value={wanted.name}
-          placeholder="your academy"
-          isWrong={Boolean(errors['name'])}
-          onChange={(name) => set({ name })}
-        />{' '}
-        in{' '}
-        <InputWord
-          label="Place"
-          value={wanted.place}
-          placeholder="county or town"
-          isWrong={Boolean(errors['place'])}
-          onChange={(place) => set({ place })}
-        />
-        . Our page is {location.host}/
-        <InputWord
-          label="Address of the page"
-          value={slug}
-          placeholder="your-academy"
-          isWrong={Boolean(errors['slug']) || !address.isFree}
-          onChange={(written) => set({ slug: written.toLowerCase() })}
-        />
-        . We keep{' '}
-        <SelectWord
-          label="Time zone"
-          value={wanted.zone}
-          onChange={(zone) => set({ zone })}
-          options={zoneOptions}
-        />{' '}
-        and count in{' '}
-        <SelectWord
-          label="Currency"
-          value={currency}
-          onChange={(chosen) => set({ currency: chosen })}
-          options={CURRENCIES}
-        />
-        , with tax{' '}
-        <SelectWord
-          label="Tax"
-          value={taxMode}
-          onChange={(chosen) => set({ taxMode: chosen })}
-          options={[
-            { value: 'included', label: 'in the price' },
-            { value: 'added', label: 'added on top' },
-          ]}
-        />
-        .
-      </Sentence>
+      <OpeningWords
+        wanted={{ ...wanted, slug, currency, taxMode }}
+        onChange={set}
+        errors={errors}
+        isAddressFree={address.isFree}
+      />
       {!address.isFree && (
         <p className="flagtext mb-3">The address /{slug} is taken. Try adding the place.</p>
       )}
@@ -139,7 +90,7 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
 function useAddress(text: string, maySay: boolean): { isFree: boolean; suggestion: string } {
   const asked = useDeferredValue(text.trim().slice(0, 60))
   const { data } = useQuery({
-    ...routeQuery('academies.check-slug', { params: { slug: asked || '-' } }),
+    ...checkSlugQuery(asked || '-'),
     enabled: asked.length > 1 && maySay,
     retry: false,
   })

@@ -1,5 +1,5 @@
 import { useQuery, type QueryClient } from '@tanstack/react-query'
-import { Link, useSearchParams } from 'react-router'
+import { Link, useSearchParams, type LoaderFunctionArgs } from 'react-router'
 import { sessionQuery, useSession } from '../accounts/queries'
 import { sentenceOf } from '../api/problem'
 import { ConnectPayments } from '../checkout/connect-payments'
@@ -20,8 +20,21 @@ import { OpenAcademy } from './open-academy'
 import { LATER_STEPS, OpeningSteps } from './opening-steps'
 import { academyQuery } from './queries'
 
-export const loader = (client: QueryClient) => () =>
-  client.query(sessionQuery).catch(() => undefined)
+/** What is wrong with an answer is said where it is read; the page comes up all the same. */
+export const loader =
+  (client: QueryClient) =>
+  ({ request }: LoaderFunctionArgs) => {
+    const slug = new URL(request.url).searchParams.get('academy')
+    if (!slug) return Promise.allSettled([client.query(sessionQuery)])
+    return Promise.allSettled([
+      client.query(sessionQuery),
+      client.query(academyQuery(slug)),
+      client.query(venuesQuery(slug)),
+      client.query(coachesQuery(slug)),
+      client.query(clinicsQuery(slug)),
+      client.query(paymentsQuery(slug)),
+    ])
+  }
 
 /** Five sentences from nothing to a page that golfers can pay on. Each is kept as it is written. */
 export default function OpenPage() {

@@ -8,6 +8,9 @@ export type AcademySettings = Sent<'academies.change', 'body'>
 export type Staff = Answer<'staff.list'>
 
 export const publishedQuery = () => routeQuery('academies.published', {})
+/** Whether an address is free, and how it is written. */
+export const checkSlugQuery = (slug: string) =>
+  routeQuery('academies.check-slug', { params: { slug } })
 export const academyQuery = (academy: string) => routeQuery('academies.read', { academy })
 export const staffQuery = (academy: string) => routeQuery('staff.list', { academy })
 

@@ -1,4 +1,4 @@
-import { useQuery, type QueryClient } from '@tanstack/react-query'
+import type { QueryClient } from '@tanstack/react-query'
 import { useState } from 'react'
 import { Link, useNavigate, useSearchParams } from 'react-router'
 import { useForm } from '../api/form'
@@ -9,6 +9,7 @@ import { Button, buttonClass } from '../ui/button'
 import { Drawing } from '../ui/drawing'
 import { Field } from '../ui/field'
 import { Notice } from '../ui/notice'
+import { DemoPeople } from './demo-people'
 import { homeOf } from './home'
 import { demoPeopleQuery, useSignIn } from './queries'
 import { returnPath } from './return-path'
@@ -96,44 +97,5 @@ export default function SignInPage() {
         <DemoPeople onPick={lookAround} />
       </div>
     </main>
-  )
-}
-
-function DemoPeople({ onPick }: { onPick: (body: { email: string; password: string }) => void }) {
-  const demo = useQuery(demoPeopleQuery())
-  if (!demo.data) {
-    return (
-      <div>
-        <h2>New here?</h2>
-        <p className="lead my-3">
-          Take a place in a clinic and your account is made on the way. There is nothing to fill in
-          before you have seen a price.
-        </p>
-        <Link to={paths.open()}>Open an academy of your own</Link>
-      </div>
-    )
-  }
-  const { people, password } = demo.data
-  return (
-    <div>
-      <h2>Look around as</h2>
-      <p className="soft my-3">Invented people of two invented academies. Press one to sign in.</p>
-      <ul className="reg">
-        {people.map((person) => (
-          <li key={person.email}>
-            <button
-              type="button"
-              className="person"
-              onClick={() => onPick({ email: person.email, password })}
-            >
-              <b>{person.name}</b>
-              <small>
-                {person.what}, {person.academy}
-              </small>
-            </button>
-          </li>
-        ))}
-      </ul>
-    </div>
   )
 }

@@ -54,35 +54,42 @@ export function ConfirmedPlace(props: {
           ]}
         />
         <div>
-          <div className="card">
-            <table className="sc">
-              <thead>
-                <tr>
-                  <th scope="col">Session</th>
-                  <th scope="col">When</th>
-                  <th scope="col" className="ctr">
-                    Mark
-                  </th>
-                </tr>
-              </thead>
-              <tbody>
-                {enrolment.places.map((place) => (
-                  <tr key={place.id}>
-                    <th scope="row">{place.number}</th>
-                    <td className={place.isCalledOff ? 'off' : undefined}>
-                      {format.day(place.startsAt)}, {format.time(place.startsAt)}
-                    </td>
-                    <td className="mk">
-                      {place.isCalledOff ? 'Called off' : <Mark mark={place.mark ?? 'not-yet'} />}
-                    </td>
-                  </tr>
-                ))}
-              </tbody>
-            </table>
-          </div>
+          <DatesCard enrolment={enrolment} format={format} />
           <GiveUp academy={academy.slug} enrolment={enrolment} format={format} />
         </div>
       </div>
     </>
+  )
+}
+
+/** Every session of the place, with its mark once there is one. */
+function DatesCard({ enrolment, format }: { enrolment: Enrolment; format: Format }) {
+  return (
+    <div className="card">
+      <table className="sc">
+        <thead>
+          <tr>
+            <th scope="col">Session</th>
+            <th scope="col">When</th>
+            <th scope="col" className="ctr">
+              Mark
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {enrolment.places.map((place) => (
+            <tr key={place.id}>
+              <th scope="row">{place.number}</th>
+              <td className={place.isCalledOff ? 'off' : undefined}>
+                {format.day(place.startsAt)}, {format.time(place.startsAt)}
+              </td>
+              <td className="mk">
+                {place.isCalledOff ? 'Called off' : <Mark mark={place.mark ?? 'not-yet'} />}
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
   )
 }

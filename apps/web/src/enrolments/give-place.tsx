@@ -93,10 +93,7 @@ function Choice(props: Golfer & { clinics: readonly ClinicInList[] }) {
           label="Which"
           value={sessionId}
           onChange={(other) => pick({ clinicId, sessionId: other })}
-          options={[
-            ...(isDropIn ? [] : [{ value: '', label: 'The whole run' }]),
-            ...sessionOptions(sessions, { ...format, zone: clinic.data.zone }),
-          ]}
+          options={whichOptions(clinic.data, sessions, format)}
         />
       )}
       {misfits && (
@@ -122,10 +119,12 @@ function useSessionsAhead(clinic: Clinic | undefined) {
   )
 }
 
-function sessionOptions(sessions: Clinic['sessions'], place: Parameters<typeof makeFormat>[0]) {
-  const format = makeFormat(place)
-  return sessions.map((session) => ({
+function whichOptions(clinic: Clinic, sessions: Clinic['sessions'], academyFormat: Format) {
+  const format = makeFormat({ ...academyFormat, zone: clinic.zone })
+  const run = clinic.saleMode === 'drop-in' ? [] : [{ value: '', label: 'The whole run' }]
+  const single = sessions.map((session) => ({
     value: session.id,
     label: `${format.session(session)} (${session.taken} of ${session.capacity})`,
   }))
+  return [...run, ...single]
 }

@@ -5,13 +5,23 @@ import { useSession } from '../accounts/queries'
 import { useSignInFields } from '../accounts/sign-in-fields'
 import { useForm } from '../api/form'
 import type { ClinicPage } from '../clinics/queries'
-import { EMPTY_DEPENDANT } from '../golfers/dependant-fields'
+import { EMPTY_DEPENDANT, type DependantDraft } from '../golfers/dependant-fields'
 import { myGolfersQuery } from '../golfers/queries'
 import { paths } from '../paths'
 import { useHold } from './queries'
 import { amountOf, whoFits, whoIsFor } from './what-and-who'
 
 const SHOWN = ['account', 'for.dependant', 'for.handicap', 'handicap', 'hasAcceptedWaiver']
+
+interface Choice {
+  what: string
+  sessionId: string
+  /** Null while nobody was picked: whoever fits. */
+  picked: string | null
+  handicap: string
+  dependant: DependantDraft
+  hasAccepted: boolean
+}
 
 /** What somebody chooses in the panel beside a clinic, and the press that takes the place. */
 export function useTaking({ academy, clinic }: ClinicPage) {
@@ -24,11 +34,10 @@ export function useTaking({ academy, clinic }: ClinicPage) {
   const hold = useHold(academy.slug)
 
   const ahead = clinic.sessions.filter(({ isPast, state }) => !isPast && state === 'planned')
-  const [choice, setChoice] = useState({
+  const [choice, setChoice] = useState<Choice>({
     what: clinic.saleMode === 'drop-in' ? 'session' : 'run',
     sessionId: ahead[0]?.id ?? '',
-    /** Null while nobody was picked: whoever fits. */
-    picked: null as string | null,
+    picked: null,
     handicap: '',
     dependant: EMPTY_DEPENDANT,
     hasAccepted: false,
@@ -62,7 +71,7 @@ export function useTaking({ academy, clinic }: ClinicPage) {
     signIn,
     ahead,
     choice: { ...choice, who },
-    change: (part: Partial<typeof choice>) => setChoice((had) => ({ ...had, ...part })),
+    change: (part: Partial<Choice>) => setChoice((had) => ({ ...had, ...part })),
     /** Takes another date: what was refused for the one before says nothing of it. */
     chooseDate: (part: { what: string } | { sessionId: string }) => {
       refusal.refuse(null)
