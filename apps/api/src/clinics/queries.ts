@@ -304,7 +304,6 @@ export async function listClinics(trx: AcademyTrx, now: Date): Promise<ClinicLis
 
 export interface SessionOnBoardRow extends Session {
   clinicTitle: string
-  clinicState: Clinic['state']
 }
 
 /** Sessions that begin in a span of time, drafts left out. */
@@ -318,8 +317,8 @@ export async function listSessionsBetween(
     )
     .where('sessions.startsAt', '>=', from)
     .where('sessions.startsAt', '<', to)
-    .where('clinics.state', 'published')
-    .select('sessions.*', 'clinics.title as clinicTitle', 'clinics.state as clinicState')
+    .whereNot('clinics.state', 'draft')
+    .select('sessions.*', 'clinics.title as clinicTitle')
     .orderBy(['sessions.startsAt', 'sessions.id'])
   if (coachId) {
     query.whereRaw(
