@@ -304,21 +304,24 @@ export async function listClinics(trx: AcademyTrx, now: Date): Promise<ClinicLis
 
 export interface SessionOnBoardRow extends Session {
   clinicTitle: string
+  zone: string
 }
 
-/** Sessions that begin in a span of time, drafts left out. */
+/**
+ * Sessions held on some days, the last one included, each by the calendar of its own venue. Drafts
+ * are left out.
+ */
 export async function listSessionsBetween(
   trx: AcademyTrx,
-  { from, to, coachId }: { from: Date; to: Date; coachId?: string },
+  { from, to, coachId }: { from: string; to: string; coachId?: string },
 ): Promise<SessionOnBoardRow[]> {
   const query = Session.query(trx)
     .join('clinics', (join) =>
       join.on('clinics.academyId', 'sessions.academyId').on('clinics.id', 'sessions.clinicId'),
     )
-    .where('sessions.startsAt', '>=', from)
-    .where('sessions.startsAt', '<', to)
+    .whereBetween('sessions.heldOn', [from, to])
     .whereNot('clinics.state', 'draft')
-    .select('sessions.*', 'clinics.title as clinicTitle')
+    .select('sessions.*', 'clinics.title as clinicTitle', 'clinics.zone as zone')
     .orderBy(['sessions.startsAt', 'sessions.id'])
   if (coachId) {
     query.whereRaw(

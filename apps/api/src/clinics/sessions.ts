@@ -166,8 +166,8 @@ export async function readBoard(
     const days = daysBetween(from, to)
     const coach = reach.scope === 'own' ? await findCoachOf(trx, reach.accountId) : undefined
     const sessions = await listSessionsBetween(trx, {
-      from: toInstant({ startsOnLocal: from, startsAtLocal: '00:00', zone }),
-      to: toInstant({ startsOnLocal: dayAfter(to), startsAtLocal: '00:00', zone }),
+      from,
+      to,
       ...(coach ? { coachId: coach.id } : {}),
     })
     const views = await viewSessions(trx, sessions)
@@ -186,11 +186,10 @@ export async function readBoard(
         dayLocal,
         duskAt: first ? (duskOver(first, { dayLocal, duskKind })?.toISOString() ?? null) : null,
       })),
-      sessions: views.map((view, index) => ({
-        ...view,
-        clinicId: sessions[index]?.clinicId ?? '',
-        clinicTitle: sessions[index]?.clinicTitle ?? '',
-      })),
+      sessions: sessions.flatMap(({ clinicId, clinicTitle, heldOn, zone }, index) => {
+        const view = views[index]
+        return view ? [{ ...view, clinicId, clinicTitle, heldOn, zone }] : []
+      }),
     }
   })
 }

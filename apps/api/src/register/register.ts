@@ -1,5 +1,4 @@
 import type { Answer, Parsed } from '@marram/contract'
-import { toInstant } from '@marram/schedule'
 import { readAcademy } from '../academies/academies'
 import {
   isCoachOfClinic,
@@ -65,17 +64,14 @@ export async function readDay(
     const { zone, duskKind } = await readAcademy(trx)
     const coach = await findCoachOf(trx, reach.accountId)
     const isOwnOnly = reach.scope === 'own'
-    const from = toInstant({ startsOnLocal: dayLocal, startsAtLocal: '00:00', zone })
-    const to = new Date(from.getTime() + 26 * 3_600_000)
     const nobody = isOwnOnly && !coach
-    const found = nobody
+    const sessions = nobody
       ? []
       : await listSessionsBetween(trx, {
-          from,
-          to,
+          from: dayLocal,
+          to: dayLocal,
           ...(isOwnOnly && coach ? { coachId: coach.id } : {}),
         })
-    const sessions = found.filter(({ heldOn }) => heldOn === dayLocal)
     const [first] = sessions
     const clinic = first && (await findClinic(trx, first.clinicId))
     const venue = clinic && (await findVenue(trx, clinic.venueId))

@@ -5,8 +5,8 @@ export type BoardSession = Board['sessions'][number]
 
 /** The hours that the board shows: the sessions' own, with an hour around them. */
 export function hoursOf(board: Board): { from: number; to: number } {
-  const starts = board.sessions.map(({ startsAt }) => minutesOfDay(startsAt, board.zone))
-  const ends = board.sessions.map(({ endsAt }) => minutesOfDay(endsAt, board.zone))
+  const starts = board.sessions.map(({ startsAt, zone }) => minutesOfDay(startsAt, zone))
+  const ends = board.sessions.map(({ endsAt, zone }) => minutesOfDay(endsAt, zone))
   const from = Math.min(9 * 60, ...starts)
   const to = Math.max(20 * 60, ...ends.map((end) => (end === 0 ? 1440 : end)))
   return { from: Math.floor(from / 60), to: Math.min(24, Math.ceil(to / 60) + 1) }

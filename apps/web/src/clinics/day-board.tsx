@@ -15,9 +15,7 @@ export function DayBoard(props: { academy: string; board: Board; format: Format 
   const today = dayOfInstant(new Date(useNow()).toISOString(), board.zone)
   const isThisWeek = board.days.some(({ dayLocal }) => dayLocal === today)
   const [day, setDay] = useState(isThisWeek ? today : (board.days[0]?.dayLocal ?? today))
-  const sessions = board.sessions.filter(
-    ({ startsAt }) => dayOfInstant(startsAt, board.zone) === day,
-  )
+  const sessions = board.sessions.filter(({ heldOn }) => heldOn === day)
   const dusk = board.days.find(({ dayLocal }) => dayLocal === day)?.duskAt
   return (
     <>

@@ -84,14 +84,13 @@ export function WeekBoard(props: { academy: string; board: Board; format: Format
                     </span>
                   )}
                   {board.sessions
-                    .filter((session) => dayOfInstant(session.startsAt, board.zone) === dayLocal)
+                    .filter(({ heldOn }) => heldOn === dayLocal)
                     .filter((session) => session.areas.some(({ id }) => id === area.id))
                     .map((session) => (
                       <Slip
                         key={session.id}
                         academy={academy}
                         session={session}
-                        zone={board.zone}
                         format={format}
                         at={at}
                       />
@@ -135,13 +134,12 @@ function firstDark({ areas }: Board): number {
 function Slip(props: {
   academy: string
   session: BoardSession
-  zone: string
   format: Format
   at: (minutes: number) => number
 }) {
-  const { academy, session, zone, format, at } = props
-  const from = at(minutesOfDay(session.startsAt, zone))
-  const to = at(minutesOfDay(session.endsAt, zone))
+  const { academy, session, format, at } = props
+  const from = at(minutesOfDay(session.startsAt, session.zone))
+  const to = at(minutesOfDay(session.endsAt, session.zone))
   const isDone = Date.parse(session.endsAt) < useNow()
   const isOff = session.state === 'called-off'
   const isWarning = session.darkMinutes > 0 && !isDone && !isOff
