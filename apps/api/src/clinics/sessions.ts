@@ -20,6 +20,7 @@ import {
   setSessionParts,
   updateSession,
 } from './queries'
+import { isSameMeeting } from './rules'
 import { viewSessions, type SessionView } from './views'
 
 /** Whose sessions a member of staff may touch. */
@@ -59,24 +60,29 @@ export async function changeSession(
       const times = newTimes(session, change, clinic.zone)
       refuseThePast({ session, times, now: services.clock.now() })
       const parts = (await listSessionParts(trx, [sessionId])).get(sessionId)
-      const areas =
-        change.areas ??
-        (parts?.areas ?? []).map(({ id, fromUnit, toUnit }) => ({ areaId: id, fromUnit, toUnit }))
-      const coachIds = change.coachIds ?? (parts?.coaches ?? []).map(({ id }) => id)
+      const had = {
+        ...session,
+        coachIds: (parts?.coaches ?? []).map(({ id }) => id),
+        areas: (parts?.areas ?? []).map(({ id, ...units }) => ({ areaId: id, ...units })),
+      }
+      const { coachIds = had.coachIds, areas = had.areas } = change
       await checkAreas(trx, { venueId: venue.id, areas })
       await checkCoaches(trx, coachIds)
       const capacity = checkCapacity(session, change.capacity)
       const { duskKind } = await readAcademy(trx)
+      const isNews = !isSameMeeting(had, { ...times, coachIds, areas })
       await updateSession(trx, sessionId, {
         ...times,
         capacity,
         duskAt: duskOver(venue, { dayLocal: times.heldOn, duskKind }),
-        calendarSequence: session.calendarSequence + 1,
+        calendarSequence: session.calendarSequence + (isNews ? 1 : 0),
       })
-      const isLive = clinic.state !== 'draft'
-      await setSessionParts(trx, { sessionId, ...times, coachIds, areas, isLive })
       const { academyId } = reach
-      await services.outbox.emit(trx, 'session.changed', { academyId, sessionId })
+      if (isNews) {
+        const isLive = clinic.state !== 'draft'
+        await setSessionParts(trx, { sessionId, ...times, coachIds, areas, isLive })
+        await services.outbox.emit(trx, 'session.changed', { academyId, sessionId })
+      }
       if (capacity > session.capacity) {
         await services.outbox.emit(trx, 'places.opened', { academyId, clinicId: clinic.id })
       }

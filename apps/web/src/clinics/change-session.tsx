@@ -36,7 +36,7 @@ export function ChangeSession(props: {
   )
   const { form, errors, sentence, isSending } = useForm(async () => {
     await change.mutateAsync(bodyOf(wanted, session))
-    toast('Changed. Golfers get a mail where the time or the place is another.')
+    toast('Changed. Golfers get a mail where the time, the place or the coach is another.')
     onDone()
   })
   return (

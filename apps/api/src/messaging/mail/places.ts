@@ -114,7 +114,12 @@ const defaultInWords = (choice: 'credit' | 'money') =>
 
 export function changedLetter(
   facts: EnrolmentFacts,
-  given: { session: { startsAt: Date; endsAt: Date }; areas: readonly string[]; url: string },
+  given: {
+    session: { startsAt: Date; endsAt: Date }
+    areas: readonly string[]
+    coaches: readonly string[]
+    url: string
+  },
 ): Letter {
   const { clinic, venue } = facts
   return letter(facts, {
@@ -123,6 +128,7 @@ export function changedLetter(
     facts: [
       ['When', timeText(facts, given.session)],
       ['Where', [given.areas.join(' and '), venue.name].filter(Boolean).join(', ')],
+      ['With', given.coaches.join(' and ')],
     ],
     action: { label: 'See the place', url: given.url },
   })
