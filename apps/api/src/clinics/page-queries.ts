@@ -31,6 +31,8 @@ export interface PageClinicRow {
   endsAt: string
   zone: string
   sessionsAhead: number
+  /** The numbers in the run of the sessions still to come. */
+  numbersAhead: number[]
   sessionsTotal: number
   areas: string[]
   coaches: string[]
@@ -80,6 +82,7 @@ const CLINICS = `
     'slug', c.slug, 'title', c.title, 'summary', c.summary,
     'startsAt', ${iso('next.starts_at')}, 'endsAt', ${iso('next.ends_at')}, 'zone', c.zone,
     'sessionsAhead', run.sessions_ahead, 'sessionsTotal', run.sessions_total,
+    'numbersAhead', run.numbers_ahead,
     'areas', (SELECT coalesce(json_agg(ar.name ORDER BY sa.position), '[]') FROM session_areas sa
       JOIN areas ar ON ar.academy_id = sa.academy_id AND ar.id = sa.area_id
       WHERE sa.academy_id = c.academy_id AND sa.session_id = next.id),
@@ -104,7 +107,8 @@ const CLINICS = `
     WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id AND ${isAhead}
     ORDER BY held + confirmed DESC LIMIT 1) fullest
   CROSS JOIN LATERAL (
-    SELECT count(*) AS sessions_total, count(*) FILTER (WHERE ${isAhead}) AS sessions_ahead
+    SELECT count(*) AS sessions_total, count(*) FILTER (WHERE ${isAhead}) AS sessions_ahead,
+      array_agg(s.number) FILTER (WHERE ${isAhead}) AS numbers_ahead
     FROM sessions s WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id) run
   WHERE c.state = 'published'`
 
