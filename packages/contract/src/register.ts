@@ -81,12 +81,15 @@ export const registerSchemas = {
           marks: z.record(z.string(), z.enum([...MARKS, 'not-yet'])),
         }),
       ),
-      money: z.object({
-        paidMinor: z.int(),
-        taxMinor: z.int(),
-        earnedMinor: z.int(),
-        toEarnMinor: z.int(),
-      }),
+      /** Null for those who may not read the ledger. */
+      money: z
+        .object({
+          paidMinor: z.int(),
+          taxMinor: z.int(),
+          earnedMinor: z.int(),
+          toEarnMinor: z.int(),
+        })
+        .nullable(),
     }),
   },
 } as const

@@ -233,11 +233,15 @@ function viewRow(
   }
 }
 
-/** The card of a clinic: golfers down, sessions across, and the money on it. */
+/**
+ * The card of a clinic: golfers down, sessions across, and the money on it for those who may read
+ * the ledger.
+ */
 export async function readCard(
   { db }: Services,
-  { reach, clinicId }: { reach: SessionReach; clinicId: string },
+  given: { reach: SessionReach; clinicId: string; mayReadMoney: boolean },
 ): Promise<Answer<'register.card'>> {
+  const { reach, clinicId, mayReadMoney } = given
   return inAcademy(db, reach.academyId, async (trx) => {
     const clinic = await findClinic(trx, clinicId)
     const { accountId, scope } = reach
@@ -262,7 +266,7 @@ export async function readCard(
     return {
       coaches: coaches.map(({ id, name, initials }) => ({ id, name, initials })),
       rows: [...cards.values()],
-      money: await readCardMoney(trx, clinicId),
+      money: mayReadMoney ? await readCardMoney(trx, clinicId) : null,
     }
   })
 }
