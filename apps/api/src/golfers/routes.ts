@@ -1,7 +1,8 @@
 import type { Handlers } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
 import type { Services } from '../platform/services'
-import { addMyDependant, enterGolfer, listGolfers, readMyGolfers } from './golfers'
+import { enterGolfer, listGolfers } from './for-staff'
+import { addMyDependant, readMyGolfers } from './golfers'
 
 export function golferHandlers(services: Services): Handlers {
   return {
