@@ -4,6 +4,7 @@ import { givePlaces, listWaitlist, lockEnrolment } from '../enrolments/enrolment
 import { viewEntry } from '../enrolments/waitlist'
 import { changeGolfer, readGolfer } from '../golfers/for-staff'
 import { findGolfer } from '../golfers/golfers'
+import { golferReach } from '../golfers/routes'
 import { notFound } from '../platform/errors'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
@@ -31,11 +32,8 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
   }
   const byStaff = (context: RequestContext, enrolmentId: string) =>
     ({ academyId: asAcademy(context).academyId, enrolmentId, accountId: 'staff' }) as const
-  const readOneGolfer = (context: RequestContext, golferId: string) => {
-    const { academyId, account, scope } = asStaff(context)
-    const reach = { academyId, accountId: account.id, scope: scope ?? 'own' }
-    return readGolfer(services, { reach, golferId, creditOf: readCreditOfGolfer })
-  }
+  const readOneGolfer = (context: RequestContext, golferId: string) =>
+    readGolfer(services, { reach: golferReach(context), golferId, creditOf: readCreditOfGolfer })
 
   return {
     'checkout.start': async ({ params }, context) => ({

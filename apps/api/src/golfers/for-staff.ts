@@ -1,4 +1,4 @@
-import type { Answer, Parsed } from '@marram/contract'
+import type { Answer, Parsed, Scope } from '@marram/contract'
 import { readAcademy } from '../academies/academies'
 import { findCoachOf } from '../coaches/coaches'
 import { notFound } from '../platform/errors'
@@ -23,6 +23,8 @@ export interface Reach {
   academyId: string
   accountId: string
   scope: 'all' | 'own'
+  /** Of a minor's contacts and consents; `own` reaches to the days around a coach's sessions. */
+  minors: Scope | null
 }
 
 export async function listGolfers(
@@ -35,11 +37,19 @@ export async function listGolfers(
     const now = clock.now()
     const { zone } = await readAcademy(trx)
     const rows = await searchGolfers(trx, { search, now, ...coach })
-    return { golfers: rows.map((row) => viewListItem(row, localDayOf(now, zone))) }
+    const today = localDayOf(now, zone)
+    return {
+      golfers: rows.map((row) => {
+        return viewListItem(row, { today, hasContacts: maySeeContacts(row, { reach, today }) })
+      }),
+    }
   })
 }
 
-/** One golfer for staff. Looking at a minor's contacts and consents is written down. */
+/**
+ * One golfer for staff. Looking at a minor's contacts and consents is written down; who may not see
+ * them gets the rest.
+ */
 export async function readGolfer(
   { db, clock }: Services,
   {
@@ -60,17 +70,19 @@ export async function readGolfer(
     const [row] = await searchGolfers(trx, { search: '', now, golferId, ...coach })
     if (!row) throw notFound('golfer')
     const today = localDayOf(now, zone)
-    if (isMinor(row, today)) {
+    const hasContacts = maySeeContacts(row, { reach, today })
+    if (hasContacts && isMinor(row, today)) {
       const seen = { golferId, accountId: reach.accountId, lookedAt: now }
       await insertLookUp(trx, { id: newId(now), ...seen })
     }
-    const consents = await listConsents(trx, golferId)
+    const consents = hasContacts ? await listConsents(trx, golferId) : []
     return {
-      ...viewListItem(row, today),
+      ...viewListItem(row, { today, hasContacts }),
+      hasContacts,
       bornOn: row.bornOn,
       ageYears: row.bornOn ? ageOn(row.bornOn, today) : null,
       notes: row.notes,
-      emergencyContact: contactOf(row),
+      emergencyContact: hasContacts ? contactOf(row) : null,
       consents: consents.map(({ givenAt, ...rest }) => ({
         ...rest,
         givenAt: givenAt.toISOString(),
@@ -105,7 +117,7 @@ export async function enterGolfer(
     const { zone } = await readAcademy(trx)
     const [row] = await searchGolfers(trx, { search: '', now, golferId: id })
     invariant(row, 'the golfer was just written')
-    return viewListItem(row, localDayOf(now, zone))
+    return viewListItem(row, { today: localDayOf(now, zone), hasContacts: true })
   })
 }
 
@@ -131,13 +143,24 @@ async function coachOfReach(
   return coach ? { coachId: coach.id } : 'nobody'
 }
 
-function viewListItem(row: GolferListRow, today: string): Answer<'golfers.enter'> {
+function maySeeContacts(
+  row: GolferListRow,
+  { reach, today }: { reach: Reach; today: string },
+): boolean {
+  if (!isMinor(row, today) || reach.minors === 'all') return true
+  return reach.minors === 'own' && row.isNearOwnSession
+}
+
+function viewListItem(
+  row: GolferListRow,
+  { today, hasContacts }: { today: string; hasContacts: boolean },
+): Answer<'golfers.enter'> {
   return {
     id: row.id,
     name: row.name,
-    email: row.accountEmail ?? row.email,
+    email: hasContacts ? (row.accountEmail ?? row.email) : null,
     isJunior: isMinor(row, today),
-    guardianName: row.guardianName,
+    guardianName: hasContacts ? row.guardianName : null,
     handicap: row.handicap,
     hand: row.hand,
     placesAhead: row.placesAhead,
