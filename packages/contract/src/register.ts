@@ -52,7 +52,7 @@ export const registerSchemas = {
     params: z.strictObject({ sessionId: id, placeId: id }),
     body: z.strictObject({
       mark: z.enum(MARKS).nullable(),
-      /** When it was pressed, by the phone's clock; kept beside our own. */
+      /** When it was pressed, by the phone's clock: the last press counts, whenever it arrives. */
       markedAt: instant.optional(),
     }),
     response: registerRow,

@@ -16,6 +16,15 @@ export async function insertMarkChange(trx: AcademyTrx, row: Partial<MarkChange>
   await MarkChange.query(trx).insert(row)
 }
 
+/** When a place's newest press so far was made, by the phone's clock but no later than ours. */
+export async function findLastPress(trx: AcademyTrx, placeId: string): Promise<Date | null> {
+  const { rows } = await trx.raw<{ rows: { pressedAt: Date | null }[] }>(
+    'SELECT max(least(pressed_at, marked_at)) AS pressed_at FROM mark_history WHERE place_id = ?',
+    [placeId],
+  )
+  return rows[0]?.pressedAt ?? null
+}
+
 export interface RowOfRegister {
   placeId: string
   sessionId: string

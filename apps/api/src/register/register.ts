@@ -22,6 +22,7 @@ import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { findVenue } from '../venues/venues'
 import type { Mark } from './models'
 import {
+  findLastPress,
   insertMarkChange,
   listCardRows,
   listRegisterHeads,
@@ -31,7 +32,7 @@ import {
   setMark,
   type RowOfRegister,
 } from './queries'
-import { noteOf, refusalToClose, refusalToMark, type RegisterRefusal } from './rules'
+import { isLastPress, noteOf, refusalToClose, refusalToMark, type RegisterRefusal } from './rules'
 
 type RegisterView = Answer<'register.read'>
 
@@ -86,7 +87,8 @@ export async function readDay(
 }
 
 /**
- * Sets a golfer's mark, or takes it away with `null`. The last press counts; every press is kept.
+ * Sets a golfer's mark, or takes it away with `null`. The last press counts, by when it was pressed
+ * and not by when it arrived; every press is kept.
  */
 export async function markPlace(
   { db, clock }: Services,
@@ -108,13 +110,24 @@ export async function markPlace(
     const mark: Mark | null = press.mark
     const pressedAt = press.markedAt ? new Date(press.markedAt) : null
     const by = { placeId, markedBy: reach.accountId, markedAt: now, pressedAt }
+    const isLast = isLastPress({ pressedAt, now, before: await findLastPress(trx, placeId) })
     await insertMarkChange(trx, { id: newId(now), ...by, mark })
+    if (!isLast) return rowOf(trx, session, placeId)
     if (mark) await setMark(trx, { ...by, sessionId, mark })
     else await removeMark(trx, placeId)
-    const row = (await viewOne(trx, session)).rows.find((entry) => entry.placeId === placeId)
-    invariant(row, 'a confirmed place is in its register')
-    return row
+    return rowOf(trx, session, placeId)
   })
+}
+
+async function rowOf(
+  trx: AcademyTrx,
+  session: Session,
+  placeId: string,
+): Promise<Answer<'register.mark'>> {
+  const { rows } = await viewOne(trx, session)
+  const row = rows.find((entry) => entry.placeId === placeId)
+  invariant(row, 'a confirmed place is in its register')
+  return row
 }
 
 /** Closes a register once everybody is marked. Closing earns the session's money. */
