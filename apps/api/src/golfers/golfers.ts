@@ -15,6 +15,7 @@ import {
   insertConsent,
   insertGolfer,
   listGolfersOf,
+  lockGuardian,
   updateGolfer,
 } from './queries'
 import { ageOn, contactOf } from './rules'
@@ -83,6 +84,7 @@ export async function addDependant(
 ): Promise<Golfer> {
   const now = clock.now()
   const { name, bornOn } = dependant
+  await lockGuardian(trx, guardianId)
   const had = await findDependant(trx, { guardianAccountId: guardianId, name, bornOn })
   if (had) return had
   const { safeguarding, zone } = await readAcademy(trx)

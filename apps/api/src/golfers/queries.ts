@@ -14,6 +14,11 @@ export async function findGolferOfAccount(
   return Golfer.query(trx).where({ accountId }).first()
 }
 
+/** Locks a guardian's account, so that two who add the same child come one after the other. */
+export async function lockGuardian(trx: AcademyTrx, accountId: string): Promise<void> {
+  await trx.raw('SELECT id FROM accounts WHERE id = ? FOR NO KEY UPDATE', [accountId])
+}
+
 export async function findDependant(
   trx: AcademyTrx,
   who: { guardianAccountId: string; name: string; bornOn: string },
