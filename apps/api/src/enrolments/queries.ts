@@ -212,6 +212,12 @@ export async function updateWaitlistEntry(
   await WaitlistEntry.query(trx).patch(change).where({ id })
 }
 
+/** Stops somebody's waiting; false when they do not wait any more. */
+export async function endWaiting(trx: AcademyTrx, id: string): Promise<boolean> {
+  const change = { state: 'left' } as const
+  return (await WaitlistEntry.query(trx).patch(change).where({ id, state: 'waiting' })) === 1
+}
+
 /** What became of an offer: its entry follows the enrolment. */
 export async function settleOffer(
   trx: AcademyTrx,

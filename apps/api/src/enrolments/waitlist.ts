@@ -11,6 +11,7 @@ import { takePlaces } from './hold'
 import type { WaitlistEntry } from './models'
 import { checkFit, checkOpen, findOnSale, type OnSale, type WantedPlaces } from './on-sale'
 import {
+  endWaiting,
   findActiveEnrolment,
   findWaitlistEntry,
   insertWaitlistEntry,
@@ -72,6 +73,7 @@ async function whoWaits(
   return ensureOwnGolfer(services, trx, { person, ...(handicap === undefined ? {} : { handicap }) })
 }
 
+/** Leaves the waitlist. Who has left already, or had the offer taken, has nothing left to leave. */
 export async function leaveWaitlist(
   { db }: Services,
   { academyId, accountId, entryId }: { academyId: string; accountId: string; entryId: string },
@@ -79,7 +81,11 @@ export async function leaveWaitlist(
   await inAcademy(db, academyId, async (trx) => {
     const entry = await findWaitlistEntry(trx, entryId)
     if (entry?.accountId !== accountId) throw notFound('waitlist entry')
-    if (entry.state === 'waiting') await updateWaitlistEntry(trx, entryId, { state: 'left' })
+    if (await endWaiting(trx, entryId)) return
+    const now = await findWaitlistEntry(trx, entryId)
+    if (now?.state === 'offered') {
+      throw new Problem('already-decided', 'You have been offered the place: let it go there.')
+    }
   })
 }
 
