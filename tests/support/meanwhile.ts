@@ -14,9 +14,9 @@ export function actMeanwhile<T>(
   return asSuperuser(world, async (db) => {
     const { acting } = await db.transaction(async (trx) => {
       await change(trx)
-      let isDone = false
-      const acting = act().finally(() => (isDone = true))
-      while (!isDone && !(await isWaitedFor(trx)));
+      const progress = { isDone: false }
+      const acting = act().finally(() => (progress.isDone = true))
+      while (!progress.isDone && !(await isWaitedFor(trx)));
       // Wrapped, so that the transaction does not wait for who waits for it.
       return { acting }
     })

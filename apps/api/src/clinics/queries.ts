@@ -22,8 +22,11 @@ export async function listSlugsLike(trx: AcademyTrx, slug: string): Promise<stri
   return rows.map((row) => row.slug)
 }
 
-export async function insertClinic(trx: AcademyTrx, row: Partial<Clinic>): Promise<void> {
-  await Clinic.query(trx).insert(row)
+/** Resolves to false when another clinic has the address. */
+export async function insertClinic(trx: AcademyTrx, row: Partial<Clinic>): Promise<boolean> {
+  const { id } = row
+  await Clinic.query(trx).insert(row).onConflict(['academy_id', 'slug']).ignore()
+  return (await Clinic.query(trx).where({ id }).resultSize()) === 1
 }
 
 export async function updateClinic(
@@ -68,6 +71,11 @@ export async function readClinicParts(
 
 export async function listSessionsOf(trx: AcademyTrx, clinicId: string): Promise<Session[]> {
   return Session.query(trx).where({ clinicId }).orderBy('number')
+}
+
+/** As `listSessionsOf`, with their seats locked, so that nobody takes one meanwhile. */
+export async function lockSessionsOf(trx: AcademyTrx, clinicId: string): Promise<Session[]> {
+  return Session.query(trx).where({ clinicId }).orderBy('id').forNoKeyUpdate()
 }
 
 export async function findSession(trx: AcademyTrx, id: string): Promise<Session | undefined> {

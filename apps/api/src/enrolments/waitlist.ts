@@ -46,17 +46,11 @@ export async function joinWaitlist(
     }
     const isFull = onSale.taken.some((s) => s.held + s.confirmed >= s.capacity)
     if (!isFull) throw new Problem('not-on-sale', 'There is a place: take it instead of waiting.')
-    const mine = await listWaitlist(trx, { accountId })
-    const had = mine.find(
-      (row) =>
-        row.golferId === golferId && row.clinicId === clinicId && row.sessionId === sessionId,
-    )
-    if (had) return viewEntry(had)
-    const id = newId(now)
-    const entry = { id, clinicId, sessionId, golferId, accountId, joinedAt: now }
-    await insertWaitlistEntry(trx, { ...entry, state: 'waiting' })
-    const [row] = await listWaitlist(trx, { id })
-    invariant(row, 'the entry was just written')
+    const entry = { clinicId, sessionId, golferId, accountId, joinedAt: now }
+    await insertWaitlistEntry(trx, { id: newId(now), ...entry, state: 'waiting' })
+    const waits = await listWaitlist(trx, { golferId })
+    const row = waits.find((row) => row.clinicId === clinicId && row.sessionId === sessionId)
+    invariant(row, 'the golfer waits by now')
     return viewEntry(row)
   })
 }
