@@ -7,6 +7,7 @@ import { invariant } from '../platform/invariant'
 import { localDayOf } from '../platform/local-day'
 import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { datedHandicap } from './handicap'
 import type { Golfer } from './models'
 import {
   insertGolfer,
@@ -106,8 +107,7 @@ export async function enterGolfer(
       email: wanted.email ?? null,
       phone: wanted.phone ?? null,
       bornOn: wanted.bornOn ?? null,
-      handicap: wanted.handicap ?? null,
-      handicapOn: wanted.handicap == null ? null : now.toISOString().slice(0, 10),
+      ...(await datedHandicap(trx, { handicap: wanted.handicap ?? null, now })),
       hand: wanted.hand ?? 'right',
       notes: wanted.notes ?? '',
       emergencyName: wanted.emergencyContact?.name ?? null,
@@ -126,12 +126,14 @@ export async function changeGolfer(
   wanted: { academyId: string; golferId: string; change: Parsed<'golfers.change', 'body'> },
 ): Promise<void> {
   const { handicap, ...rest } = wanted.change
-  const day = clock.now().toISOString().slice(0, 10)
-  const change = { ...rest, ...(handicap === undefined ? {} : { handicap, handicapOn: day }) }
-  if (Object.keys(change).length === 0) return
-  await inAcademy(db, wanted.academyId, (trx) =>
-    updateGolfer(trx, wanted.golferId, change as Partial<Golfer>),
-  )
+  await inAcademy(db, wanted.academyId, async (trx) => {
+    const dated =
+      handicap === undefined ? {} : await datedHandicap(trx, { handicap, now: clock.now() })
+    const change = { ...rest, ...dated }
+    if (Object.keys(change).length > 0) {
+      await updateGolfer(trx, wanted.golferId, change as Partial<Golfer>)
+    }
+  })
 }
 
 async function coachOfReach(

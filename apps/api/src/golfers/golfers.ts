@@ -6,6 +6,7 @@ import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import { localDayOf } from '../platform/local-day'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { datedHandicap } from './handicap'
 import type { Golfer } from './models'
 import {
   findDependant,
@@ -67,7 +68,7 @@ export async function ensureOwnGolfer(
     invariant(golfer, 'the person has a golfer by now')
   }
   if (handicap !== undefined && handicap !== golfer.handicap) {
-    await updateGolfer(trx, golfer.id, { handicap, handicapOn: now.toISOString().slice(0, 10) })
+    await updateGolfer(trx, golfer.id, await datedHandicap(trx, { handicap, now }))
     golfer.handicap = handicap
   }
   return golfer
@@ -95,8 +96,7 @@ export async function addDependant(
     guardianAccountId: guardianId,
     name,
     bornOn,
-    handicap: dependant.handicap,
-    handicapOn: dependant.handicap === null ? null : now.toISOString().slice(0, 10),
+    ...(await datedHandicap(trx, { handicap: dependant.handicap, now })),
     emergencyName: dependant.emergencyContact.name,
     emergencyPhone: dependant.emergencyContact.phone,
     createdAt: now,
