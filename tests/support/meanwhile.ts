@@ -2,25 +2,37 @@ import type { Knex } from 'knex'
 import { asSuperuser } from './books'
 import type { World } from './world'
 
+type Change = (trx: Knex) => PromiseLike<unknown>
+
 /**
  * Changes something in a transaction, and lets somebody act while it is still open. It is committed
  * once they wait for it, so that they find the change at the worst of moments.
  */
-export function actMeanwhile<T>(
+export async function actMeanwhile<T>(
   world: World,
-  change: (trx: Knex) => PromiseLike<unknown>,
+  change: Change,
   act: () => Promise<T>,
 ): Promise<T> {
+  const { answer } = await watchMeanwhile(world, change, act)
+  return answer
+}
+
+/** As `actMeanwhile`, and says whether they had to wait. */
+export function watchMeanwhile<T>(
+  world: World,
+  change: Change,
+  act: () => Promise<T>,
+): Promise<{ answer: T; hasWaited: boolean }> {
   return asSuperuser(world, async (db) => {
-    const { acting } = await db.transaction(async (trx) => {
+    const { acting, hasWaited } = await db.transaction(async (trx) => {
       await change(trx)
-      const progress = { isDone: false }
+      const progress = { isDone: false, hasWaited: false }
       const acting = act().finally(() => (progress.isDone = true))
-      while (!progress.isDone && !(await isWaitedFor(trx)));
+      while (!progress.isDone && !progress.hasWaited) progress.hasWaited = await isWaitedFor(trx)
       // Wrapped, so that the transaction does not wait for who waits for it.
-      return { acting }
+      return { acting, hasWaited: progress.hasWaited }
     })
-    return acting
+    return { answer: await acting, hasWaited }
   })
 }
 

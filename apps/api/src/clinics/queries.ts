@@ -82,8 +82,9 @@ export async function findSession(trx: AcademyTrx, id: string): Promise<Session 
   return Session.query(trx).where({ id }).first()
 }
 
+/** Locks a session against other changes of it; places that refer to it can be written all the same. */
 export async function lockSession(trx: AcademyTrx, id: string): Promise<Session | undefined> {
-  return Session.query(trx).where({ id }).forUpdate().first()
+  return Session.query(trx).where({ id }).forNoKeyUpdate().first()
 }
 
 export async function insertSession(trx: AcademyTrx, row: Partial<Session>): Promise<void> {

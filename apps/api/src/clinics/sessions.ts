@@ -12,6 +12,7 @@ import type { Session } from './models'
 import { checkAreas, checkCoaches } from './plan'
 import {
   findClinic,
+  findSession,
   isCoachOfSession,
   listSessionParts,
   listSessionsBetween,
@@ -35,9 +36,24 @@ export async function lockReachableSession(
   trx: AcademyTrx,
   { reach, sessionId }: { reach: SessionReach; sessionId: string },
 ): Promise<Session> {
-  const session = await lockSession(trx, sessionId)
+  return checkReach(trx, { reach, session: await lockSession(trx, sessionId) })
+}
+
+/** As `lockReachableSession`, for who only looks. */
+export async function findReachableSession(
+  trx: AcademyTrx,
+  { reach, sessionId }: { reach: SessionReach; sessionId: string },
+): Promise<Session> {
+  return checkReach(trx, { reach, session: await findSession(trx, sessionId) })
+}
+
+async function checkReach(
+  trx: AcademyTrx,
+  { reach, session }: { reach: SessionReach; session: Session | undefined },
+): Promise<Session> {
   if (!session) throw notFound('session')
   const { scope, accountId } = reach
+  const { id: sessionId } = session
   if (scope === 'own' && !(await isCoachOfSession(trx, { sessionId, accountId }))) {
     throw new Problem('not-allowed', 'This is another coach’s session.')
   }
@@ -154,7 +170,7 @@ export async function callOffSession(
 }
 
 async function viewOne(trx: AcademyTrx, sessionId: string): Promise<SessionView> {
-  const session = await lockSession(trx, sessionId)
+  const session = await findSession(trx, sessionId)
   const [view] = session ? await viewSessions(trx, [session]) : []
   if (!view) throw notFound('session')
   return view

@@ -7,7 +7,7 @@ export async function findEnrolment(trx: AcademyTrx, id: string): Promise<Enrolm
 }
 
 export async function lockEnrolment(trx: AcademyTrx, id: string): Promise<Enrolment | undefined> {
-  return Enrolment.query(trx).where({ id }).forUpdate().first()
+  return Enrolment.query(trx).where({ id }).forNoKeyUpdate().first()
 }
 
 export async function updateEnrolment(

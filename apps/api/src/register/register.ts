@@ -10,7 +10,7 @@ import {
   type Session,
 } from '../clinics/clinics'
 import { duskOver } from '../clinics/light'
-import { lockReachableSession, type SessionReach } from '../clinics/sessions'
+import { findReachableSession, lockReachableSession, type SessionReach } from '../clinics/sessions'
 import { findCoachOf, findCoaches } from '../coaches/coaches'
 import { findPlace } from '../enrolments/enrolments'
 import { ageOn } from '../golfers/golfers'
@@ -51,8 +51,7 @@ export async function readRegister(
   { reach, sessionId }: { reach: SessionReach; sessionId: string },
 ): Promise<RegisterView> {
   return inAcademy(db, reach.academyId, async (trx) => {
-    const session = await lockReachableSession(trx, { reach, sessionId })
-    return viewOne(trx, session)
+    return viewOne(trx, await findReachableSession(trx, { reach, sessionId }))
   })
 }
 
