@@ -1,3 +1,4 @@
+import { isoInstant as iso } from '../platform/db/iso-instant'
 import type { Question } from '../platform/tenancy/ask'
 
 /** The academy of the transaction as the public sees it. */
@@ -66,10 +67,6 @@ const FACE = `
     'holdMinutes', hold_minutes, 'canPayAtDesk', can_pay_at_desk,
     'isPublished', published_at IS NOT NULL)
   FROM academies`
-
-/** An instant as JavaScript writes it. */
-const iso = (column: string): string =>
-  `to_char(${column} AT TIME ZONE 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"')`
 
 const isAhead = "s.state = 'planned' AND s.starts_at > $1"
 

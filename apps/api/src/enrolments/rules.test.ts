@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { agreePrice, isLapsed, offerUntil, sessionsAhead } from './rules'
+import { agreePrice, isFull, isLapsed, offerUntil, sessionsAhead } from './rules'
 
 const at = (text: string) => new Date(`2031-04-01T${text}Z`)
 const sum = (amounts: readonly number[]) => amounts.reduce((total, each) => total + each, 0)
@@ -121,6 +121,17 @@ describe('an agreed price', () => {
         expect(gross(taken) + rest).toBe(runPriceMinor)
       }),
     )
+  })
+})
+
+describe('a session', () => {
+  it.each([
+    { held: 0, confirmed: 11, is: false },
+    { held: 1, confirmed: 10, is: false },
+    { held: 1, confirmed: 11, is: true },
+    { held: 12, confirmed: 0, is: true },
+  ])('of twelve with $held held and $confirmed confirmed is full: $is', ({ is, ...taken }) => {
+    expect(isFull({ ...taken, capacity: 12 })).toBe(is)
   })
 })
 

@@ -72,6 +72,11 @@ function sharesOf(given: Parameters<typeof agreePrice>[0]): number[] {
   return priceOfRemaining(run).sharesMinor
 }
 
+/** Says whether a session has no seat left, held ones counted. */
+export function isFull(session: { held: number; confirmed: number; capacity: number }): boolean {
+  return session.held + session.confirmed >= session.capacity
+}
+
 /** A hold is over once its last millisecond has passed. */
 export function isLapsed(heldUntil: Date, now: Date): boolean {
   return now.getTime() > heldUntil.getTime()

@@ -21,7 +21,7 @@ import {
   updateWaitlistEntry,
   type WaitlistRow,
 } from './queries'
-import { offerUntil, sessionsAhead } from './rules'
+import { isFull, offerUntil, sessionsAhead } from './rules'
 
 type WaitlistView = Answer<'waitlist.join'>
 
@@ -44,8 +44,9 @@ export async function joinWaitlist(
     if (await findActiveEnrolment(trx, { golferId, sessionIds })) {
       throw new Problem('already-has-place', 'This golfer has a place there already.')
     }
-    const isFull = onSale.taken.some((s) => s.held + s.confirmed >= s.capacity)
-    if (!isFull) throw new Problem('not-on-sale', 'There is a place: take it instead of waiting.')
+    if (!onSale.taken.some(isFull)) {
+      throw new Problem('not-on-sale', 'There is a place: take it instead of waiting.')
+    }
     const entry = { clinicId, sessionId, golferId, accountId, joinedAt: now }
     await insertWaitlistEntry(trx, { id: newId(now), ...entry, state: 'waiting' })
     const waits = await listWaitlist(trx, { golferId })

@@ -177,5 +177,5 @@ function viewOwn(golfer: Golfer, today: string): OwnGolferView {
 }
 
 export { findGolfer, findGolferOfAccount, listGolfersOf } from './queries'
-export { ageOn, misfitOf, misfitSentence } from './rules'
+export { isMinor, misfitOf, misfitSentence } from './rules'
 export type { Golfer } from './models'

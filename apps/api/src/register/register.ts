@@ -13,7 +13,7 @@ import { duskOver } from '../clinics/light'
 import { findReachableSession, lockReachableSession, type SessionReach } from '../clinics/sessions'
 import { findCoachOf, findCoaches } from '../coaches/coaches'
 import { findPlace } from '../enrolments/enrolments'
-import { ageOn } from '../golfers/golfers'
+import { isMinor } from '../golfers/golfers'
 import { Problem, notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import { invariant } from '../platform/invariant'
@@ -222,8 +222,6 @@ async function viewRegisters(
   })
 }
 
-const ADULT_YEARS = 18
-
 function viewRow(
   row: RowOfRegister,
   session: { number: number; heldOn: string; sessionsTotal: number },
@@ -237,7 +235,7 @@ function viewRow(
     markedAt: row.markedAt?.toISOString() ?? null,
     handicap: row.handicap,
     hand: row.hand,
-    isJunior: row.bornOn !== null && ageOn(row.bornOn, session.heldOn) < ADULT_YEARS,
+    isJunior: isMinor(row, session.heldOn),
     note: noteOf({ ...row, ...session }),
     lateBefore: row.lateBefore,
     joinedAtNumber: row.joinedAtNumber,
