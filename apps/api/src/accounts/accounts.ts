@@ -228,3 +228,4 @@ export async function signInWithProvider(
 const pick = ({ issuer, subject }: ProviderProfile) => ({ issuer, subject })
 
 export { findAccountById, type Account } from './queries'
+export { LINK_HOURS } from './rules'

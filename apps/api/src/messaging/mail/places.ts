@@ -1,6 +1,8 @@
 import { formatTime, formatDay } from '@marram/schedule/format'
 import { moneyText, timeText, type EnrolmentFacts } from '../facts'
+import { CHOICE_DAYS } from '../../checkout/called-off'
 import type { Letter } from '../letter'
+import { spanInWords } from '../span-in-words'
 
 type Draft = Pick<Letter, 'subject' | 'paragraphs' | 'facts' | 'action'>
 
@@ -96,7 +98,8 @@ export function calledOffLetter(
     given.owedMinor > 0
       ? [
           `${moneyText(academy, given.owedMinor)} is yours: back as money, or kept as credit. ` +
-            `You have seven days to choose; then it is ${defaultInWords(academy.owedDefault)}.`,
+            `You have ${spanInWords({ hours: CHOICE_DAYS * 24 })} to choose; ` +
+            `then it is ${defaultInWords(academy.owedDefault)}.`,
         ]
       : []
   return letter(facts, {
