@@ -4,7 +4,7 @@ import { useWorld } from '../support/use-world'
 
 const world = await useWorld()
 
-it('has the clinic’s money on it for those who may read the ledger, and for nobody else', async () => {
+it('has the clinic’s money on it only for those who may read the ledger', async () => {
   const academy = await openAcademy(world)
   const golfer = await signUp(world)
   const held = await takePlace(golfer, academy, { clinic: academy.clinic })

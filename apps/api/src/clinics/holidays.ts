@@ -30,8 +30,8 @@ export const COUNTRY_OF_SHARED_ZONE: Readonly<Record<string, string>> = {
 }
 
 /**
- * Public holidays of the country that a zone lies in, for a run to leave out. None where the country
- * cannot be told from the zone.
+ * Public holidays of the country that a zone lies in, for a run to leave out. None where the zone
+ * does not tell the country.
  */
 export async function listHolidays(span: {
   zone: string

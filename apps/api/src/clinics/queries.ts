@@ -82,7 +82,7 @@ export async function findSession(trx: AcademyTrx, id: string): Promise<Session 
   return Session.query(trx).where({ id }).first()
 }
 
-/** Locks a session against other changes of it; places that refer to it can be written all the same. */
+/** Locks a session against other changes; what merely refers to it can be written all the same. */
 export async function lockSession(trx: AcademyTrx, id: string): Promise<Session | undefined> {
   return Session.query(trx).where({ id }).forNoKeyUpdate().first()
 }

@@ -111,7 +111,7 @@ function refuseMixing({ mode, payments, mail, google, publicUrl }: Config): void
     }
     if (!isLive) throw new Error('Production needs a live payments key.')
     if (!mail.webhookPublicKey) {
-      // Without it bounces would be refused one by one, and mail sent on to where it comes back from.
+      // Without it every report of a bounce is refused, and mail goes on to where it bounced.
       throw new Error('Production needs MARRAM_MAIL_WEBHOOK_PUBLIC_KEY, to know who tells of mail.')
     }
     if (!publicUrl.startsWith('https://')) throw new Error('Production needs an https public URL.')
