@@ -247,7 +247,15 @@ export const clinicSchemas = {
       zone: z.string(),
       areas: z.array(areaBrief.extend({ venueName: z.string() })),
       days: z.array(z.object({ dayLocal: localDate, duskAt: instant.nullable() })),
-      sessions: z.array(sessionBrief.extend({ clinicId: id, clinicTitle: z.string() })),
+      sessions: z.array(
+        sessionBrief.extend({
+          clinicId: id,
+          clinicTitle: z.string(),
+          /** The day and the zone of its venue, which may be others than the academy's. */
+          heldOn: localDate,
+          zone: z.string(),
+        }),
+      ),
     }),
   },
   'sessions.change': {

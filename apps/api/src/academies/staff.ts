@@ -171,3 +171,5 @@ async function inInvitation<T>(
     return work(trx, invitation)
   })
 }
+
+export { INVITATION_DAYS } from './defaults'

@@ -1,6 +1,5 @@
 import { formatLocalDay } from '@marram/schedule/format'
 import type { Format } from '../academies/format'
-import { localDayOf } from '../academies/local-day'
 import { minutesOfDay, type Board } from './board-times'
 import { Slip } from './slip'
 
@@ -20,9 +19,7 @@ export function BoardDay(props: {
   const { academy, board, day, format, at, now, isToday, nowAt } = props
   const { dayLocal, duskAt } = day
   const duskLeft = duskAt && `${at(minutesOfDay(duskAt, board.zone))}%`
-  const sessions = board.sessions.filter(
-    ({ startsAt }) => localDayOf(startsAt, board.zone) === dayLocal,
-  )
+  const sessions = board.sessions.filter(({ heldOn }) => heldOn === dayLocal)
   return (
     <>
       <DayName dayLocal={dayLocal} locale={format.locale} isToday={isToday} />
@@ -58,7 +55,6 @@ export function BoardDay(props: {
                   key={session.id}
                   academy={academy}
                   session={session}
-                  zone={board.zone}
                   format={format}
                   at={at}
                   now={now}

@@ -14,8 +14,7 @@ export function minutesOfDay(at: string | number, zone: string): number {
 }
 
 /** Where a session stands in the day it starts on, in minutes; what runs over midnight ends there. */
-export function spanOf(session: { startsAt: string; endsAt: string }, zone: string) {
-  const { startsAt, endsAt } = session
+export function spanOf({ startsAt, endsAt, zone }: Timed) {
   const isOver = localDayOf(endsAt, zone) !== localDayOf(startsAt, zone)
   return {
     from: minutesOfDay(startsAt, zone),
@@ -24,16 +23,14 @@ export function spanOf(session: { startsAt: string; endsAt: string }, zone: stri
 }
 
 /** The hours that the board shows: the sessions' own, with an hour around them. */
-export function hoursOf({ sessions, zone }: Pick<Board, 'zone'> & BoardSpans) {
-  const spans = sessions.map((session) => spanOf(session, zone))
+export function hoursOf({ sessions }: { sessions: readonly Timed[] }) {
+  const spans = sessions.map(spanOf)
   const from = Math.min(9 * 60, ...spans.map((span) => span.from))
   const to = Math.max(20 * 60, ...spans.map((span) => span.to))
   return { from: Math.floor(from / 60), to: Math.min(24, Math.ceil(to / 60) + 1) }
 }
 
-interface BoardSpans {
-  sessions: readonly Pick<BoardSession, 'startsAt' | 'endsAt'>[]
-}
+type Timed = Pick<BoardSession, 'startsAt' | 'endsAt' | 'zone'>
 
 /** "18:00" of minutes after midnight. */
 export function timeLocalOf(minutes: number): string {

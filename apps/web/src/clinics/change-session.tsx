@@ -54,7 +54,7 @@ function ChangeForm(
   )
   const { form, errors, sentence, isSending } = useForm(async () => {
     await change.mutateAsync(changeOf(wish, session))
-    toast('Changed. Golfers get a mail where the time or the place is another.')
+    toast('Changed. Golfers get a mail where the time, the place or the coach is another.')
     onDone()
   }, SHOWN)
   return (

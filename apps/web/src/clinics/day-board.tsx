@@ -1,7 +1,7 @@
 import { useState } from 'react'
 import { Link } from 'react-router'
 import { formatLocalDay } from '@marram/schedule/format'
-import type { Format } from '../academies/format'
+import { makeFormat, type Format } from '../academies/format'
 import { localDayOf } from '../academies/local-day'
 import { paths } from '../paths'
 import { PlaceTicks } from '../ui/place-ticks'
@@ -16,7 +16,7 @@ export function DayBoard(props: { academy: string; board: Board; format: Format 
   const today = localDayOf(useNow(), board.zone)
   const isThisWeek = board.days.some(({ dayLocal }) => dayLocal === today)
   const [day, setDay] = useState(isThisWeek ? today : (board.days[0]?.dayLocal ?? today))
-  const sessions = board.sessions.filter(({ startsAt }) => localDayOf(startsAt, board.zone) === day)
+  const sessions = board.sessions.filter(({ heldOn }) => heldOn === day)
   const dusk = board.days.find(({ dayLocal }) => dayLocal === day)?.duskAt
   return (
     <>
@@ -54,7 +54,7 @@ export function DayBoard(props: { academy: string; board: Board; format: Format 
           <li key={session.id} className="waitrow">
             <span>
               <b>
-                {format.range(session)}{' '}
+                {makeFormat({ ...format, zone: session.zone }).range(session)}{' '}
                 <Link to={paths.clinicCard(academy, session.clinicId)}>{session.clinicTitle}</Link>
               </b>
               <br />

@@ -1,5 +1,5 @@
 import { Link } from 'react-router'
-import type { Format } from '../academies/format'
+import { makeFormat, type Format } from '../academies/format'
 import { paths } from '../paths'
 import { Drawing } from '../ui/drawing'
 import { MOST_TICKS, PlaceTicks } from '../ui/place-ticks'
@@ -9,13 +9,13 @@ import { spanOf, type BoardSession } from './board-times'
 export function Slip(props: {
   academy: string
   session: BoardSession
-  zone: string
   format: Format
   at: (minutes: number) => number
   now: number
 }) {
-  const { academy, session, zone, format, at, now } = props
-  const span = spanOf(session, zone)
+  const { academy, session, at, now } = props
+  const format = makeFormat({ ...props.format, zone: session.zone })
+  const span = spanOf(session)
   const [from, to] = [at(span.from), at(span.to)]
   const isDone = Date.parse(session.endsAt) < now
   const isOff = session.state === 'called-off'

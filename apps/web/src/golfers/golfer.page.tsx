@@ -62,7 +62,9 @@ export default function GolferPage() {
           <Facts facts={factsOf(golfer.data, format)} />
           {golfer.data.isJunior && (
             <p className="note soft mt-2">
-              Looking at a junior’s contacts is written down with your name.
+              {golfer.data.hasContacts
+                ? 'Looking at a junior’s contacts is written down with your name.'
+                : 'A junior’s contacts and consents are shown to their coach in the week before and after a session.'}
             </p>
           )}
           {may('places:change') && (

@@ -70,19 +70,21 @@ export default function CardPage() {
       </div>
       <div className="kcols">
         <EnrolledGolfers academy={slug} clinicId={clinicId} format={format} />
-        <section>
-          <div className="sh">
-            <h2>Money on this card</h2>
-          </div>
-          <Bill
-            lines={[
-              ['Paid in or owed, with tax', format.money(money.paidMinor)],
-              ['Of which tax owed', format.money(money.taxMinor)],
-              ['Earned, net of tax', format.money(money.earnedMinor)],
-              ['Still to be earned, net', format.money(money.toEarnMinor)],
-            ]}
-          />
-        </section>
+        {money && (
+          <section>
+            <div className="sh">
+              <h2>Money on this card</h2>
+            </div>
+            <Bill
+              lines={[
+                ['Paid in or owed, with tax', format.money(money.paidMinor)],
+                ['Of which tax owed', format.money(money.taxMinor)],
+                ['Earned, net of tax', format.money(money.earnedMinor)],
+                ['Still to be earned, net', format.money(money.toEarnMinor)],
+              ]}
+            />
+          </section>
+        )}
       </div>
       {chosen && (
         <Suspense>
