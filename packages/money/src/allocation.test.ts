@@ -8,7 +8,7 @@ const weights = fc
   .filter((all) => all.some((weight) => weight > 0))
 
 describe('allocateByLargestRemainder', () => {
-  // REFERENCES §8: the first [S], the second and the rest from the rule itself [D].
+  // The first [S], the second and the rest from the rule itself [D].
   it.each([
     [100, [78.26, 17.39, 4.35], [78, 18, 4]],
     [100, [1, 1, 1], [34, 33, 33]],

@@ -2,6 +2,7 @@ import { useQuery, type QueryClient } from '@tanstack/react-query'
 import { Link, useSearchParams, type LoaderFunctionArgs } from 'react-router'
 import { sessionQuery, useSession } from '../accounts/queries'
 import { sentenceOf } from '../api/problem'
+import { together } from '../api/together'
 import { ConnectPayments } from '../checkout/connect-payments'
 import { paymentsQuery } from '../checkout/queries'
 import { FirstClinic } from '../clinics/first-clinic'
@@ -94,15 +95,9 @@ function GoOn({ slug }: { slug: string }) {
   const coaches = useQuery(coachesQuery(slug))
   const clinics = useQuery(clinicsQuery(slug))
   const payments = useQuery(paymentsQuery(slug))
-  const error = academy.error ?? venues.error ?? coaches.error ?? clinics.error
+  const { error, retry } = together(academy, venues, coaches, clinics)
   if (error) {
-    const failed = [academy, venues, coaches, clinics].filter(({ isError }) => isError)
-    return (
-      <ErrorState
-        sentence={sentenceOf(error)}
-        onRetry={() => failed.forEach((query) => void query.refetch())}
-      />
-    )
+    return <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
   }
   if (!academy.data || !venues.data || !coaches.data || !clinics.data || !session?.account) {
     return <SkeletonRows rows={5} />

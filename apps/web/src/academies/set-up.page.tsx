@@ -2,6 +2,7 @@ import { useQuery, useQueryClient, type QueryClient } from '@tanstack/react-quer
 import { useEffect } from 'react'
 import { Link, Navigate, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router'
 import { sentenceOf } from '../api/problem'
+import { together } from '../api/together'
 import { ConnectPayments } from '../checkout/connect-payments'
 import { paymentsQuery } from '../checkout/queries'
 import { CoachSection } from '../coaches/coach-section'
@@ -41,15 +42,11 @@ export default function SetUpPage() {
   const coaches = useQuery(coachesQuery(slug))
   useTitle(`Set-up – ${academy.data?.name ?? 'Marram'}`)
   const isBack = useBackFromProvider(slug)
-  const error = academy.error ?? venues.error ?? coaches.error
+  const { error, retry } = together(academy, venues, coaches)
   if (error) {
-    const failed = [academy, venues, coaches].filter(({ isError }) => isError)
     return (
       <main id="main" className="wrap py-8">
-        <ErrorState
-          sentence={sentenceOf(error)}
-          onRetry={() => failed.forEach((query) => void query.refetch())}
-        />
+        <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
       </main>
     )
   }

@@ -26,6 +26,8 @@ export const invitationQuery = (token: string) =>
   queryOptions({
     queryKey: ['', 'invitations.read', token],
     queryFn: ({ signal }) => call('invitations.read', { body: { token }, signal }),
+    // It says the same until it is taken up, and after that it is gone: it is asked for once.
+    staleTime: 'static',
   })
 
 /** The roles of the person in an academy; none for a visitor. */

@@ -17,8 +17,13 @@ export function GiveUpQuestion(props: {
   onDone: () => void
 }) {
   const { academy, enrolment, format, by, onDone } = props
-  const quote = useQuery({ ...giveUpQuoteQuery(academy, enrolment.id, by), staleTime: 0 })
   const giveUp = useGiveUp(academy, enrolment.id, by)
+  const quote = useQuery({
+    ...giveUpQuoteQuery(academy, enrolment.id, by),
+    staleTime: 0,
+    // What is being given up has no price any more.
+    enabled: giveUp.isIdle || giveUp.isError,
+  })
   if (quote.isPending) return <SkeletonRows rows={2} />
   if (quote.isError) {
     return <ErrorState sentence={sentenceOf(quote.error)} onRetry={() => void quote.refetch()} />

@@ -103,7 +103,7 @@ export default function GalleryPage() {
             No clinics on the page yet. Say when, where and for how many.
           </EmptyState>
           <ErrorState
-            sentence="The list did not come. Nothing was lost."
+            sentence="The list did not come."
             onRetry={() => undefined}
           />
         </Part>

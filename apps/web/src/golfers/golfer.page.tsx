@@ -3,6 +3,7 @@ import { Link, useParams, type LoaderFunctionArgs } from 'react-router'
 import { makeFormat, type Format } from '../academies/format'
 import { academyQuery } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
+import { together } from '../api/together'
 import { PlacesOfGolfer } from '../checkout/places-of-golfer'
 import { GivePlace } from '../enrolments/give-place'
 import { useTitle } from '../layouts/accent'
@@ -30,15 +31,11 @@ export default function GolferPage() {
   const golfer = useQuery(golferQuery(slug, golferId))
   const academy = useQuery(academyQuery(slug))
   useTitle(golfer.data?.name)
-  const error = golfer.error ?? academy.error
+  const { error, retry } = together(golfer, academy)
   if (error) {
-    const failed = [golfer, academy].filter(({ isError }) => isError)
     return (
       <main id="main" className="wrap py-8">
-        <ErrorState
-          sentence={sentenceOf(error)}
-          onRetry={() => failed.forEach((query) => void query.refetch())}
-        />
+        <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
       </main>
     )
   }
