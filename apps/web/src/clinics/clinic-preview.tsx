@@ -57,7 +57,10 @@ export function ClinicPreview(props: {
                 <th scope="row">{date.number}</th>
                 <td className="l">{format.day(date.startsAt)}</td>
                 <td className="ctr">{format.range(date)}</td>
-                <td className="ctr">{date.duskAt ? format.time(date.duskAt) : '–'}</td>
+                <td className="ctr">
+                  <span className="soft sm:hidden">{format.dusk.word} </span>
+                  {date.duskAt ? format.time(date.duskAt) : '–'}
+                </td>
                 <td className="l">
                   <Found
                     date={date}

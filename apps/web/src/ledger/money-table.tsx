@@ -67,7 +67,7 @@ function Months(props: TableProps & { columns: readonly Column[] }) {
         ))}
         <Row
           {...props}
-          title="Late cancellations"
+          title={'Late cancel\u00adlations'}
           amounts={inInk(card.lateCancellations)}
           opens={{ earned: 'late-cancellations' }}
         />
