@@ -1033,6 +1033,8 @@ CREATE INDEX refunds_order ON public.refunds USING btree (academy_id, order_id);
 
 CREATE INDEX sessions_by_clinic ON public.sessions USING btree (academy_id, clinic_id, starts_at);
 
+CREATE INDEX sessions_by_day ON public.sessions USING btree (academy_id, held_on);
+
 CREATE INDEX sessions_by_time ON public.sessions USING btree (academy_id, starts_at);
 
 CREATE INDEX sign_in_sessions_account ON public.sign_in_sessions USING btree (account_id);

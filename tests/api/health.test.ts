@@ -14,8 +14,11 @@ describe('what a machine’s keeper asks', () => {
     expect(await reply.text()).toMatch(/^marram_/m)
   })
 
-  it.each(['X-Forwarded-For', 'Forwarded'])('counts for nobody behind a proxy: %s', async (name) => {
-    const headers = { [name]: name === 'Forwarded' ? 'for=203.0.113.9' : '203.0.113.9' }
-    expect((await fetch(`${world.url}/metrics`, { headers })).status).toBe(404)
-  })
+  it.each(['X-Forwarded-For', 'Forwarded'])(
+    'counts for nobody behind a proxy: %s',
+    async (name) => {
+      const headers = { [name]: name === 'Forwarded' ? 'for=203.0.113.9' : '203.0.113.9' }
+      expect((await fetch(`${world.url}/metrics`, { headers })).status).toBe(404)
+    },
+  )
 })

@@ -4,20 +4,21 @@ import { useWorld } from '../support/use-world'
 
 const world = await useWorld()
 
+const OONA = {
+  name: 'Oona Tarrant',
+  bornOn: '2020-05-02',
+  handicap: null,
+  emergencyContact: { name: 'Bríd Tarrant', phone: '+353 1 555 0100' },
+  hasConsent: true,
+} as const
+
 it('holds one place for a child whose form is sent twice', async () => {
   const academy = await openAcademy(world)
   const params = { academy: academy.slug }
   const guardian = await signUp(world)
-  const dependant = {
-    name: 'Oona Tarrant',
-    bornOn: '2020-05-02',
-    handicap: null,
-    emergencyContact: { name: 'Bríd Tarrant', phone: '+353 1 555 0100' },
-    hasConsent: true,
-  } as const
   const body = {
     clinicId: academy.clinic.id,
-    for: { kind: 'new', dependant },
+    for: { kind: 'new', dependant: OONA },
     hasAcceptedWaiver: true,
   } as const
 
@@ -26,6 +27,18 @@ it('holds one place for a child whose form is sent twice', async () => {
 
   expect(again.id).toBe(first.id)
   expect((await guardian.person.must('golfers.mine', { params })).golfers).toHaveLength(1)
+})
+
+it('adds one child whose form is sent twice at once', async () => {
+  const academy = await openAcademy(world)
+  const params = { academy: academy.slug }
+  const { person } = await signUp(world)
+  const add = () => person.must('golfers.add-dependant', { params, body: OONA })
+
+  const [one, other] = await Promise.all([add(), add()])
+
+  expect(other).toEqual(one)
+  expect((await person.must('golfers.mine', { params })).golfers).toEqual([one])
 })
 
 it('refuses a NUL in an address and in a search', async () => {

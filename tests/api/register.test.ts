@@ -18,7 +18,8 @@ const world = await useWorld()
 
 type Mark = 'present' | 'late' | 'absent' | 'excused'
 
-const HOUR_MS = 60 * 60_000
+const MINUTE_MS = 60_000
+const HOUR_MS = 60 * MINUTE_MS
 /** Two shares of a run for 240.00 and one session for 35.00, each net of 9 % tax. */
 const NET_OF_SESSION = 2_753 + 2_753 + 3_211
 
@@ -50,6 +51,13 @@ const placeIds = () => enrolments.map(({ places }) => places[0]!.id)
 const press = (placeId: string, mark: Mark | null, by = coach) =>
   by.person.call('register.mark', { params: { ...params, placeId }, body: { mark } })
 
+/** A press that a phone made at a moment, given from the session's start, and sends now. */
+async function pressedAt(ms: number, mark: Mark | null): Promise<Mark | null> {
+  const placeId = placeIds()[0]!
+  const body = { mark, markedAt: new Date(startsAt + ms).toISOString() }
+  return (await coach.person.must('register.mark', { params: { ...params, placeId }, body })).mark
+}
+
 async function markAll(...marks: [Mark, Mark, Mark]): Promise<void> {
   for (const [index, placeId] of placeIds().entries()) {
     expect((await press(placeId, marks[index]!)).status).toBe(200)
@@ -74,6 +82,23 @@ describe('marks', () => {
       return (history as { mark: Mark | null }[]).map(({ mark }) => mark)
     })
     expect(kept.toSorted()).toEqual(['present', 'late', null, 'absent'].toSorted())
+  })
+
+  it('count by when they were pressed, not by when they arrive', async () => {
+    moveTo(10 * MINUTE_MS)
+    expect(await pressedAt(5 * MINUTE_MS, 'present')).toBe('present')
+    // Held up without signal while the other was made and sent.
+    expect(await pressedAt(5 * MINUTE_MS - 1, 'absent')).toBe('present')
+    expect(await pressedAt(5 * MINUTE_MS, 'late')).toBe('late')
+    expect(await pressedAt(6 * MINUTE_MS, null)).toBe(null)
+    expect(await pressedAt(6 * MINUTE_MS - 1, 'excused')).toBe(null)
+  })
+
+  it('count no later than they arrive, by a phone whose clock is ahead', async () => {
+    moveTo(10 * MINUTE_MS)
+    expect(await pressedAt(24 * HOUR_MS, 'absent')).toBe('absent')
+    moveTo(11 * MINUTE_MS)
+    expect(await pressedAt(11 * MINUTE_MS, 'present')).toBe('present')
   })
 
   it.each([

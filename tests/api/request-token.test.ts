@@ -67,6 +67,25 @@ describe('a change', () => {
     expect((await person.call('session.sign-out', { headers })).status).toBe(403)
   })
 
+  it('with the token of a sign-in that ended elsewhere is asked to sign in', async () => {
+    const { person } = await signUp(world)
+    const { token } = await person.must('session.read')
+    const phone = world.person()
+    phone.putCookie('marram', person.cookie('marram') ?? '')
+    await phone.must('session.sign-out')
+    const headers = { 'x-marram-token': token }
+    const reply = await person.call('accounts.send-verification', { headers })
+    expect(reply.problem?.code).toBe('not-signed-in')
+  })
+
+  it('of a visitor with an old token and no sign-in is told to load the page again', async () => {
+    const visitor = world.person()
+    const body = { email: 'nobody@mail.example', password: PASSWORD }
+    const headers = { 'x-marram-token': 'abcdefghijklmnopqrstuvwx.abcdef' }
+    const reply = await visitor.call('session.sign-in', { body, headers })
+    expect(reply.problem?.code).toBe('foreign-origin')
+  })
+
   it('from our own page goes through', async () => {
     expect((await add({})).status).toBe(200)
     expect(await venueNames()).toContain('Forged')

@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest'
+import { asSuperuser } from '../support/books'
 import { pay, signUp } from '../support/builders'
+import { actMeanwhile } from '../support/meanwhile'
 import { useWorld } from '../support/use-world'
 import { fillClinic, giveUp, join, look } from './waitlist/queue'
 
@@ -33,6 +35,35 @@ describe('the queue', () => {
     await giveUp(world, full)
     expect((await look(full, first!)).enrolment).toBeUndefined()
     expect((await look(full, second!)).entry).toMatchObject({ state: 'offered' })
+  })
+
+  it('is not left by somebody who has been offered the place: that is let go', async () => {
+    const full = await fillClinic(world, 1)
+    const [first] = full.others
+    const { answer } = await join(full, first!)
+    await giveUp(world, full)
+    const params = { academy: full.academy.slug, entryId: answer.id }
+
+    const { problem } = await first!.person.call('waitlist.leave', { params })
+    expect(problem).toMatchObject({ code: 'already-decided' })
+    expect((await look(full, first!)).entry).toMatchObject({ state: 'offered' })
+  })
+
+  it('keeps what became of an entry while its leaving was on the way', async () => {
+    const full = await fillClinic(world, 1)
+    const [first] = full.others
+    const { answer } = await join(full, first!)
+    const { id } = answer
+    const params = { academy: full.academy.slug, entryId: id }
+
+    const { status } = await actMeanwhile(
+      world,
+      (trx) => trx('waitlistEntries').where({ id }).update({ state: 'taken' }),
+      () => first!.person.call('waitlist.leave', { params }),
+    )
+    expect(status).toBe(200)
+    const stands = await asSuperuser(world, (db) => db('waitlistEntries').where({ id }))
+    expect(stands).toMatchObject([{ state: 'taken' }])
   })
 
   it('is not for those who have the place, nor while there is one', async () => {

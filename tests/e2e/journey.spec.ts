@@ -174,7 +174,7 @@ async function giveBack(page: Page, product: Product, { slug }: { slug: string }
   await page.getByRole('button', { name: 'Give up' }).click()
   await lookOver(page)
   await page.getByRole('button', { name: 'Give it up' }).click()
-  await expect(page.getByText(/goes back/)).toBeHidden()
+  await expect(page.getByText(/comes back/)).toBeHidden()
   await product.drain()
   await page.goto(`/${slug}/desk/money`)
   // The seven sessions ahead, of eight that are worth 15.00 each.

@@ -54,7 +54,7 @@ export const PAGE = `
       'zone', zone, 'locale', locale, 'currency', currency, 'accent', accent,
       'accentDusk', accent_dusk, 'taxMode', tax_mode, 'taxName', tax_name,
       'taxBasisPoints', tax_basis_points, 'refundTiers', refund_tiers, 'waiver', waiver,
-      'safeguarding', safeguarding, 'holdMinutes', hold_minutes,
+      'safeguarding', safeguarding, 'duskKind', dusk_kind, 'holdMinutes', hold_minutes,
       'canPayAtDesk', can_pay_at_desk, 'isPublished', published_at IS NOT NULL),
     'clinics', (SELECT coalesce(json_agg(shown ORDER BY starts_at, slug), '[]') FROM clinic),
     'coaches', (SELECT coalesce(json_agg(json_build_object('name', name, 'initials', initials,

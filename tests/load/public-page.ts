@@ -4,7 +4,7 @@ import { withServers } from './processes'
 import { find, inTurns, type Finding } from './rounds'
 import { answerTo, answersPerSecond, type Call } from './traffic'
 
-const ROUNDS = 7
+const ROUNDS = 15
 const CALLS = 250
 const CONNECTIONS = 8
 

@@ -1,5 +1,5 @@
 import type { Sent } from '@marram/contract'
-import { clinicFields, joinStaff } from '../support/builders'
+import { clinicFields, joinStaff, nextNumber } from '../support/builders'
 import type { World } from '../support/world'
 import { dependant, type Season } from './season'
 
@@ -8,6 +8,14 @@ import { dependant, type Season } from './season'
 export async function memberToRemove(season: Season, world: World) {
   const { account } = await joinStaff(world, season, { role: 'bookkeeper' })
   return { params: { accountId: account.id, role: 'bookkeeper' } }
+}
+
+export async function openInvitation(season: Season): Promise<{ invitationId: string }> {
+  const { id } = await season.owner.person.must('invitations.send', {
+    params: { academy: season.slug },
+    body: { email: `invited-${nextNumber()}@mail.example`, role: 'desk' },
+  })
+  return { invitationId: id }
 }
 
 /** A coach who does not sign in yet. */

@@ -44,6 +44,7 @@ export const SAMPLES: { [K in TenantRoute]: Sample<K> } = {
       coachId: await prepare.untiedCoach(season),
     },
   }),
+  'invitations.withdraw': async (season) => ({ params: await prepare.openInvitation(season) }),
 
   'venues.list': nothing,
   'venues.add': () => ({ body: { name: 'Sea course', latitudeDeg: 53, longitudeDeg: -6 } }),

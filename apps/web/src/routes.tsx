@@ -1,12 +1,7 @@
 import type { QueryClient } from '@tanstack/react-query'
-import {
-  createBrowserRouter,
-  redirect,
-  type LoaderFunctionArgs,
-  type RouteObject,
-} from 'react-router'
+import { createBrowserRouter, type LoaderFunctionArgs, type RouteObject } from 'react-router'
+import { deskHome } from './accounts/desk-home'
 import { PageError, RootLayout } from './layouts/root.layout'
-import { paths } from './paths'
 
 interface PageModule {
   default: React.ComponentType
@@ -56,10 +51,7 @@ export function makeRouter(client: QueryClient) {
         {
           ...page(client, () => import('./layouts/staff.layout')),
           children: [
-            {
-              path: ':academy/desk',
-              loader: ({ params }) => redirect(paths.week(params['academy'] ?? '')),
-            },
+            { path: ':academy/desk', loader: deskHome(client) },
             at(':academy/desk/week', () => import('./clinics/week.page')),
             at(':academy/desk/today', () => import('./register/today.page')),
             at(':academy/desk/clinics', () => import('./clinics/clinics.page')),

@@ -97,6 +97,10 @@ export const academySchemas = {
     body: z.strictObject({ email, role: z.enum(STAFF_ROLES), coachId: id.optional() }),
     response: z.object({ id }),
   },
+  'invitations.withdraw': {
+    params: z.strictObject({ invitationId: id }),
+    response: z.null(),
+  },
   'invitations.read': {
     body: z.strictObject({ token: secret }),
     response: z.object({ academyName: z.string(), role: z.enum(STAFF_ROLES), email: z.string() }),

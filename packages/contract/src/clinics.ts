@@ -156,6 +156,7 @@ export const academyFace = z.object({
   refundTiers: z.array(z.object({ noticeHours: z.int(), refundBasisPoints: z.int() })),
   waiver: z.string(),
   safeguarding: z.string(),
+  duskKind: z.enum(['sunset', 'civil']),
   holdMinutes: z.int(),
   canPayAtDesk: z.boolean(),
   isPublished: z.boolean(),
@@ -246,7 +247,15 @@ export const clinicSchemas = {
       zone: z.string(),
       areas: z.array(areaBrief.extend({ venueName: z.string() })),
       days: z.array(z.object({ dayLocal: localDate, duskAt: instant.nullable() })),
-      sessions: z.array(sessionBrief.extend({ clinicId: id, clinicTitle: z.string() })),
+      sessions: z.array(
+        sessionBrief.extend({
+          clinicId: id,
+          clinicTitle: z.string(),
+          /** The day and the zone of its venue, which may be others than the academy's. */
+          heldOn: localDate,
+          zone: z.string(),
+        }),
+      ),
     }),
   },
   'sessions.change': {

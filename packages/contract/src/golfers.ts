@@ -37,6 +37,8 @@ export const golferListItem = z.object({
 })
 
 export const golferView = golferListItem.extend({
+  /** False for a minor whose contacts and consents are not for whoever asks, or not now. */
+  hasContacts: z.boolean(),
   bornOn: localDate.nullable(),
   ageYears: z.int().nullable(),
   notes: z.string(),

@@ -52,7 +52,7 @@ export const registerSchemas = {
     params: z.strictObject({ sessionId: id, placeId: id }),
     body: z.strictObject({
       mark: z.enum(MARKS).nullable(),
-      /** When it was pressed, by the phone's clock; kept beside our own. */
+      /** When it was pressed, by the phone's clock: the last press counts, whenever it arrives. */
       markedAt: instant.optional(),
     }),
     response: registerRow,
@@ -81,12 +81,15 @@ export const registerSchemas = {
           marks: z.record(z.string(), z.enum([...MARKS, 'not-yet'])),
         }),
       ),
-      money: z.object({
-        paidMinor: z.int(),
-        taxMinor: z.int(),
-        earnedMinor: z.int(),
-        toEarnMinor: z.int(),
-      }),
+      /** Null for those who may not read the ledger. */
+      money: z
+        .object({
+          paidMinor: z.int(),
+          taxMinor: z.int(),
+          earnedMinor: z.int(),
+          toEarnMinor: z.int(),
+        })
+        .nullable(),
     }),
   },
 } as const

@@ -48,6 +48,11 @@ export const ROUTES = {
     access: 'staff:manage',
   },
   'invitations.send': { method: 'POST', path: `${TENANT}/invitations`, access: 'staff:manage' },
+  'invitations.withdraw': {
+    method: 'DELETE',
+    path: `${TENANT}/invitations/:invitationId`,
+    access: 'staff:manage',
+  },
   'invitations.read': { method: 'POST', path: '/api/invitation-look-ups', access: 'public' },
   'invitations.accept': { method: 'POST', path: '/api/invitation-acceptances', access: 'account' },
 

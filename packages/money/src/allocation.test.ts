@@ -8,7 +8,7 @@ const weights = fc
   .filter((all) => all.some((weight) => weight > 0))
 
 describe('allocateByLargestRemainder', () => {
-  // REFERENCES §8: the first [S], the second and the rest from the rule itself [D].
+  // The first [S], the second and the rest from the rule itself [D].
   it.each([
     [100, [78.26, 17.39, 4.35], [78, 18, 4]],
     [100, [1, 1, 1], [34, 33, 33]],
@@ -101,15 +101,22 @@ describe('the price of a run', () => {
     expect(splitRunPrice({ runPriceMinor: 14_500, sessionCount: 8 })).toEqual([
       1_813, 1_813, 1_813, 1_813, 1_812, 1_812, 1_812, 1_812,
     ])
-    expect(priceOfRemaining({ runPriceMinor: 14_500, sessionCount: 8, remainingCount: 5 })).toEqual(
-      { priceMinor: 9_061, sharesMinor: [1_813, 1_812, 1_812, 1_812, 1_812] },
-    )
+    const run = { runPriceMinor: 14_500, sessionCount: 8, remainingNumbers: [4, 5, 6, 7, 8] }
+    expect(priceOfRemaining(run)).toEqual({
+      priceMinor: 9_061,
+      sharesMinor: [1_813, 1_812, 1_812, 1_812, 1_812],
+    })
+  })
+
+  it('leaves out the share of a session that was called off, and no other', () => {
+    const run = { runPriceMinor: 10_000, sessionCount: 3, remainingNumbers: [1, 3] }
+    expect(priceOfRemaining(run)).toEqual({ priceMinor: 6_667, sharesMinor: [3_334, 3_333] })
   })
 
   it('is whole at the start and nothing at the end', () => {
     const run = { runPriceMinor: 10_000, sessionCount: 3 }
-    expect(priceOfRemaining({ ...run, remainingCount: 3 }).priceMinor).toBe(10_000)
-    expect(priceOfRemaining({ ...run, remainingCount: 0 })).toEqual({
+    expect(priceOfRemaining({ ...run, remainingNumbers: [1, 2, 3] }).priceMinor).toBe(10_000)
+    expect(priceOfRemaining({ ...run, remainingNumbers: [] })).toEqual({
       priceMinor: 0,
       sharesMinor: [],
     })
@@ -119,12 +126,13 @@ describe('the price of a run', () => {
     fc.assert(
       fc.property(fc.nat(1_000_000), fc.integer({ min: 1, max: 60 }), (price, sessionCount) => {
         const shares = splitRunPrice({ runPriceMinor: price, sessionCount })
+        const numbers = shares.map((_, index) => index + 1)
         for (let passed = 0; passed < sessionCount; passed += 1) {
           const at = (gone: number) =>
             priceOfRemaining({
               runPriceMinor: price,
               sessionCount,
-              remainingCount: sessionCount - gone,
+              remainingNumbers: numbers.slice(gone),
             }).priceMinor
           expect(at(passed) - at(passed + 1)).toBe(shares[passed])
         }
@@ -143,12 +151,11 @@ describe('the price of a run', () => {
     )
   })
 
-  it('refuses a run without sessions, and more remaining than there are', () => {
+  it('refuses a run without sessions, and sessions that it does not have', () => {
     expect(() => splitRunPrice({ runPriceMinor: 1, sessionCount: 0 })).toThrow(RangeError)
-    for (const remainingCount of [-1, 4, 1.5]) {
-      expect(() => priceOfRemaining({ runPriceMinor: 1, sessionCount: 3, remainingCount })).toThrow(
-        RangeError,
-      )
+    for (const remainingNumbers of [[0], [4], [1.5], [2, 2]]) {
+      const run = { runPriceMinor: 1, sessionCount: 3, remainingNumbers }
+      expect(() => priceOfRemaining(run)).toThrow(RangeError)
     }
   })
 })

@@ -58,19 +58,26 @@ export function splitRunPrice(run: { runPriceMinor: number; sessionCount: number
 }
 
 /**
- * What a golfer pays who joins late: the prices of the last `remainingCount` sessions of the run,
- * as split for those who paid for all of it. Together with what has passed it is the run's price.
- * @throws RangeError when more sessions remain than the run has.
+ * What a golfer pays who joins late: the prices of the sessions still to come, by their numbers in
+ * the run (from 1), as split for those who paid for all of it. Together with what has passed or was
+ * called off it is the run's price.
+ * @throws RangeError for a number that the run does not have, or has been given twice.
  */
 export function priceOfRemaining(run: {
   runPriceMinor: number
   sessionCount: number
-  remainingCount: number
+  remainingNumbers: readonly number[]
 }): { priceMinor: number; sharesMinor: number[] } {
-  const { sessionCount, remainingCount } = run
-  if (!Number.isSafeInteger(remainingCount) || remainingCount < 0 || remainingCount > sessionCount)
-    throw new RangeError(`${remainingCount} of ${sessionCount} sessions cannot remain`)
-  const sharesMinor = splitRunPrice(run).slice(sessionCount - remainingCount)
+  const { remainingNumbers } = run
+  const split = splitRunPrice(run)
+  if (new Set(remainingNumbers).size < remainingNumbers.length) {
+    throw new RangeError('A session remains once')
+  }
+  const sharesMinor = remainingNumbers.map((number) => {
+    const share = split[number - 1]
+    if (share === undefined) throw new RangeError(`The run has no session ${number}`)
+    return share
+  })
   return { priceMinor: sharesMinor.reduce((sum, share) => sum + share, 0), sharesMinor }
 }
 

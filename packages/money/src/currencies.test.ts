@@ -22,7 +22,7 @@ describe('currencies', () => {
     expect(ours.length).toBeGreaterThan(150)
   })
 
-  // REFERENCES §8, ISO 4217 through currency-codes.
+  // ISO 4217 through currency-codes.
   it.each([
     ['USD', 2],
     ['JPY', 0],

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { earnedOfPass } from './passes'
 
 describe('earnedOfPass', () => {
-  // REFERENCES §8: a pass of ten at 600.00, nine expected to be used [S rule, D numbers].
+  // A pass of ten at 600.00, nine expected to be used [S rule, D numbers].
   it.each([
     [0, 0],
     [1, 6_667],
@@ -16,7 +16,7 @@ describe('earnedOfPass', () => {
     expect(earnedOfPass({ priceMinor: 60_000, used, expectedUsed: 9 })).toBe(earnedMinor)
   })
 
-  // REFERENCES §8: a card of 100, 10 expected unused, 45 redeemed [M].
+  // A card of 100, 10 expected unused, 45 redeemed [M].
   it('has earned 50 of a card of 100 with 45 of 90 redeemed', () => {
     expect(earnedOfPass({ priceMinor: 10_000, used: 4_500, expectedUsed: 9_000 })).toBe(5_000)
   })

@@ -7,7 +7,7 @@ const amountMinor = fc.integer({ min: -100_000_000, max: 100_000_000 })
 const rateBasisPoints = fc.integer({ min: 0, max: 5_000 })
 
 describe('taxIncluded', () => {
-  // REFERENCES §8: 20 %, pence, half-up [D].
+  // 20 %, pence, half-up [D].
   it.each([
     [1_000, 167],
     [999, 167],
@@ -38,7 +38,7 @@ describe('taxIncluded', () => {
 })
 
 describe('taxAdded', () => {
-  // REFERENCES §8: 6.25 % half-up, Streamlined Sales and Use Tax Agreement §324 [2].
+  // 6.25 % half-up, Streamlined Sales and Use Tax Agreement §324 [2].
   it('adds to 10.99 at 6.25 % the tax 0.69', () => {
     expect(taxAdded({ amountMinor: 1_099, rateBasisPoints: 625 })).toEqual({
       netMinor: 1_099,
@@ -87,7 +87,7 @@ describe('both ways', () => {
 })
 
 describe('divideHalfUp', () => {
-  // REFERENCES §8: 1.235 → 1.24 [2]; the rest [D].
+  // 1.235 → 1.24 [2]; the rest [D].
   it.each([
     [1_235n, 10n, 124n],
     [1_234n, 10n, 123n],

@@ -20,7 +20,7 @@ function secondsOff(at: Date | null, day: string, time: string, zone: string): n
 }
 
 describe('sunset and the end of civil twilight', () => {
-  // REFERENCES §5, tolerance 60 s: London published [2], the others [D].
+  // Tolerance 60 s: London published [2], the others [D].
   it.each([
     ['london', '2025-06-21', '21:21:34', '22:09:19'],
     ['london', '2025-06-21', '21:22:06', '22:09:19'],

@@ -44,7 +44,7 @@ describe('toInstant', () => {
 describe('transitionsBetween', () => {
   const years = { from: new Date('2026-01-01T00:00:00Z'), to: new Date('2028-01-01T00:00:00Z') }
 
-  // REFERENCES §9, IANA transitions.
+  // IANA transitions.
   it.each([
     [
       'Europe/London',

@@ -16,7 +16,7 @@ function daysOf(text: string, startsOnLocal: string): string[] {
 }
 
 describe('expandLocal', () => {
-  // REFERENCES §9: RFC 5545 §3.8.5.3 [S], run also in dateutil.
+  // RFC 5545 §3.8.5.3 [S], run also in dateutil.
   it.each([
     [
       'FREQ=WEEKLY;INTERVAL=2;COUNT=4;BYDAY=TU,SU;WKST=MO',

@@ -86,6 +86,22 @@ export async function setInvitationToken(
   await Invitation.query(trx).patch({ tokenHash }).where({ id })
 }
 
+/**
+ * Ends an open invitation now; false when it was taken up or had ended. It stays written that it was
+ * made: it stood until the moment before.
+ */
+export async function endInvitation(
+  trx: AcademyTrx,
+  { id, now }: { id: string; now: Date },
+): Promise<boolean> {
+  const changed = await Invitation.query(trx)
+    .patch({ expiresAt: new Date(now.getTime() - 1) })
+    .where({ id })
+    .whereNull('acceptedAt')
+    .where('expiresAt', '>', now)
+  return changed === 1
+}
+
 /** Uses an invitation up; false when somebody already has. */
 export async function acceptInvitation(
   trx: AcademyTrx,

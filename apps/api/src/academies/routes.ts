@@ -3,7 +3,7 @@ import { asAcademy, asPerson } from '../platform/http/narrow'
 import type { Services } from '../platform/services'
 import { listPublishedAcademies } from '../platform/tenancy/look-ups'
 import { changeSettings, checkSlug, openAcademy, publishAcademy, readSettings } from './academies'
-import { readInvitation, readStaff, removeStaff } from './staff'
+import { readInvitation, readStaff, removeStaff, withdrawInvitation } from './staff'
 
 export function academyHandlers(services: Services): Handlers {
   return {
@@ -24,6 +24,10 @@ export function academyHandlers(services: Services): Handlers {
     'staff.list': (_input, context) => readStaff(services, asAcademy(context).academyId),
     'staff.remove': async ({ params }, context) => {
       await removeStaff(services, { academyId: asAcademy(context).academyId, ...params })
+      return null
+    },
+    'invitations.withdraw': async ({ params }, context) => {
+      await withdrawInvitation(services, { academyId: asAcademy(context).academyId, ...params })
       return null
     },
     'invitations.read': ({ body }) => readInvitation(services, body.token),

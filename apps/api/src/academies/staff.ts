@@ -10,6 +10,7 @@ import type { Invitation } from './models'
 import {
   acceptInvitation,
   addRole,
+  endInvitation,
   findInvitation,
   insertInvitation,
   listOpenInvitations,
@@ -82,6 +83,17 @@ export async function invite(
   const made = { academyId: wanted.academyId, invitationId: id }
   await services.outbox.emit(trx, 'invitation.made', made)
   return { id }
+}
+
+/** Takes an invitation back that nobody took up yet: its link opens nothing any more. */
+export async function withdrawInvitation(
+  { db, clock }: Services,
+  { academyId, invitationId }: { academyId: string; invitationId: string },
+): Promise<void> {
+  const isWithdrawn = await inAcademy(db, academyId, (trx) =>
+    endInvitation(trx, { id: invitationId, now: clock.now() }),
+  )
+  if (!isWithdrawn) throw notFound('invitation')
 }
 
 /** Makes the link that the mail carries. Null when the invitation has ended meanwhile. */
@@ -159,3 +171,5 @@ async function inInvitation<T>(
     return work(trx, invitation)
   })
 }
+
+export { INVITATION_DAYS } from './defaults'

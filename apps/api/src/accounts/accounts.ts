@@ -1,5 +1,6 @@
 import { Problem } from '../platform/errors'
 import { hashSecret, newId, newSecret } from '../platform/ids'
+import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import { inPlain, type PlainTrx } from '../platform/tenancy/transaction'
 import { hashPassword, isPassword } from './passwords'
@@ -207,12 +208,13 @@ export async function signInWithProvider(
     }
     const now = clock.now()
     const email = profile.email.toLowerCase()
-    const existing = await findAccountByEmail(trx, email)
-    const accountId = existing?.id ?? newId(now)
-    if (!existing) {
-      const row = { id: accountId, email, name: profile.name, passwordHash: null }
-      await insertAccount(trx, { ...row, emailVerifiedAt: now, createdAt: now })
-    } else if (!existing.emailVerifiedAt) {
+    const row = { id: newId(now), email, name: profile.name, passwordHash: null }
+    // Does nothing where the address has an account already.
+    await insertAccount(trx, { ...row, emailVerifiedAt: now, createdAt: now })
+    const account = await lockAccountByEmail(trx, email)
+    invariant(account, 'the address has an account by now')
+    const { id: accountId } = account
+    if (!account.emailVerifiedAt) {
       await forgetOtherWaysIn(trx, accountId)
       await endSessionsOf(trx, accountId)
       const mine = { passwordHash: null, emailVerifiedAt: now, name: profile.name }
@@ -226,3 +228,4 @@ export async function signInWithProvider(
 const pick = ({ issuer, subject }: ProviderProfile) => ({ issuer, subject })
 
 export { findAccountById, type Account } from './queries'
+export { LINK_HOURS } from './rules'

@@ -76,11 +76,12 @@ export async function endSessionsOf(trx: Knex, accountId: string): Promise<void>
   await trx('signInSessions').where({ accountId }).delete()
 }
 
+/** Writes an identity; one that is known already stays whose it is. */
 export async function insertIdentity(
   trx: PlainTrx,
   row: { issuer: string; subject: string; accountId: string; createdAt: Date },
 ): Promise<void> {
-  await trx('accountIdentities').insert(row)
+  await trx('accountIdentities').insert(row).onConflict(['issuer', 'subject']).ignore()
 }
 
 /** Forgets every other way in: identities and unused links. */

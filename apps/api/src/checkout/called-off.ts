@@ -34,7 +34,7 @@ import {
 import { readOwedAtDesk } from './view-queries'
 
 /** How long a golfer may choose between money and credit. */
-const CHOICE_DAYS = 7
+export const CHOICE_DAYS = 7
 
 /** A session was called off: every confirmed place in it ends, and what was paid for it is owed. */
 export async function owePlacesOfSession(

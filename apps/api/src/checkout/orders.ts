@@ -128,7 +128,7 @@ function checkIsHeld(enrolment: Enrolment, now: Date): void {
 }
 
 const holdLapsed = () =>
-  new Problem('hold-lapsed', 'The time to pay ran out and the place went to the next person.')
+  new Problem('hold-lapsed', 'The time to pay ran out, and the place was let go.')
 
 async function openOrder(
   trx: AcademyTrx,

@@ -1,7 +1,9 @@
 import { findClinic, isCoachOfClinic } from '../clinics/clinics'
 import { listWaitlist } from '../enrolments/enrolments'
 import { viewEntry } from '../enrolments/waitlist'
-import { changeGolfer, findGolfer, readGolfer } from '../golfers/golfers'
+import { changeGolfer, readGolfer } from '../golfers/for-staff'
+import { findGolfer } from '../golfers/golfers'
+import { golferReach } from '../golfers/routes'
 import { notFound } from '../platform/errors'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
@@ -35,11 +37,8 @@ export function checkoutHandlers(services: Services, provider: PaymentsProvider)
     const { academyId } = asAcademy(context)
     return { academyId, enrolmentId, by: { kind: 'staff' } }
   }
-  const readOneGolfer = (context: RequestContext, golferId: string) => {
-    const { academyId, account, scope } = asStaff(context)
-    const reach = { academyId, accountId: account.id, scope: scope ?? 'own' }
-    return readGolfer(services, { reach, golferId, creditOf: readCreditOfGolfer })
-  }
+  const readOneGolfer = (context: RequestContext, golferId: string) =>
+    readGolfer(services, { reach: golferReach(context), golferId, creditOf: readCreditOfGolfer })
 
   return {
     'checkout.start': async ({ params }, context) => ({

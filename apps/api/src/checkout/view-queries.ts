@@ -1,4 +1,5 @@
 import type { Answer } from '@marram/contract'
+import { isoInstant as iso } from '../platform/db/iso-instant'
 import { ask, type Question } from '../platform/tenancy/ask'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 
@@ -42,10 +43,6 @@ export function questionOf(by: WantedViews): Question {
     values: [value],
   }
 }
-
-/** An instant as JavaScript writes it. */
-const iso = (column: string): string =>
-  `to_char(${column} AT TIME ZONE 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"')`
 
 const AREAS = `
   SELECT coalesce(json_agg(a.name ORDER BY sa.position), '[]') FROM session_areas sa

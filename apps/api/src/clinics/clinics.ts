@@ -9,7 +9,7 @@ import { findCoaches } from '../coaches/coaches'
 import { findVenue } from '../venues/venues'
 import { sayClashes } from './clashes'
 import { duskOver } from './light'
-import type { Clinic } from './models'
+import type { Clinic, Session } from './models'
 import { planClinic, type Plan } from './plan'
 import {
   countPlacesOf,
@@ -23,6 +23,7 @@ import {
   listSessionsOf,
   listSlugsLike,
   lockClinic,
+  lockSessionsOf,
   readClinicParts,
   setClinicLive,
   setClinicParts,
@@ -49,9 +50,8 @@ export async function draftClinic(
     const academy = await readAcademy(trx)
     const plan = await planClinic(trx, wanted)
     const { coachIds, areas, ...fields } = wanted
-    const slug = await freeSlug(trx, wanted.title)
     const zone = plan.venue.zone
-    await insertClinic(trx, { id, slug, ...fields, zone, state: 'draft', createdAt: now })
+    await insertAtFreeSlug(trx, { id, ...fields, zone, state: 'draft', createdAt: now })
     await setClinicParts(trx, id, { coachIds, areas })
     await makeSessions(trx, { academy, plan, wanted, clinicId: id, isLive: false, now })
     return readView(trx, id)
@@ -88,6 +88,14 @@ async function makeSessions(
   }
 }
 
+/** An address that somebody else takes in this moment is passed over for the next. */
+async function insertAtFreeSlug(
+  trx: AcademyTrx,
+  row: Partial<Clinic> & { title: string },
+): Promise<void> {
+  while (!(await insertClinic(trx, { ...row, slug: await freeSlug(trx, row.title) })));
+}
+
 async function freeSlug(trx: AcademyTrx, title: string): Promise<string> {
   const slug = toSlug(title) || 'clinic'
   const taken = new Set(await listSlugsLike(trx, slug))
@@ -113,7 +121,7 @@ export async function changeClinic(
       if (!clinic) throw notFound('clinic')
       const { coachIds, areas, ...fields } = wanted
       const had = await readClinicParts(trx, clinicId)
-      const sessions = await listSessionsOf(trx, clinicId)
+      const sessions = await lockSessionsOf(trx, clinicId)
       if (!isSameSchedule({ ...clinic, ...had }, wanted)) {
         const ids = sessions.map(({ id }) => id)
         if ((await countPlacesOf(trx, ids)) > 0) {
@@ -144,7 +152,7 @@ export async function changeClinic(
 
 async function setCapacity(
   trx: AcademyTrx,
-  sessions: Awaited<ReturnType<typeof listSessionsOf>>,
+  sessions: readonly Session[],
   capacity: number,
 ): Promise<void> {
   const fullest = Math.max(0, ...sessions.map(({ held, confirmed }) => held + confirmed))

@@ -1,3 +1,4 @@
+import { isoInstant as iso } from '../platform/db/iso-instant'
 import type { Question } from '../platform/tenancy/ask'
 
 /** The academy of the transaction as the public sees it. */
@@ -18,6 +19,7 @@ export interface FaceRow {
   refundTiers: { noticeHours: number; refundBasisPoints: number }[]
   waiver: string
   safeguarding: string
+  duskKind: 'sunset' | 'civil'
   holdMinutes: number
   canPayAtDesk: boolean
   isPublished: boolean
@@ -31,6 +33,8 @@ export interface PageClinicRow {
   endsAt: string
   zone: string
   sessionsAhead: number
+  /** The numbers in the run of the sessions still to come. */
+  numbersAhead: number[]
   sessionsTotal: number
   areas: string[]
   coaches: string[]
@@ -61,13 +65,9 @@ const FACE = `
     'locale', locale, 'currency', currency, 'accent', accent, 'accentDusk', accent_dusk,
     'taxMode', tax_mode, 'taxName', tax_name, 'taxBasisPoints', tax_basis_points,
     'refundTiers', refund_tiers, 'waiver', waiver, 'safeguarding', safeguarding,
-    'holdMinutes', hold_minutes, 'canPayAtDesk', can_pay_at_desk,
+    'duskKind', dusk_kind, 'holdMinutes', hold_minutes, 'canPayAtDesk', can_pay_at_desk,
     'isPublished', published_at IS NOT NULL)
   FROM academies`
-
-/** An instant as JavaScript writes it. */
-const iso = (column: string): string =>
-  `to_char(${column} AT TIME ZONE 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"')`
 
 const isAhead = "s.state = 'planned' AND s.starts_at > $1"
 
@@ -80,6 +80,7 @@ const CLINICS = `
     'slug', c.slug, 'title', c.title, 'summary', c.summary,
     'startsAt', ${iso('next.starts_at')}, 'endsAt', ${iso('next.ends_at')}, 'zone', c.zone,
     'sessionsAhead', run.sessions_ahead, 'sessionsTotal', run.sessions_total,
+    'numbersAhead', run.numbers_ahead,
     'areas', (SELECT coalesce(json_agg(ar.name ORDER BY sa.position), '[]') FROM session_areas sa
       JOIN areas ar ON ar.academy_id = sa.academy_id AND ar.id = sa.area_id
       WHERE sa.academy_id = c.academy_id AND sa.session_id = next.id),
@@ -104,7 +105,8 @@ const CLINICS = `
     WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id AND ${isAhead}
     ORDER BY held + confirmed DESC LIMIT 1) fullest
   CROSS JOIN LATERAL (
-    SELECT count(*) AS sessions_total, count(*) FILTER (WHERE ${isAhead}) AS sessions_ahead
+    SELECT count(*) AS sessions_total, count(*) FILTER (WHERE ${isAhead}) AS sessions_ahead,
+      array_agg(s.number) FILTER (WHERE ${isAhead}) AS numbers_ahead
     FROM sessions s WHERE s.academy_id = c.academy_id AND s.clinic_id = c.id) run
   WHERE c.state = 'published'`
 

@@ -40,20 +40,18 @@ function checkFace(academy: FaceRow | null, reader: PageReader): FaceRow {
   return academy
 }
 
-function withPriceNow(clinic: PageClinicRow): PageClinic {
-  return { ...clinic, runPriceMinor: priceNow(clinic) }
+function withPriceNow({ numbersAhead, ...clinic }: PageClinicRow): PageClinic {
+  return { ...clinic, runPriceMinor: priceNow(clinic, numbersAhead) }
 }
 
-/** What a golfer who joins a run now pays: the share of the sessions still to come. */
-function priceNow(row: {
-  runPriceMinor: number | null
-  sessionsAhead: number
-  sessionsTotal: number
-}): number | null {
-  const { runPriceMinor, sessionsAhead, sessionsTotal } = row
-  if (runPriceMinor === null || sessionsAhead === sessionsTotal) return runPriceMinor
-  const run = { runPriceMinor, sessionCount: sessionsTotal, remainingCount: sessionsAhead }
-  return priceOfRemaining(run).priceMinor
+/** What a golfer who joins a run now pays: the shares of the sessions still to come. */
+function priceNow(
+  row: { runPriceMinor: number | null; sessionsTotal: number },
+  remainingNumbers: readonly number[],
+): number | null {
+  const { runPriceMinor, sessionsTotal: sessionCount } = row
+  if (runPriceMinor === null) return null
+  return priceOfRemaining({ runPriceMinor, sessionCount, remainingNumbers }).priceMinor
 }
 
 export async function readClinicOnPage(
@@ -90,7 +88,10 @@ function toDetail(row: ClinicDetailRow, now: Date): Answer<'page.clinic'>['clini
     coaches: row.coachDetails.map(({ name }) => name),
     capacity: measured.capacity,
     taken: measured.taken,
-    runPriceMinor: priceNow({ ...row, ...counts }),
+    runPriceMinor: priceNow(
+      { ...row, ...counts },
+      ahead.map(({ number }) => number),
+    ),
     sessions: sessions.map((session) => ({
       ...session,
       darkMinutes: darkMinutesIn(

@@ -56,7 +56,7 @@ export async function previewClinic(
         clockChanges: transitionsBetween({ zone: venue.zone, ...span }).map(
           ({ dayLocal, direction }) => ({ dayLocal, direction }),
         ),
-        holidays: await listHolidays({ locale: academy.locale, ...span }),
+        holidays: await listHolidays({ zone: venue.zone, ...span }),
       }
     },
     { readOnly: true },

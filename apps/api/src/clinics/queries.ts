@@ -22,8 +22,11 @@ export async function listSlugsLike(trx: AcademyTrx, slug: string): Promise<stri
   return rows.map((row) => row.slug)
 }
 
-export async function insertClinic(trx: AcademyTrx, row: Partial<Clinic>): Promise<void> {
-  await Clinic.query(trx).insert(row)
+/** Resolves to false when another clinic has the address. */
+export async function insertClinic(trx: AcademyTrx, row: Partial<Clinic>): Promise<boolean> {
+  const { id } = row
+  await Clinic.query(trx).insert(row).onConflict(['academy_id', 'slug']).ignore()
+  return (await Clinic.query(trx).where({ id }).resultSize()) === 1
 }
 
 export async function updateClinic(
@@ -70,12 +73,18 @@ export async function listSessionsOf(trx: AcademyTrx, clinicId: string): Promise
   return Session.query(trx).where({ clinicId }).orderBy('number')
 }
 
+/** As `listSessionsOf`, with their seats locked, so that nobody takes one meanwhile. */
+export async function lockSessionsOf(trx: AcademyTrx, clinicId: string): Promise<Session[]> {
+  return Session.query(trx).where({ clinicId }).orderBy('id').forNoKeyUpdate()
+}
+
 export async function findSession(trx: AcademyTrx, id: string): Promise<Session | undefined> {
   return Session.query(trx).where({ id }).first()
 }
 
+/** Locks a session against other changes; what merely refers to it can be written all the same. */
 export async function lockSession(trx: AcademyTrx, id: string): Promise<Session | undefined> {
-  return Session.query(trx).where({ id }).forUpdate().first()
+  return Session.query(trx).where({ id }).forNoKeyUpdate().first()
 }
 
 export async function insertSession(trx: AcademyTrx, row: Partial<Session>): Promise<void> {
@@ -304,22 +313,24 @@ export async function listClinics(trx: AcademyTrx, now: Date): Promise<ClinicLis
 
 export interface SessionOnBoardRow extends Session {
   clinicTitle: string
-  clinicState: Clinic['state']
+  zone: string
 }
 
-/** Sessions that begin in a span of time, drafts left out. */
+/**
+ * Sessions held on some days, the last one included, each by the calendar of its own venue. Drafts
+ * are left out.
+ */
 export async function listSessionsBetween(
   trx: AcademyTrx,
-  { from, to, coachId }: { from: Date; to: Date; coachId?: string },
+  { from, to, coachId }: { from: string; to: string; coachId?: string },
 ): Promise<SessionOnBoardRow[]> {
   const query = Session.query(trx)
     .join('clinics', (join) =>
       join.on('clinics.academyId', 'sessions.academyId').on('clinics.id', 'sessions.clinicId'),
     )
-    .where('sessions.startsAt', '>=', from)
-    .where('sessions.startsAt', '<', to)
-    .where('clinics.state', 'published')
-    .select('sessions.*', 'clinics.title as clinicTitle', 'clinics.state as clinicState')
+    .whereBetween('sessions.heldOn', [from, to])
+    .whereNot('clinics.state', 'draft')
+    .select('sessions.*', 'clinics.title as clinicTitle', 'clinics.zone as zone')
     .orderBy(['sessions.startsAt', 'sessions.id'])
   if (coachId) {
     query.whereRaw(

@@ -1,3 +1,4 @@
+import { scopeOf } from '@marram/contract'
 import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
 import { invariant } from '../platform/invariant'
@@ -25,7 +26,7 @@ export function clinicHandlers(services: Services): Handlers {
 
   const readerOf = ({ academySlug: slug, roles }: RequestContext): PageReader => {
     invariant(slug, 'a public page has an address')
-    return { slug, maySeeUnpublished: roles.some((role) => role !== 'golfer') }
+    return { slug, maySeeUnpublished: scopeOf(roles, 'academy:read') !== null }
   }
 
   return {

@@ -59,7 +59,6 @@ export function isSameSchedule(a: Schedule, b: Schedule): boolean {
 
 function asText(schedule: Schedule): string {
   const { venueId, startsOnLocal, startsAtLocal, durationMinutes, rrule } = schedule
-  const areas = schedule.areas.map(({ areaId, fromUnit, toUnit }) => [areaId, fromUnit, toUnit])
   return JSON.stringify([
     venueId,
     startsOnLocal,
@@ -68,9 +67,27 @@ function asText(schedule: Schedule): string {
     rrule,
     [...schedule.skipDates].sort(),
     schedule.coachIds,
-    areas,
+    schedule.areas.map(asUnits),
   ])
 }
+
+interface Meeting {
+  startsAt: Date
+  endsAt: Date
+  coachIds: readonly string[]
+  areas: readonly AreaUse[]
+}
+
+/** Says whether golfers of a session find the same people at the same place and time. */
+export function isSameMeeting(a: Meeting, b: Meeting): boolean {
+  return meetingAsText(a) === meetingAsText(b)
+}
+
+function meetingAsText({ startsAt, endsAt, coachIds, areas }: Meeting): string {
+  return JSON.stringify([startsAt, endsAt, coachIds, areas.map(asUnits)])
+}
+
+const asUnits = ({ areaId, fromUnit, toUnit }: AreaUse) => [areaId, fromUnit, toUnit]
 
 /** A stored rule in plain words: "Every Tuesday". */
 export function describeRule({

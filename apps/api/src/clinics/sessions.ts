@@ -12,6 +12,7 @@ import type { Session } from './models'
 import { checkAreas, checkCoaches } from './plan'
 import {
   findClinic,
+  findSession,
   isCoachOfSession,
   listSessionParts,
   listSessionsBetween,
@@ -20,6 +21,7 @@ import {
   setSessionParts,
   updateSession,
 } from './queries'
+import { isSameMeeting } from './rules'
 import { viewSessions, type SessionView } from './views'
 
 /** Whose sessions a member of staff may touch. */
@@ -34,9 +36,24 @@ export async function lockReachableSession(
   trx: AcademyTrx,
   { reach, sessionId }: { reach: SessionReach; sessionId: string },
 ): Promise<Session> {
-  const session = await lockSession(trx, sessionId)
+  return checkReach(trx, { reach, session: await lockSession(trx, sessionId) })
+}
+
+/** As `lockReachableSession`, for who only looks. */
+export async function findReachableSession(
+  trx: AcademyTrx,
+  { reach, sessionId }: { reach: SessionReach; sessionId: string },
+): Promise<Session> {
+  return checkReach(trx, { reach, session: await findSession(trx, sessionId) })
+}
+
+async function checkReach(
+  trx: AcademyTrx,
+  { reach, session }: { reach: SessionReach; session: Session | undefined },
+): Promise<Session> {
   if (!session) throw notFound('session')
   const { scope, accountId } = reach
+  const { id: sessionId } = session
   if (scope === 'own' && !(await isCoachOfSession(trx, { sessionId, accountId }))) {
     throw new Problem('not-allowed', 'This is another coach’s session.')
   }
@@ -59,24 +76,29 @@ export async function changeSession(
       const times = newTimes(session, change, clinic.zone)
       refuseThePast({ session, times, now: services.clock.now() })
       const parts = (await listSessionParts(trx, [sessionId])).get(sessionId)
-      const areas =
-        change.areas ??
-        (parts?.areas ?? []).map(({ id, fromUnit, toUnit }) => ({ areaId: id, fromUnit, toUnit }))
-      const coachIds = change.coachIds ?? (parts?.coaches ?? []).map(({ id }) => id)
+      const had = {
+        ...session,
+        coachIds: (parts?.coaches ?? []).map(({ id }) => id),
+        areas: (parts?.areas ?? []).map(({ id, ...units }) => ({ areaId: id, ...units })),
+      }
+      const { coachIds = had.coachIds, areas = had.areas } = change
       await checkAreas(trx, { venueId: venue.id, areas })
       await checkCoaches(trx, coachIds)
       const capacity = checkCapacity(session, change.capacity)
       const { duskKind } = await readAcademy(trx)
+      const isNews = !isSameMeeting(had, { ...times, coachIds, areas })
       await updateSession(trx, sessionId, {
         ...times,
         capacity,
         duskAt: duskOver(venue, { dayLocal: times.heldOn, duskKind }),
-        calendarSequence: session.calendarSequence + 1,
+        calendarSequence: session.calendarSequence + (isNews ? 1 : 0),
       })
-      const isLive = clinic.state !== 'draft'
-      await setSessionParts(trx, { sessionId, ...times, coachIds, areas, isLive })
       const { academyId } = reach
-      await services.outbox.emit(trx, 'session.changed', { academyId, sessionId })
+      if (isNews) {
+        const isLive = clinic.state !== 'draft'
+        await setSessionParts(trx, { sessionId, ...times, coachIds, areas, isLive })
+        await services.outbox.emit(trx, 'session.changed', { academyId, sessionId })
+      }
       if (capacity > session.capacity) {
         await services.outbox.emit(trx, 'places.opened', { academyId, clinicId: clinic.id })
       }
@@ -148,7 +170,7 @@ export async function callOffSession(
 }
 
 async function viewOne(trx: AcademyTrx, sessionId: string): Promise<SessionView> {
-  const session = await lockSession(trx, sessionId)
+  const session = await findSession(trx, sessionId)
   const [view] = session ? await viewSessions(trx, [session]) : []
   if (!view) throw notFound('session')
   return view
@@ -166,8 +188,8 @@ export async function readBoard(
     const days = daysBetween(from, to)
     const coach = reach.scope === 'own' ? await findCoachOf(trx, reach.accountId) : undefined
     const sessions = await listSessionsBetween(trx, {
-      from: toInstant({ startsOnLocal: from, startsAtLocal: '00:00', zone }),
-      to: toInstant({ startsOnLocal: dayAfter(to), startsAtLocal: '00:00', zone }),
+      from,
+      to,
       ...(coach ? { coachId: coach.id } : {}),
     })
     const views = await viewSessions(trx, sessions)
@@ -186,11 +208,10 @@ export async function readBoard(
         dayLocal,
         duskAt: first ? (duskOver(first, { dayLocal, duskKind })?.toISOString() ?? null) : null,
       })),
-      sessions: views.map((view, index) => ({
-        ...view,
-        clinicId: sessions[index]?.clinicId ?? '',
-        clinicTitle: sessions[index]?.clinicTitle ?? '',
-      })),
+      sessions: sessions.flatMap(({ clinicId, clinicTitle, heldOn, zone }, index) => {
+        const view = views[index]
+        return view ? [{ ...view, clinicId, clinicTitle, heldOn, zone }] : []
+      }),
     }
   })
 }

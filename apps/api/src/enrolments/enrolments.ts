@@ -21,6 +21,7 @@ import { readStanding, type GolferToPlace } from './on-sale-queries'
 import {
   confirmSeats,
   findActiveEnrolment,
+  findEnrolment,
   listPlaces,
   lockEnrolment,
   lockSeatsOf,
@@ -161,7 +162,21 @@ export async function lockOwnEnrolment(
   trx: AcademyTrx,
   { enrolmentId, accountId }: { enrolmentId: string; accountId: string },
 ): Promise<Enrolment> {
-  const enrolment = await lockEnrolment(trx, enrolmentId)
+  return checkOwn(trx, { enrolment: await lockEnrolment(trx, enrolmentId), accountId })
+}
+
+/** As `lockOwnEnrolment`, for who only looks. */
+export async function findOwnEnrolment(
+  trx: AcademyTrx,
+  { enrolmentId, accountId }: { enrolmentId: string; accountId: string },
+): Promise<Enrolment> {
+  return checkOwn(trx, { enrolment: await findEnrolment(trx, enrolmentId), accountId })
+}
+
+async function checkOwn(
+  trx: AcademyTrx,
+  { enrolment, accountId }: { enrolment: Enrolment | undefined; accountId: string },
+): Promise<Enrolment> {
   if (!enrolment) throw notFound('place')
   await findOwnGolfer(trx, { golferId: enrolment.golferId, accountId })
   return enrolment

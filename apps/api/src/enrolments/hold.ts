@@ -6,6 +6,7 @@ import { together } from '../platform/tenancy/together'
 import type { AcademyTrx } from '../platform/tenancy/transaction'
 import type { OnSale } from './on-sale'
 import { insertEnrolment, takeSeats } from './queries'
+import { isFull } from './rules'
 
 /**
  * Takes places for a golfer: the enrolment and its places first, the seats last before commit, all
@@ -61,9 +62,7 @@ export async function takePlaces<T>(
 
 /** A first look that spares the writes where the answer is plain already. Throws `session-full`. */
 export function refuseFull({ taken }: OnSale): void {
-  if (taken.some(({ held, confirmed, capacity }) => held + confirmed >= capacity)) {
-    throw sessionFull()
-  }
+  if (taken.some(isFull)) throw sessionFull()
 }
 
 const sessionFull = () =>

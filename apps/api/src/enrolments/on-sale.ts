@@ -50,9 +50,7 @@ export async function findOnSale(
   const taken = wanted.sessionId ? ahead.filter(({ id }) => id === wanted.sessionId) : ahead
   if (taken.length === 0) throw notOnSale('This has begun or was called off.')
   const price = agreePrice({
-    wanted: wanted.sessionId
-      ? { kind: 'session', sessionId: wanted.sessionId }
-      : { kind: 'run', sessions },
+    wanted: kind === 'session' ? { kind } : { kind, sessionCount: sessions.length },
     taken,
     runPriceMinor: clinic.runPriceMinor,
     dropInPriceMinor: clinic.dropInPriceMinor,

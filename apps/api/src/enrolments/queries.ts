@@ -7,7 +7,7 @@ export async function findEnrolment(trx: AcademyTrx, id: string): Promise<Enrolm
 }
 
 export async function lockEnrolment(trx: AcademyTrx, id: string): Promise<Enrolment | undefined> {
-  return Enrolment.query(trx).where({ id }).forUpdate().first()
+  return Enrolment.query(trx).where({ id }).forNoKeyUpdate().first()
 }
 
 export async function updateEnrolment(
@@ -182,11 +182,12 @@ export async function findActiveEnrolment(
     .first()
 }
 
+/** Writes an entry; a golfer who waits or has been offered the place keeps the one they have. */
 export async function insertWaitlistEntry(
   trx: AcademyTrx,
   row: Partial<WaitlistEntry>,
 ): Promise<void> {
-  await WaitlistEntry.query(trx).insert(row)
+  await WaitlistEntry.query(trx).insert(row).onConflict().ignore()
 }
 
 export async function findWaitlistEntry(
@@ -212,6 +213,12 @@ export async function updateWaitlistEntry(
   await WaitlistEntry.query(trx).patch(change).where({ id })
 }
 
+/** Stops somebody's waiting; false when they do not wait any more. */
+export async function endWaiting(trx: AcademyTrx, id: string): Promise<boolean> {
+  const change = { state: 'left' } as const
+  return (await WaitlistEntry.query(trx).patch(change).where({ id, state: 'waiting' })) === 1
+}
+
 /** What became of an offer: its entry follows the enrolment. */
 export async function settleOffer(
   trx: AcademyTrx,
@@ -229,13 +236,18 @@ export interface WaitlistRow extends WaitlistEntry {
   offeredUntil: Date | null
 }
 
+const WAITS_BY = {
+  accountId: 'w.account_id',
+  clinicId: 'w.clinic_id',
+  golferId: 'w.golfer_id',
+} as const
+
 /** Waiting and offered entries, each with its place in the queue. */
 export async function listWaitlist(
   trx: AcademyTrx,
-  by: { accountId: string } | { clinicId: string } | { id: string },
+  by: { accountId: string } | { clinicId: string } | { golferId: string },
 ): Promise<WaitlistRow[]> {
-  const [column, value] = Object.entries(by)[0] as ['accountId' | 'clinicId' | 'id', string]
-  const names = { accountId: 'w.account_id', clinicId: 'w.clinic_id', id: 'w.id' }
+  const [column, value] = Object.entries(by)[0] as [keyof typeof WAITS_BY, string]
   const { rows } = await trx.raw<{ rows: WaitlistRow[] }>(
     `SELECT w.*, c.slug AS clinic_slug, c.title AS clinic_title, s.starts_at AS session_starts_at,
        g.name AS golfer_name, e.held_until AS offered_until,
@@ -247,7 +259,7 @@ export async function listWaitlist(
      JOIN golfers g ON g.academy_id = w.academy_id AND g.id = w.golfer_id
      LEFT JOIN sessions s ON s.academy_id = w.academy_id AND s.id = w.session_id
      LEFT JOIN enrolments e ON e.academy_id = w.academy_id AND e.id = w.enrolment_id
-     WHERE ${names[column]} = ? AND w.state IN ('waiting', 'offered')
+     WHERE ${WAITS_BY[column]} = ? AND w.state IN ('waiting', 'offered')
      ORDER BY w.joined_at, w.id`,
     [value],
   )

@@ -4,7 +4,7 @@ import { asStaff } from '../platform/http/narrow'
 import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
-import { holdPlaces, listWaitlist, lockOwnEnrolment } from './enrolments'
+import { findOwnEnrolment, holdPlaces, listWaitlist } from './enrolments'
 import { joinWaitlist, leaveWaitlist, viewEntry } from './waitlist'
 
 type EnrolmentView = Answer<'enrolments.read'>
@@ -46,7 +46,7 @@ export function enrolmentHandlers(
     'enrolments.read': ({ params }, context) => {
       const { academyId, account } = asStaff(context)
       return inAcademy(services.db, academyId, async (trx) => {
-        await lockOwnEnrolment(trx, { ...params, accountId: account.id })
+        await findOwnEnrolment(trx, { ...params, accountId: account.id })
         return showOne(trx, params.enrolmentId)
       })
     },

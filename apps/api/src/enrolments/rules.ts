@@ -1,4 +1,4 @@
-import { allocateByLargestRemainder, splitRunPrice, taxAdded, taxIncluded } from '@marram/money'
+import { allocateByLargestRemainder, priceOfRemaining, taxAdded, taxIncluded } from '@marram/money'
 
 export interface PricedSession {
   id: string
@@ -33,9 +33,8 @@ export function sessionsAhead<S extends PricedSession>(sessions: readonly S[], n
  * is worth is its share exactly.
  */
 export function agreePrice(given: {
-  wanted:
-    { kind: 'run'; sessions: readonly PricedSession[] } | { kind: 'session'; sessionId: string }
-  taken: readonly { id: string }[]
+  wanted: { kind: 'run'; sessionCount: number } | { kind: 'session' }
+  taken: readonly { id: string; number: number }[]
   runPriceMinor: number | null
   dropInPriceMinor: number | null
   isFree: boolean
@@ -67,10 +66,15 @@ export function agreePrice(given: {
 function sharesOf(given: Parameters<typeof agreePrice>[0]): number[] {
   const { wanted, taken, runPriceMinor, dropInPriceMinor } = given
   if (wanted.kind === 'session') return taken.map(() => dropInPriceMinor ?? 0)
-  const ordered = [...wanted.sessions].sort((a, b) => a.number - b.number)
-  const split = splitRunPrice({ runPriceMinor: runPriceMinor ?? 0, sessionCount: ordered.length })
-  const shareOf = new Map(ordered.map(({ id }, index) => [id, split[index] ?? 0]))
-  return taken.map(({ id }) => shareOf.get(id) ?? 0)
+  const remainingNumbers = taken.map(({ number }) => number)
+  const { sessionCount } = wanted
+  const run = { runPriceMinor: runPriceMinor ?? 0, sessionCount, remainingNumbers }
+  return priceOfRemaining(run).sharesMinor
+}
+
+/** Says whether a session has no seat left, held ones counted. */
+export function isFull(session: { held: number; confirmed: number; capacity: number }): boolean {
+  return session.held + session.confirmed >= session.capacity
 }
 
 /** A hold is over once its last millisecond has passed. */

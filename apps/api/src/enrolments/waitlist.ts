@@ -11,6 +11,7 @@ import { takePlaces } from './hold'
 import type { WaitlistEntry } from './models'
 import { checkFit, checkOpen, findOnSale, type OnSale, type WantedPlaces } from './on-sale'
 import {
+  endWaiting,
   findActiveEnrolment,
   findWaitlistEntry,
   insertWaitlistEntry,
@@ -20,7 +21,7 @@ import {
   updateWaitlistEntry,
   type WaitlistRow,
 } from './queries'
-import { offerUntil, sessionsAhead } from './rules'
+import { isFull, offerUntil, sessionsAhead } from './rules'
 
 type WaitlistView = Answer<'waitlist.join'>
 
@@ -43,19 +44,14 @@ export async function joinWaitlist(
     if (await findActiveEnrolment(trx, { golferId, sessionIds })) {
       throw new Problem('already-has-place', 'This golfer has a place there already.')
     }
-    const isFull = onSale.taken.some((s) => s.held + s.confirmed >= s.capacity)
-    if (!isFull) throw new Problem('not-on-sale', 'There is a place: take it instead of waiting.')
-    const mine = await listWaitlist(trx, { accountId })
-    const had = mine.find(
-      (row) =>
-        row.golferId === golferId && row.clinicId === clinicId && row.sessionId === sessionId,
-    )
-    if (had) return viewEntry(had)
-    const id = newId(now)
-    const entry = { id, clinicId, sessionId, golferId, accountId, joinedAt: now }
-    await insertWaitlistEntry(trx, { ...entry, state: 'waiting' })
-    const [row] = await listWaitlist(trx, { id })
-    invariant(row, 'the entry was just written')
+    if (!onSale.taken.some(isFull)) {
+      throw new Problem('not-on-sale', 'There is a place: take it instead of waiting.')
+    }
+    const entry = { clinicId, sessionId, golferId, accountId, joinedAt: now }
+    await insertWaitlistEntry(trx, { id: newId(now), ...entry, state: 'waiting' })
+    const waits = await listWaitlist(trx, { golferId })
+    const row = waits.find((row) => row.clinicId === clinicId && row.sessionId === sessionId)
+    invariant(row, 'the golfer waits by now')
     return viewEntry(row)
   })
 }
@@ -72,6 +68,7 @@ async function whoWaits(
   return ensureOwnGolfer(services, trx, { person, ...(handicap === undefined ? {} : { handicap }) })
 }
 
+/** Leaves the waitlist. Who has left already, or had the offer taken, has nothing left to leave. */
 export async function leaveWaitlist(
   { db }: Services,
   { academyId, accountId, entryId }: { academyId: string; accountId: string; entryId: string },
@@ -79,7 +76,11 @@ export async function leaveWaitlist(
   await inAcademy(db, academyId, async (trx) => {
     const entry = await findWaitlistEntry(trx, entryId)
     if (entry?.accountId !== accountId) throw notFound('waitlist entry')
-    if (entry.state === 'waiting') await updateWaitlistEntry(trx, entryId, { state: 'left' })
+    if (await endWaiting(trx, entryId)) return
+    const now = await findWaitlistEntry(trx, entryId)
+    if (now?.state === 'offered') {
+      throw new Problem('already-decided', 'You have been offered the place: let it go there.')
+    }
   })
 }
 

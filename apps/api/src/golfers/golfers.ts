@@ -1,12 +1,12 @@
 import type { Answer, Parsed } from '@marram/contract'
 import { readAcademy } from '../academies/academies'
-import { findCoachOf } from '../coaches/coaches'
 import { Problem, notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import { invariant } from '../platform/invariant'
 import type { Services } from '../platform/services'
 import { localDayOf } from '../platform/local-day'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { datedHandicap } from './handicap'
 import type { Golfer } from './models'
 import {
   findDependant,
@@ -15,14 +15,11 @@ import {
   findUnclaimedGolfer,
   insertConsent,
   insertGolfer,
-  insertLookUp,
-  listConsents,
   listGolfersOf,
-  searchGolfers,
+  lockGuardian,
   updateGolfer,
-  type GolferListRow,
 } from './queries'
-import { ADULT_AGE_YEARS, ageOn } from './rules'
+import { ageOn, contactOf } from './rules'
 
 type OwnGolferView = Answer<'golfers.add-dependant'>
 type Dependant = Parsed<'golfers.add-dependant', 'body'>
@@ -71,7 +68,7 @@ export async function ensureOwnGolfer(
     invariant(golfer, 'the person has a golfer by now')
   }
   if (handicap !== undefined && handicap !== golfer.handicap) {
-    await updateGolfer(trx, golfer.id, { handicap, handicapOn: now.toISOString().slice(0, 10) })
+    await updateGolfer(trx, golfer.id, await datedHandicap(trx, { handicap, now }))
     golfer.handicap = handicap
   }
   return golfer
@@ -88,6 +85,7 @@ export async function addDependant(
 ): Promise<Golfer> {
   const now = clock.now()
   const { name, bornOn } = dependant
+  await lockGuardian(trx, guardianId)
   const had = await findDependant(trx, { guardianAccountId: guardianId, name, bornOn })
   if (had) return had
   const { safeguarding, zone } = await readAcademy(trx)
@@ -98,8 +96,7 @@ export async function addDependant(
     guardianAccountId: guardianId,
     name,
     bornOn,
-    handicap: dependant.handicap,
-    handicapOn: dependant.handicap === null ? null : now.toISOString().slice(0, 10),
+    ...(await datedHandicap(trx, { handicap: dependant.handicap, now })),
     emergencyName: dependant.emergencyContact.name,
     emergencyPhone: dependant.emergencyContact.phone,
     createdAt: now,
@@ -167,129 +164,6 @@ export function checkOwnGolfer<G extends Pick<Golfer, 'accountId' | 'guardianAcc
   return golfer
 }
 
-/** Whose golfers a member of staff may see: everybody's, or those of a coach's own sessions. */
-export interface Reach {
-  academyId: string
-  accountId: string
-  scope: 'all' | 'own'
-}
-
-export async function listGolfers(
-  { db, clock }: Services,
-  { reach, search }: { reach: Reach; search: string },
-): Promise<Answer<'golfers.list'>> {
-  return inAcademy(db, reach.academyId, async (trx) => {
-    const coach = await coachOfReach(trx, reach)
-    if (coach === 'nobody') return { golfers: [] }
-    const now = clock.now()
-    const { zone } = await readAcademy(trx)
-    const rows = await searchGolfers(trx, { search, now, ...coach })
-    return { golfers: rows.map((row) => viewListItem(row, localDayOf(now, zone))) }
-  })
-}
-
-/** One golfer for staff. Looking at a minor's contacts and consents is written down. */
-export async function readGolfer(
-  { db, clock }: Services,
-  {
-    reach,
-    golferId,
-    creditOf,
-  }: {
-    reach: Reach
-    golferId: string
-    creditOf: (trx: AcademyTrx, golferId: string) => Promise<number>
-  },
-): Promise<Answer<'golfers.read'>> {
-  return inAcademy(db, reach.academyId, async (trx) => {
-    const coach = await coachOfReach(trx, reach)
-    if (coach === 'nobody') throw notFound('golfer')
-    const now = clock.now()
-    const { zone } = await readAcademy(trx)
-    const [row] = await searchGolfers(trx, { search: '', now, golferId, ...coach })
-    if (!row) throw notFound('golfer')
-    const today = localDayOf(now, zone)
-    if (isMinor(row, today)) {
-      const seen = { golferId, accountId: reach.accountId, lookedAt: now }
-      await insertLookUp(trx, { id: newId(now), ...seen })
-    }
-    const consents = await listConsents(trx, golferId)
-    return {
-      ...viewListItem(row, today),
-      bornOn: row.bornOn,
-      ageYears: row.bornOn ? ageOn(row.bornOn, today) : null,
-      notes: row.notes,
-      emergencyContact: contactOf(row),
-      consents: consents.map(({ givenAt, ...rest }) => ({
-        ...rest,
-        givenAt: givenAt.toISOString(),
-      })),
-      creditMinor: await creditOf(trx, golferId),
-    }
-  })
-}
-
-/** Enters a golfer who has no account yet. */
-export async function enterGolfer(
-  { db, clock }: Services,
-  { academyId, wanted }: { academyId: string; wanted: Parsed<'golfers.enter', 'body'> },
-): Promise<Answer<'golfers.enter'>> {
-  return inAcademy(db, academyId, async (trx) => {
-    const now = clock.now()
-    const id = newId(now)
-    await insertGolfer(trx, {
-      id,
-      name: wanted.name,
-      email: wanted.email ?? null,
-      phone: wanted.phone ?? null,
-      bornOn: wanted.bornOn ?? null,
-      handicap: wanted.handicap ?? null,
-      handicapOn: wanted.handicap == null ? null : now.toISOString().slice(0, 10),
-      hand: wanted.hand ?? 'right',
-      notes: wanted.notes ?? '',
-      emergencyName: wanted.emergencyContact?.name ?? null,
-      emergencyPhone: wanted.emergencyContact?.phone ?? null,
-      createdAt: now,
-    })
-    const { zone } = await readAcademy(trx)
-    const [row] = await searchGolfers(trx, { search: '', now, golferId: id })
-    invariant(row, 'the golfer was just written')
-    return viewListItem(row, localDayOf(now, zone))
-  })
-}
-
-export async function changeGolfer(
-  { db, clock }: Services,
-  wanted: { academyId: string; golferId: string; change: Parsed<'golfers.change', 'body'> },
-): Promise<void> {
-  const { handicap, ...rest } = wanted.change
-  const day = clock.now().toISOString().slice(0, 10)
-  const change = { ...rest, ...(handicap === undefined ? {} : { handicap, handicapOn: day }) }
-  if (Object.keys(change).length === 0) return
-  await inAcademy(db, wanted.academyId, (trx) =>
-    updateGolfer(trx, wanted.golferId, change as Partial<Golfer>),
-  )
-}
-
-async function coachOfReach(
-  trx: AcademyTrx,
-  { scope, accountId }: Reach,
-): Promise<{ coachId?: string } | 'nobody'> {
-  if (scope === 'all') return {}
-  const coach = await findCoachOf(trx, accountId)
-  return coach ? { coachId: coach.id } : 'nobody'
-}
-
-function isMinor(golfer: Golfer, today: string): boolean {
-  if (golfer.bornOn) return ageOn(golfer.bornOn, today) < ADULT_AGE_YEARS
-  return golfer.guardianAccountId !== null
-}
-
-function contactOf(golfer: Golfer): { name: string; phone: string } | null {
-  if (!golfer.emergencyName || !golfer.emergencyPhone) return null
-  return { name: golfer.emergencyName, phone: golfer.emergencyPhone }
-}
-
 function viewOwn(golfer: Golfer, today: string): OwnGolferView {
   return {
     id: golfer.id,
@@ -302,19 +176,6 @@ function viewOwn(golfer: Golfer, today: string): OwnGolferView {
   }
 }
 
-function viewListItem(row: GolferListRow, today: string): Answer<'golfers.enter'> {
-  return {
-    id: row.id,
-    name: row.name,
-    email: row.accountEmail ?? row.email,
-    isJunior: isMinor(row, today),
-    guardianName: row.guardianName,
-    handicap: row.handicap,
-    hand: row.hand,
-    placesAhead: row.placesAhead,
-  }
-}
-
 export { findGolfer, findGolferOfAccount, listGolfersOf } from './queries'
-export { ageOn, misfitOf, misfitSentence } from './rules'
+export { isMinor, misfitOf, misfitSentence } from './rules'
 export type { Golfer } from './models'

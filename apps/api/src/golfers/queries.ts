@@ -14,6 +14,11 @@ export async function findGolferOfAccount(
   return Golfer.query(trx).where({ accountId }).first()
 }
 
+/** Locks a guardian's account, so that two who add the same child come one after the other. */
+export async function lockGuardian(trx: AcademyTrx, accountId: string): Promise<void> {
+  await trx.raw('SELECT id FROM accounts WHERE id = ? FOR NO KEY UPDATE', [accountId])
+}
+
 export async function findDependant(
   trx: AcademyTrx,
   who: { guardianAccountId: string; name: string; bornOn: string },
@@ -93,9 +98,17 @@ export interface GolferListRow extends Golfer {
   accountEmail: string | null
   guardianName: string | null
   placesAhead: number
+  /** A session of the coach who asks lies within a few days; false where no coach asks. */
+  isNearOwnSession: boolean
 }
 
-/** Golfers by name, with what a list needs of each. `coachId` keeps to golfers of that coach's sessions. */
+/** How long before and after a session a coach is concerned with who comes to it. */
+const NEAR_DAYS = 7
+
+/**
+ * Golfers by name, with what a list needs of each. `coachId` keeps to golfers of that coach's
+ * sessions.
+ */
 export async function searchGolfers(
   trx: AcademyTrx,
   wanted: { search: string; now: Date; coachId?: string; golferId?: string },
@@ -114,6 +127,7 @@ export async function searchGolfers(
             AND p.state = 'confirmed' AND s.state = 'planned' AND s.starts_at > ?)`,
         [wanted.now],
       ).as('placesAhead'),
+      nearSessionOf(wanted).as('isNearOwnSession'),
     )
     .orderBy(['golfers.name', 'golfers.id'])
     .limit(500)
@@ -131,6 +145,19 @@ function ofCoach(coachId: string) {
       WHERE p.academy_id = golfers.academy_id AND p.golfer_id = golfers.id
         AND p.state = 'confirmed' AND c.coach_id = ?)`,
     [coachId],
+  )
+}
+
+function nearSessionOf({ coachId, now }: { coachId?: string; now: Date }) {
+  if (!coachId) return raw('false')
+  const nearMs = NEAR_DAYS * 86_400_000
+  return raw(
+    `EXISTS (SELECT 1 FROM places p
+        JOIN sessions s ON s.academy_id = p.academy_id AND s.id = p.session_id
+        JOIN session_coaches c ON c.academy_id = s.academy_id AND c.session_id = s.id
+      WHERE p.academy_id = golfers.academy_id AND p.golfer_id = golfers.id
+        AND p.state = 'confirmed' AND c.coach_id = ? AND s.starts_at <= ? AND s.ends_at >= ?)`,
+    [coachId, new Date(now.getTime() + nearMs), new Date(now.getTime() - nearMs)],
   )
 }
 

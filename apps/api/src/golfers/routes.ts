@@ -1,7 +1,16 @@
-import type { Handlers } from '../platform/http/context'
+import { scopeOf } from '@marram/contract'
+import type { Handlers, RequestContext } from '../platform/http/context'
 import { asAcademy, asStaff } from '../platform/http/narrow'
 import type { Services } from '../platform/services'
-import { addMyDependant, enterGolfer, listGolfers, readMyGolfers } from './golfers'
+import { enterGolfer, listGolfers, type Reach } from './for-staff'
+import { addMyDependant, readMyGolfers } from './golfers'
+
+/** Which golfers a member of staff may reach, and what of them, from their permissions. */
+export function golferReach(context: RequestContext): Reach {
+  const { academyId, account, roles, scope } = asStaff(context)
+  const minors = scopeOf(roles, 'minors:read')
+  return { academyId, accountId: account.id, scope: scope ?? 'own', minors }
+}
 
 export function golferHandlers(services: Services): Handlers {
   return {
@@ -14,9 +23,8 @@ export function golferHandlers(services: Services): Handlers {
       return addMyDependant(services, { academyId, person, dependant: body })
     },
     'golfers.list': ({ query }, context) => {
-      const { academyId, account, scope } = asStaff(context)
-      const reach = { academyId, accountId: account.id, scope: scope ?? 'own' }
-      return listGolfers(services, { reach, search: query.search?.trim() ?? '' })
+      const search = query.search?.trim() ?? ''
+      return listGolfers(services, { reach: golferReach(context), search })
     },
     'golfers.enter': ({ body }, context) =>
       enterGolfer(services, { academyId: asAcademy(context).academyId, wanted: body }),

@@ -11,6 +11,23 @@ function splitYear(day: string): [number, string] {
 
 export const ADULT_AGE_YEARS = 18
 
+/** Says whether somebody is a junior on a day; without a birth date, whoever has a guardian is. */
+export function isMinor(
+  golfer: { bornOn: string | null; guardianAccountId: string | null },
+  dayLocal: string,
+): boolean {
+  if (golfer.bornOn) return ageOn(golfer.bornOn, dayLocal) < ADULT_AGE_YEARS
+  return golfer.guardianAccountId !== null
+}
+
+export function contactOf(golfer: {
+  emergencyName: string | null
+  emergencyPhone: string | null
+}): { name: string; phone: string } | null {
+  if (!golfer.emergencyName || !golfer.emergencyPhone) return null
+  return { name: golfer.emergencyName, phone: golfer.emergencyPhone }
+}
+
 export interface Fitting {
   handicapMin: number | null
   handicapMax: number | null

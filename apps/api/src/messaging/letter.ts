@@ -1,3 +1,5 @@
+import { escapeHtml } from '../platform/web/page-html'
+
 /** A mail in words: what every template gives, and both forms are made of. */
 export interface Letter {
   subject: string
@@ -62,15 +64,4 @@ export function letterAsHtml(letter: Letter): string {
     `<p style="margin:0 0 16px;padding-top:12px;border-top:1px solid #cdc2a6;font:14px/20px ${SANS};` +
     `color:#46534a">${escapeHtml(letter.footer)}</p></td></tr></table></td></tr></table></body></html>`
   )
-}
-
-function escapeHtml(text: string): string {
-  const entities: Record<string, string> = {
-    '&': '&amp;',
-    '<': '&lt;',
-    '>': '&gt;',
-    '"': '&quot;',
-    "'": '&#39;',
-  }
-  return text.replace(/[&<>"']/g, (character) => entities[character] ?? character)
 }

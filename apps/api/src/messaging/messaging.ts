@@ -1,7 +1,7 @@
 import { makeLink } from '../accounts/accounts'
 import { readAcademy } from '../academies/academies'
 import { makeInvitationLink } from '../academies/staff'
-import { findSession } from '../clinics/clinics'
+import { findSession, viewSessions } from '../clinics/clinics'
 import type { Services } from '../platform/services'
 import { inAcademy } from '../platform/tenancy/transaction'
 import { writeCalendar, type CalendarEntry } from './calendar'
@@ -88,20 +88,24 @@ export function makeMessenger(services: Services, provider: MailProvider): Messe
     { academyId, sessionId }: { academyId: string; sessionId: string },
     what: 'called-off' | 'changed',
   ) => {
-    const { session, enrolments } = await inAcademy(services.db, academyId, async (trx) => {
+    const found = await inAcademy(services.db, academyId, async (trx) => {
       const enrolments = await listEnrolmentsOfSession(trx, sessionId)
-      return { session: await findSession(trx, sessionId), enrolments }
+      const session = await findSession(trx, sessionId)
+      const [view] = session ? await viewSessions(trx, [session]) : []
+      return session && view ? { session, view, enrolments } : null
     })
-    if (!session) return
+    if (!found) return
+    const { session, view, enrolments } = found
+    const areas = view.areas.map(({ name }) => name)
+    const coaches = view.coaches.map(({ name }) => name)
     for (const { enrolmentId, owedMinor } of enrolments) {
       const key = `session.${what}:${sessionId}:${session.calendarSequence}:${enrolmentId}`
       await tell(
         { academyId, enrolmentId, key, template: what },
         (facts) => {
-          const place = facts.places.find((row) => row.sessionId === sessionId)
           const url = page(facts.academy.slug, `places/${enrolmentId}`)
           if (what === 'changed') {
-            return changedLetter(facts, { session, areas: place?.areas ?? [], url })
+            return changedLetter(facts, { session, areas, coaches, url })
           }
           const reason = session.calledOffReason ?? 'called off'
           return calledOffLetter(facts, { session, reason, owedMinor, url })

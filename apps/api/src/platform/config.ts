@@ -24,7 +24,8 @@ const shape = z.object({
   MARRAM_MAIL_API_KEY: z.string().min(8),
   MARRAM_MAIL_FROM: z.email(),
   MARRAM_MAIL_URL: url.optional(),
-  MARRAM_MAIL_WEBHOOK_PUBLIC_KEY: z.string().optional(),
+  /** What is told of mail (bounces, complaints) is signed for it; production needs it. */
+  MARRAM_MAIL_WEBHOOK_PUBLIC_KEY: z.string().min(1).optional(),
   MARRAM_GOOGLE_CLIENT_ID: z.string().min(1),
   MARRAM_GOOGLE_CLIENT_SECRET: z.string().min(1),
   MARRAM_GOOGLE_URL: url.optional(),
@@ -109,6 +110,10 @@ function refuseMixing({ mode, payments, mail, google, publicUrl }: Config): void
       )
     }
     if (!isLive) throw new Error('Production needs a live payments key.')
+    if (!mail.webhookPublicKey) {
+      // Without it every report of a bounce is refused, and mail goes on to where it bounced.
+      throw new Error('Production needs MARRAM_MAIL_WEBHOOK_PUBLIC_KEY, to know who tells of mail.')
+    }
     if (!publicUrl.startsWith('https://')) throw new Error('Production needs an https public URL.')
     return
   }

@@ -16,6 +16,15 @@ export async function insertMarkChange(trx: AcademyTrx, row: Partial<MarkChange>
   await MarkChange.query(trx).insert(row)
 }
 
+/** When a place's newest press so far was made, by the phone's clock but no later than ours. */
+export async function findLastPress(trx: AcademyTrx, placeId: string): Promise<Date | null> {
+  const { rows } = await trx.raw<{ rows: { pressedAt: Date | null }[] }>(
+    'SELECT max(least(pressed_at, marked_at)) AS pressed_at FROM mark_history WHERE place_id = ?',
+    [placeId],
+  )
+  return rows[0]?.pressedAt ?? null
+}
+
 export interface RowOfRegister {
   placeId: string
   sessionId: string
@@ -27,6 +36,7 @@ export interface RowOfRegister {
   handicap: number | null
   hand: 'right' | 'left'
   bornOn: string | null
+  guardianAccountId: string | null
   notes: string
   lateBefore: number
   joinedAtNumber: number
@@ -40,7 +50,8 @@ export async function listRegisterRows(
 ): Promise<RowOfRegister[]> {
   const { rows } = await trx.raw<{ rows: RowOfRegister[] }>(
     `SELECT p.id AS place_id, p.session_id, g.id AS golfer_id, g.name, m.mark,
-       a.name AS marked_by, m.marked_at, g.handicap, g.hand, g.born_on, g.notes,
+       a.name AS marked_by, m.marked_at, g.handicap, g.hand, g.born_on,
+       g.guardian_account_id, g.notes,
        (SELECT count(*) FROM places q
           JOIN sessions t ON t.academy_id = q.academy_id AND t.id = q.session_id
           JOIN marks n ON n.academy_id = q.academy_id AND n.place_id = q.id

@@ -1,5 +1,4 @@
 import type { Answer, Parsed } from '@marram/contract'
-import { toInstant } from '@marram/schedule'
 import { readAcademy } from '../academies/academies'
 import {
   isCoachOfClinic,
@@ -11,10 +10,10 @@ import {
   type Session,
 } from '../clinics/clinics'
 import { duskOver } from '../clinics/light'
-import { lockReachableSession, type SessionReach } from '../clinics/sessions'
+import { findReachableSession, lockReachableSession, type SessionReach } from '../clinics/sessions'
 import { findCoachOf, findCoaches } from '../coaches/coaches'
 import { findPlace } from '../enrolments/enrolments'
-import { ageOn } from '../golfers/golfers'
+import { isMinor } from '../golfers/golfers'
 import { Problem, notFound } from '../platform/errors'
 import { newId } from '../platform/ids'
 import { invariant } from '../platform/invariant'
@@ -23,6 +22,7 @@ import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
 import { findVenue } from '../venues/venues'
 import type { Mark } from './models'
 import {
+  findLastPress,
   insertMarkChange,
   listCardRows,
   listRegisterHeads,
@@ -32,7 +32,7 @@ import {
   setMark,
   type RowOfRegister,
 } from './queries'
-import { noteOf, refusalToClose, refusalToMark, type RegisterRefusal } from './rules'
+import { isLastPress, noteOf, refusalToClose, refusalToMark, type RegisterRefusal } from './rules'
 
 type RegisterView = Answer<'register.read'>
 
@@ -51,8 +51,7 @@ export async function readRegister(
   { reach, sessionId }: { reach: SessionReach; sessionId: string },
 ): Promise<RegisterView> {
   return inAcademy(db, reach.academyId, async (trx) => {
-    const session = await lockReachableSession(trx, { reach, sessionId })
-    return viewOne(trx, session)
+    return viewOne(trx, await findReachableSession(trx, { reach, sessionId }))
   })
 }
 
@@ -65,17 +64,14 @@ export async function readDay(
     const { zone, duskKind } = await readAcademy(trx)
     const coach = await findCoachOf(trx, reach.accountId)
     const isOwnOnly = reach.scope === 'own'
-    const from = toInstant({ startsOnLocal: dayLocal, startsAtLocal: '00:00', zone })
-    const to = new Date(from.getTime() + 26 * 3_600_000)
     const nobody = isOwnOnly && !coach
-    const found = nobody
+    const sessions = nobody
       ? []
       : await listSessionsBetween(trx, {
-          from,
-          to,
+          from: dayLocal,
+          to: dayLocal,
           ...(isOwnOnly && coach ? { coachId: coach.id } : {}),
         })
-    const sessions = found.filter(({ heldOn }) => heldOn === dayLocal)
     const [first] = sessions
     const clinic = first && (await findClinic(trx, first.clinicId))
     const venue = clinic && (await findVenue(trx, clinic.venueId))
@@ -90,7 +86,8 @@ export async function readDay(
 }
 
 /**
- * Sets a golfer's mark, or takes it away with `null`. The last press counts; every press is kept.
+ * Sets a golfer's mark, or takes it away with `null`. The last press counts, by when it was pressed
+ * and not by when it arrived; every press is kept.
  */
 export async function markPlace(
   { db, clock }: Services,
@@ -112,13 +109,24 @@ export async function markPlace(
     const mark: Mark | null = press.mark
     const pressedAt = press.markedAt ? new Date(press.markedAt) : null
     const by = { placeId, markedBy: reach.accountId, markedAt: now, pressedAt }
+    const isLast = isLastPress({ pressedAt, now, before: await findLastPress(trx, placeId) })
     await insertMarkChange(trx, { id: newId(now), ...by, mark })
+    if (!isLast) return rowOf(trx, session, placeId)
     if (mark) await setMark(trx, { ...by, sessionId, mark })
     else await removeMark(trx, placeId)
-    const row = (await viewOne(trx, session)).rows.find((entry) => entry.placeId === placeId)
-    invariant(row, 'a confirmed place is in its register')
-    return row
+    return rowOf(trx, session, placeId)
   })
+}
+
+async function rowOf(
+  trx: AcademyTrx,
+  session: Session,
+  placeId: string,
+): Promise<Answer<'register.mark'>> {
+  const { rows } = await viewOne(trx, session)
+  const row = rows.find((entry) => entry.placeId === placeId)
+  invariant(row, 'a confirmed place is in its register')
+  return row
 }
 
 /** Closes a register once everybody is marked. Closing earns the session's money. */
@@ -214,8 +222,6 @@ async function viewRegisters(
   })
 }
 
-const ADULT_YEARS = 18
-
 function viewRow(
   row: RowOfRegister,
   session: { number: number; heldOn: string; sessionsTotal: number },
@@ -229,7 +235,7 @@ function viewRow(
     markedAt: row.markedAt?.toISOString() ?? null,
     handicap: row.handicap,
     hand: row.hand,
-    isJunior: row.bornOn !== null && ageOn(row.bornOn, session.heldOn) < ADULT_YEARS,
+    isJunior: isMinor(row, session.heldOn),
     note: noteOf({ ...row, ...session }),
     lateBefore: row.lateBefore,
     joinedAtNumber: row.joinedAtNumber,
@@ -237,11 +243,15 @@ function viewRow(
   }
 }
 
-/** The card of a clinic: golfers down, sessions across, and the money on it. */
+/**
+ * The card of a clinic: golfers down, sessions across, and the money on it for those who may read
+ * the ledger.
+ */
 export async function readCard(
   { db }: Services,
-  { reach, clinicId }: { reach: SessionReach; clinicId: string },
+  given: { reach: SessionReach; clinicId: string; mayReadMoney: boolean },
 ): Promise<Answer<'register.card'>> {
+  const { reach, clinicId, mayReadMoney } = given
   return inAcademy(db, reach.academyId, async (trx) => {
     const clinic = await findClinic(trx, clinicId)
     const { accountId, scope } = reach
@@ -266,7 +276,7 @@ export async function readCard(
     return {
       coaches: coaches.map(({ id, name, initials }) => ({ id, name, initials })),
       rows: [...cards.values()],
-      money: await readCardMoney(trx, clinicId),
+      money: mayReadMoney ? await readCardMoney(trx, clinicId) : null,
     }
   })
 }

@@ -1,3 +1,4 @@
+import { scopeOf } from '@marram/contract'
 import { sessionReach } from '../clinics/routes'
 import type { Handlers } from '../platform/http/context'
 import type { Services } from '../platform/services'
@@ -23,6 +24,10 @@ export function registerHandlers(services: Services): Handlers {
     'register.reopen': ({ params, body }, context) =>
       reopenRegister(services, { reach: sessionReach(context), ...params, ...body }),
     'register.card': ({ params }, context) =>
-      readCard(services, { reach: sessionReach(context), ...params }),
+      readCard(services, {
+        reach: sessionReach(context),
+        mayReadMoney: scopeOf(context.roles, 'ledger:read') !== null,
+        ...params,
+      }),
   }
 }

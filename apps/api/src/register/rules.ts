@@ -14,6 +14,21 @@ export function refusalToMark(
   return null
 }
 
+/**
+ * Says whether a press that arrives now was made after those that came before it. A phone's clock
+ * counts, but never one that is ahead of ours; of two at the same moment the later arrival counts.
+ */
+export function isLastPress(press: {
+  pressedAt: Date | null
+  now: Date
+  before: Date | null
+}): boolean {
+  const { pressedAt, now, before } = press
+  if (!before) return true
+  const madeAt = Math.min(pressedAt?.getTime() ?? now.getTime(), now.getTime())
+  return madeAt >= before.getTime()
+}
+
 /** Why a register cannot be closed now. It can be once the session has begun and all are marked. */
 export function refusalToClose(
   session: { state: string; startsAt: Date },

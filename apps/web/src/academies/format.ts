@@ -1,9 +1,10 @@
-import { formatMoney, toCurrencyCode } from '@marram/money'
+import { formatMoney, formatNothing, minorDigitsOf, toCurrencyCode } from '@marram/money'
 import {
   formatDay,
   formatSessionTime,
   formatTime,
   formatTimeRange,
+  formatZoneIfElsewhere,
   type DayStyle,
 } from '@marram/schedule/format'
 
@@ -11,20 +12,38 @@ export interface Place {
   locale: string
   currency: string
   zone: string
+  duskKind: 'sunset' | 'civil'
 }
 
+/** The moment that an academy goes by, as it opens a line and as it stands inside one. */
+const DUSK = {
+  sunset: { word: 'Sunset', inText: 'sunset' },
+  civil: { word: 'End of twilight', inText: 'the end of twilight' },
+} as const
+
 /** Amounts and times as an academy writes them. */
-export function makeFormat({ locale, currency, zone }: Place) {
+export function makeFormat({ locale, currency, zone, duskKind }: Place) {
   const code = toCurrencyCode(currency)
+  const minorOfOne = 10 ** minorDigitsOf(code)
   return {
     locale,
     currency: code,
     zone,
+    duskKind,
+    dusk: DUSK[duskKind],
     /** "€108.00" */
     money: (amountMinor: number) => formatMoney({ amountMinor, currency: code }, { locale }),
     /** "€108", for cards and lists; cents only where there are some. */
     shortMoney: (amountMinor: number) =>
-      formatMoney({ amountMinor, currency: code }, { locale, whole: amountMinor % 100 === 0 }),
+      formatMoney(
+        { amountMinor, currency: code },
+        { locale, whole: amountMinor % minorOfOne === 0 },
+      ),
+    /** "1,080" in a card whose header carries the currency; nothing is an en rule. */
+    cardMoney: (amountMinor: number) =>
+      amountMinor === 0
+        ? formatNothing()
+        : formatMoney({ amountMinor, currency: code }, { locale, whole: true, sign: false }),
     day: (at: string, style?: DayStyle) =>
       formatDay({ at, zone, locale, ...(style ? { style } : {}) }),
     time: (at: string) => formatTime({ at, zone, locale }),
@@ -32,6 +51,13 @@ export function makeFormat({ locale, currency, zone }: Place) {
       formatTimeRange({ ...session, zone, locale }),
     session: (session: { startsAt: string; endsAt: string }) =>
       formatSessionTime({ ...session, zone, locale }),
+    /** "Dublin time", for a reader whose own clock shows another time then; else null. */
+    zoneIfElsewhere: (at: string) =>
+      formatZoneIfElsewhere({
+        at,
+        zone,
+        readerZone: new Intl.DateTimeFormat().resolvedOptions().timeZone,
+      }),
   }
 }
 

@@ -2,14 +2,12 @@ import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
 import { Link } from 'react-router'
 import { homeOf } from '../accounts/home'
 import { sessionQuery, useSession } from '../accounts/queries'
-import { routeQuery } from '../api/query'
 import { useTitle } from '../layouts/accent'
 import { PublicFoot } from '../layouts/public-foot'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
 import { Drawing } from '../ui/drawing'
-
-const publishedQuery = () => routeQuery('academies.published', {})
+import { publishedQuery } from './queries'
 
 export const loader = (client: QueryClient) => () =>
   Promise.all([

@@ -2,23 +2,28 @@ import { useQuery, useQueryClient } from '@tanstack/react-query'
 import { useDeferredValue, useState } from 'react'
 import { call } from '../api/client'
 import { useForm } from '../api/form'
-import { routeQuery } from '../api/query'
 import { SignInFields, useSignInFields } from '../accounts/sign-in-fields'
 import { useSession } from '../accounts/queries'
 import { paths } from '../paths'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
-import { InputWord, SelectWord, Sentence } from '../ui/sentence'
-import { CURRENCIES, likelyCurrency, ownZone, zoneOptions, type Currency } from './zones'
+import { OpeningWords, type Opening } from './opening-words'
+import { checkSlugQuery } from './queries'
+import { likelyCurrency, ownZone, type Currency } from './zones'
 
-interface Wanted {
-  name: string
-  place: string
-  /** Empty while the owner has not written one: the name's own is used. */
-  slug: string
-  zone: string
-  currency: Currency
-  taxMode: 'included' | 'added'
+interface Wanted extends Pick<Opening, 'name' | 'place' | 'slug' | 'zone'> {
+  /** Null while the owner has chosen none: what is likely for the zone is used. */
+  currency: Currency | null
+  taxMode: Opening['taxMode'] | null
+}
+
+const WORD_NAMES = {
+  name: 'Name of the academy',
+  place: 'Place',
+  slug: 'Address of the page',
+  zone: 'Time zone',
+  currency: 'Currency',
+  taxMode: 'Tax',
 }
 
 /** The first sentence: who the academy is, where its page is, its time and its money. */
@@ -26,76 +31,40 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
   const client = useQueryClient()
   const { data: session } = useSession()
   const signIn = useSignInFields()
-  const [wanted, setWanted] = useState<Wanted>(() => {
-    const zone = ownZone()
-    const currency = likelyCurrency(zone)
-    const taxMode = currency === 'USD' ? 'added' : 'included'
-    return { name: '', place: '', slug: '', zone, currency, taxMode }
-  })
+  const [wanted, setWanted] = useState<Wanted>(() => ({
+    name: '',
+    place: '',
+    // Empty while the owner has not written one: the name's own is used.
+    slug: '',
+    zone: ownZone(),
+    currency: null,
+    taxMode: null,
+  }))
   const set = (change: Partial<Wanted>) => setWanted((had) => ({ ...had, ...change }))
   const address = useAddress(wanted.slug || wanted.name, session?.account !== null)
   const slug = wanted.slug || address.suggestion
+  const currency = wanted.currency ?? likelyCurrency(wanted.zone)
+  const taxMode = wanted.taxMode ?? (currency === 'USD' ? 'added' : 'included')
 
-  const { form, errors, all, isSending } = useForm(async () => {
+  const send = async () => {
     if (!session?.account) await signIn.submit()
-    const opened = await call('academies.open', { body: { ...wanted, slug } })
+    const opened = await call('academies.open', { body: { ...wanted, slug, currency, taxMode } })
     await client.invalidateQueries()
     onOpened(opened.slug)
+  }
+  const { form, errors, sentence, isSending } = useForm(send, {
+    beside: ['account'],
+    named: WORD_NAMES,
   })
 
   return (
     <form {...form}>
-      <Sentence>
-        We are{' '}
-        <InputWord
-          label="Name of the academy"
-          value={wanted.name}
-          placeholder="your academy"
-          isWrong={Boolean(errors['name'])}
-          onChange={(name) => set({ name })}
-        />{' '}
-        in{' '}
-        <InputWord
-          label="Place"
-          value={wanted.place}
-          placeholder="county or town"
-          isWrong={Boolean(errors['place'])}
-          onChange={(place) => set({ place })}
-        />
-        . Our page is {location.host}/
-        <InputWord
-          label="Address of the page"
-          value={slug}
-          placeholder="your-academy"
-          isWrong={Boolean(errors['slug']) || !address.isFree}
-          onChange={(written) => set({ slug: written.toLowerCase() })}
-        />
-        . We keep{' '}
-        <SelectWord
-          label="Time zone"
-          value={wanted.zone}
-          onChange={(zone) => set({ zone, currency: likelyCurrency(zone) })}
-          options={zoneOptions}
-        />{' '}
-        and count in{' '}
-        <SelectWord
-          label="Currency"
-          value={wanted.currency}
-          onChange={(currency) => set({ currency: currency as Currency })}
-          options={CURRENCIES}
-        />
-        , with tax{' '}
-        <SelectWord
-          label="Tax"
-          value={wanted.taxMode}
-          onChange={(taxMode) => set({ taxMode: taxMode as Wanted['taxMode'] })}
-          options={[
-            { value: 'included', label: 'in the price' },
-            { value: 'added', label: 'added on top' },
-          ]}
-        />
-        .
-      </Sentence>
+      <OpeningWords
+        wanted={{ ...wanted, slug, currency, taxMode }}
+        onChange={set}
+        errors={errors}
+        isAddressFree={address.isFree}
+      />
       {!address.isFree && (
         <p className="flagtext mb-3">The address /{slug} is taken. Try adding the place.</p>
       )}
@@ -104,12 +73,14 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
           <SignInFields fields={signIn} errors={errors} returnTo={paths.open()} />
         </div>
       )}
-      {all && <Notice kind="flag">{all}</Notice>}
+      {sentence && <Notice kind="flag">{sentence}</Notice>}
       <p className="rowb2 mt-4">
         <Button type="submit" kind="go" isBig waiting={isSending && 'Opening…'}>
           Open the academy
         </Button>
-        <span className="soft">All of it can be changed later but the currency.</span>
+        <span className="soft">
+          The address, the time zone and the currency stay. The rest can be changed later.
+        </span>
       </p>
     </form>
   )
@@ -119,7 +90,7 @@ export function OpenAcademy({ onOpened }: { onOpened: (slug: string) => void }) 
 function useAddress(text: string, maySay: boolean): { isFree: boolean; suggestion: string } {
   const asked = useDeferredValue(text.trim().slice(0, 60))
   const { data } = useQuery({
-    ...routeQuery('academies.check-slug', { params: { slug: asked || '-' } }),
+    ...checkSlugQuery(asked || '-'),
     enabled: asked.length > 1 && maySay,
     retry: false,
   })

@@ -1,16 +1,11 @@
 import { useState } from 'react'
-import type { Sent } from '@marram/contract'
-import { call } from '../api/client'
 import { useForm } from '../api/form'
-import { useAcademyMutation } from '../api/mutation'
 import { Button } from '../ui/button'
 import { Field, SelectField, TextArea } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
 import { ACCENTS, accentName } from './accents'
-import type { Academy } from './queries'
-
-type Settings = Sent<'academies.change', 'body'>
+import { useChangeAcademy, type Academy } from './queries'
 
 /** What the public page says about the academy, and in what colour. */
 export function PageForm({ academy }: { academy: Academy }) {
@@ -22,15 +17,16 @@ export function PageForm({ academy }: { academy: Academy }) {
     accent: accentName(academy.accent),
   })
   const set = (change: Partial<typeof wanted>) => setWanted((had) => ({ ...had, ...change }))
-  const keep = useAcademyMutation(academy.slug, (body: Settings) =>
-    call('academies.change', { academy: academy.slug, body }),
-  )
-  const { form, errors, sentence, isSending } = useForm(async () => {
+  const keep = useChangeAcademy(academy.slug)
+  const send = async () => {
     const { accent: name, ...rest } = wanted
     const chosen = ACCENTS.find((each) => each.name === name)
     const colours = chosen ? { accent: chosen.accent, accentDusk: chosen.accentDusk } : {}
     await keep.mutateAsync({ ...rest, ...colours })
     toast('Kept. The page shows it now.')
+  }
+  const { form, errors, sentence, isSending } = useForm(send, {
+    beside: ['name', 'place', 'lead', 'address'],
   })
   return (
     <section aria-labelledby="the-page">

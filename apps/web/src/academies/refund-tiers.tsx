@@ -7,10 +7,14 @@ type Tiers = Academy['refundTiers']
 export function RefundTiers({
   tiers,
   onChange,
+  errors,
 }: {
   tiers: Tiers
   onChange: (tiers: Tiers) => void
+  /** Sentences by path, like `refundTiers.0.noticeHours`. */
+  errors: Readonly<Record<string, string>>
 }) {
+  const wrong = wrongParts(errors)
   const change = (at: number, part: Partial<Tiers[number]>) =>
     onChange(tiers.map((tier, index) => (index === at ? { ...tier, ...part } : tier)))
   return (
@@ -24,6 +28,7 @@ export function RefundTiers({
             type="number"
             min={0}
             max={1440}
+            isWrong={wrong.has(`${index}.noticeHours`)}
             value={String(tier.noticeHours)}
             onChange={(text) => change(index, { noticeHours: Number(text) })}
           />{' '}
@@ -33,6 +38,7 @@ export function RefundTiers({
             type="number"
             min={0}
             max={100}
+            isWrong={wrong.has(`${index}.refundBasisPoints`)}
             value={String(tier.refundBasisPoints / 100)}
             onChange={(text) =>
               change(index, { refundBasisPoints: Math.round(Number(text) * 100) })
@@ -50,6 +56,11 @@ export function RefundTiers({
           )}
         </Sentence>
       ))}
+      {[...wrong].map(([part, sentence]) => (
+        <p key={part} className="flagtext">
+          {sentence}
+        </p>
+      ))}
       {tiers.length < 6 && (
         <button
           type="button"
@@ -61,4 +72,25 @@ export function RefundTiers({
       )}
     </fieldset>
   )
+}
+
+const SENTENCES: Readonly<Record<string, (step: string) => string>> = {
+  noticeHours: (step) => `Step ${step}: notice is 0 to 1440 whole hours.`,
+  refundBasisPoints: (step) => `Step ${step}: the share that comes back is 0 to 100 %.`,
+}
+
+/**
+ * What is wrong with the steps, by step and part ("0.noticeHours"). Written here, because the API
+ * counts the share in hundredths of a per cent, which nobody typed.
+ */
+export function wrongParts(errors: Readonly<Record<string, string>>): Map<string, string> {
+  const parts = new Map<string, string>()
+  for (const [path, sentence] of Object.entries(errors)) {
+    const [field, index, part] = path.split('.')
+    if (field !== 'refundTiers') continue
+    const own = part === undefined ? undefined : SENTENCES[part]
+    const text = own && index !== undefined ? own(String(Number(index) + 1)) : sentence
+    parts.set(path.slice(field.length + 1), text)
+  }
+  return parts
 }

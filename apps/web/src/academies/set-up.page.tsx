@@ -1,47 +1,52 @@
-import { useQuery, useQueryClient } from '@tanstack/react-query'
+import { useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { useEffect } from 'react'
-import { Link, Navigate, useParams, useSearchParams } from 'react-router'
-import { call } from '../api/client'
-import { useAcademyMutation } from '../api/mutation'
+import { Link, Navigate, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router'
 import { sentenceOf } from '../api/problem'
-import { ConnectPayments, paymentsQuery } from '../checkout/connect-payments'
+import { together } from '../api/together'
+import { ConnectPayments } from '../checkout/connect-payments'
+import { paymentsQuery } from '../checkout/queries'
 import { CoachSection } from '../coaches/coach-section'
+import { coachesQuery } from '../coaches/queries'
 import { useTitle } from '../layouts/accent'
 import { useMay } from '../layouts/staff.layout'
 import { paths } from '../paths'
 import { Button, buttonClass } from '../ui/button'
+import { Notice } from '../ui/notice'
 import { PageHead } from '../ui/page-head'
 import { ErrorState, SkeletonRows } from '../ui/states'
 import { toast } from '../ui/toast'
+import { venuesQuery } from '../venues/queries'
 import { VenueSection } from '../venues/venue-section'
 import { PageForm } from './page-form'
 import { PolicyForm } from './policy-form'
-import { academyQuery, coachesQuery, venuesQuery } from './queries'
+import { academyQuery, usePublishAcademy, type Academy } from './queries'
 import { StaffSection } from './staff-section'
+
+export const loader =
+  (client: QueryClient) =>
+  ({ params }: LoaderFunctionArgs) => {
+    const slug = params['academy'] ?? ''
+    return Promise.allSettled([
+      client.query(academyQuery(slug)),
+      client.query(venuesQuery(slug)),
+      client.query(coachesQuery(slug)),
+    ])
+  }
 
 /** Everything an academy is made of before there is a clinic. */
 export default function SetUpPage() {
   const { academy: slug = '' } = useParams()
-  const [query] = useSearchParams()
-  const client = useQueryClient()
   const may = useMay()
   const academy = useQuery(academyQuery(slug))
   const venues = useQuery(venuesQuery(slug))
   const coaches = useQuery(coachesQuery(slug))
   useTitle(`Set-up – ${academy.data?.name ?? 'Marram'}`)
-  const isBack = query.has('payments')
-  useEffect(() => {
-    // The provider's page changed what the answer was; what was read before is out of date.
-    if (isBack) void client.invalidateQueries({ queryKey: paymentsQuery(slug).queryKey })
-  }, [client, isBack, slug])
-  const publish = useAcademyMutation(slug, (isPublished: boolean) =>
-    call('academies.publish', { academy: slug, body: { isPublished } }),
-  )
-  const error = academy.error ?? venues.error ?? coaches.error
+  const isBack = useBackFromProvider(slug)
+  const { error, retry } = together(academy, venues, coaches)
   if (error) {
     return (
       <main id="main" className="wrap py-8">
-        <ErrorState sentence={sentenceOf(error)} onRetry={() => void academy.refetch()} />
+        <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
       </main>
     )
   }
@@ -52,12 +57,53 @@ export default function SetUpPage() {
       </main>
     )
   }
-  const { publishedAt, name } = academy.data
-  const isLive = publishedAt !== null
   // Whoever is still opening the academy goes on there.
-  if (isBack && !isLive) return <Navigate to={`${paths.open()}?academy=${slug}`} replace />
+  if (isBack && academy.data.publishedAt === null) return <Navigate to={paths.open(slug)} replace />
   return (
     <main id="main" className="wrap">
+      <SetUpHead academy={academy.data} mayPublish={may('academy:change')} />
+      <VenueSection slug={slug} venues={venues.data.venues} mayChange={may('venues:change')} />
+      <CoachSection slug={slug} coaches={coaches.data.coaches} mayChange={may('coaches:change')} />
+      {may('staff:manage') && <StaffSection slug={slug} academy={academy.data} />}
+      {may('academy:change') && (
+        <>
+          <section aria-labelledby="payments">
+            <div className="sect mb-4">
+              <h2 id="payments">Payments</h2>
+            </div>
+            <ConnectPayments slug={slug} mayConnect={may('payments:connect')} kind="plain" />
+          </section>
+          <PageForm key={`page-${slug}`} academy={academy.data} />
+          <PolicyForm key={`policies-${slug}`} academy={academy.data} />
+        </>
+      )}
+    </main>
+  )
+}
+
+/** Whether the provider's page led back here; what was read of payments before is out of date then. */
+function useBackFromProvider(slug: string): boolean {
+  const [query] = useSearchParams()
+  const client = useQueryClient()
+  const isBack = query.has('payments')
+  useEffect(() => {
+    if (isBack) void client.invalidateQueries({ queryKey: paymentsQuery(slug).queryKey })
+  }, [client, isBack, slug])
+  return isBack
+}
+
+/** Whether golfers find the academy, and the press that changes it. */
+function SetUpHead({ academy, mayPublish }: { academy: Academy; mayPublish: boolean }) {
+  const { slug, name, publishedAt } = academy
+  const isLive = publishedAt !== null
+  const publish = usePublishAcademy(slug)
+  const press = () =>
+    publish.mutate(
+      { isPublished: !isLive },
+      { onSuccess: () => toast(isLive ? 'Taken off the page.' : 'Your page is live.') },
+    )
+  return (
+    <>
       <PageHead
         title="Set-up"
         sub={
@@ -70,14 +116,11 @@ export default function SetUpPage() {
             <Link className={buttonClass()} to={paths.academy(slug)}>
               See the page
             </Link>
-            {may('academy:change') && (
+            {mayPublish && (
               <Button
                 kind={isLive ? 'plain' : 'go'}
-                onClick={() =>
-                  publish.mutate(!isLive, {
-                    onSuccess: () => toast(isLive ? 'Taken off the page.' : 'Your page is live.'),
-                  })
-                }
+                waiting={publish.isPending && (isLive ? 'Taking it down…' : 'Putting it live…')}
+                onClick={press}
               >
                 {isLive ? 'Take the page down' : 'Put it live'}
               </Button>
@@ -85,21 +128,11 @@ export default function SetUpPage() {
           </>
         }
       />
-      <VenueSection slug={slug} venues={venues.data.venues} mayChange={may('venues:change')} />
-      <CoachSection slug={slug} coaches={coaches.data.coaches} mayChange={may('coaches:change')} />
-      {may('staff:manage') && <StaffSection slug={slug} academy={academy.data} />}
-      {may('academy:change') && (
-        <>
-          <section aria-labelledby="payments">
-            <div className="sect mb-4">
-              <h2 id="payments">Payments</h2>
-            </div>
-            <ConnectPayments slug={slug} mayConnect={may('payments:connect')} kind="plain" />
-          </section>
-          <PageForm key={`page-${name}`} academy={academy.data} />
-          <PolicyForm academy={academy.data} />
-        </>
+      {publish.error && (
+        <div className="mb-4">
+          <Notice kind="flag">{sentenceOf(publish.error)}</Notice>
+        </div>
       )}
-    </main>
+    </>
   )
 }

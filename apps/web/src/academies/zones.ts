@@ -4,10 +4,15 @@ export const zoneOptions = Intl.supportedValuesOf('timeZone')
   .map((zone) => ({ value: zone, label: `${zoneName(zone)} time` }))
   .sort((a, b) => a.label.localeCompare(b.label))
 
-export const ownZone = (): string => Intl.DateTimeFormat().resolvedOptions().timeZone
+const FALLBACK_ZONE = 'Europe/Dublin'
+
+/** The browser's zone where it is one of a place; a browser set to UTC says nothing of where it is. */
+export function ownZone(zone = Intl.DateTimeFormat().resolvedOptions().timeZone): string {
+  return zoneOptions.some(({ value }) => value === zone) ? zone : FALLBACK_ZONE
+}
 
 /** "Europe/Dublin" is Dublin. */
-export function zoneName(zone: string): string {
+function zoneName(zone: string): string {
   return (zone.split('/').at(-1) ?? zone).replaceAll('_', ' ')
 }
 

@@ -1,13 +1,15 @@
 import { paths } from '../paths'
-import type { Session } from './queries'
+import type { Membership, Session } from './queries'
 
-/** Where a person starts: the desk for staff, their golf for golfers. */
-export function homeOf({ memberships }: Session): string {
+/** Where a person starts in an academy: with what their widest role does there every day. */
+export function homeIn(academy: string, roles: Membership['roles']): string {
+  if (roles.includes('owner') || roles.includes('desk')) return paths.week(academy)
+  if (roles.includes('coach')) return paths.today(academy)
+  return roles.includes('bookkeeper') ? paths.money(academy) : paths.my(academy)
+}
+
+/** Where a person starts: in the first academy they belong to. */
+export function homeOf({ memberships }: Pick<Session, 'memberships'>): string {
   const [first] = memberships
-  if (!first) return paths.home()
-  const { slug } = first.academy
-  if (first.roles.includes('bookkeeper') && first.roles.length === 1) return paths.money(slug)
-  const isCoachOnly = first.roles.includes('coach') && !first.roles.includes('owner')
-  if (isCoachOnly) return paths.today(slug)
-  return first.roles.some((role) => role !== 'golfer') ? paths.week(slug) : paths.my(slug)
+  return first ? homeIn(first.academy.slug, first.roles) : paths.home()
 }

@@ -1,69 +1,78 @@
-import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
-import { useState, type SubmitEvent } from 'react'
+import { useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query'
+import { useState } from 'react'
 import { useNavigate } from 'react-router'
 import { call } from '../api/client'
+import { useForm } from '../api/form'
 import { sentenceOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
-import { SkeletonRows } from '../ui/states'
-import { useSession } from './queries'
+import { ErrorState, SkeletonRows } from '../ui/states'
+import { homeIn } from './home'
+import { forgetLinkSecret, takeLinkSecret } from './link-secret'
+import { invitationQuery, useSession, type Invitation } from './queries'
+import { inRole } from './role-words'
 import { SignInFields, useSignInFields } from './sign-in-fields'
+
+export const loader = (client: QueryClient) => () =>
+  // What is wrong with it is said on the page.
+  client.query(invitationQuery(takeLinkSecret('invitation'))).catch(() => undefined)
 
 /** Takes up an invitation, making the account on the way where there is none. */
 export default function InvitationPage() {
   useTitle('An invitation – Marram')
-  const token = location.hash.slice(1)
+  const [token] = useState(() => takeLinkSecret('invitation'))
+  const invitation = useQuery(invitationQuery(token))
+  return (
+    <main id="main" className="wrap narrow">
+      <div className="panel my-12 max-w-[34rem]">
+        <div className="pad">
+          {invitation.isPending && <SkeletonRows rows={3} />}
+          {invitation.isError && (
+            <ErrorState
+              sentence={sentenceOf(invitation.error)}
+              onRetry={() => void invitation.refetch()}
+            />
+          )}
+          {invitation.data && <TakeUp token={token} invitation={invitation.data} />}
+        </div>
+      </div>
+    </main>
+  )
+}
+
+function TakeUp({ token, invitation }: { token: string; invitation: Invitation }) {
+  const { academyName, email, role } = invitation
   const navigate = useNavigate()
   const client = useQueryClient()
   const { data: session } = useSession()
   const fields = useSignInFields()
-  const [error, setError] = useState('')
-  const invitation = useQuery({
-    queryKey: ['', 'invitation', token],
-    queryFn: () => call('invitations.read', { body: { token } }),
-    retry: false,
-  })
-  const accept = useMutation({
-    mutationFn: async () => {
-      if (!session?.account) await fields.submit()
-      return call('invitations.accept', { body: { token } })
-    },
-    onSuccess: async ({ slug, role }) => {
-      await client.invalidateQueries()
-      await navigate(role === 'coach' ? paths.today(slug) : paths.week(slug))
-    },
-    onError: (caught) => setError(sentenceOf(caught)),
-  })
-  const submit = (event: SubmitEvent) => {
-    event.preventDefault()
-    setError('')
-    accept.mutate()
+  const takeUp = async () => {
+    if (!session?.account) await fields.submit()
+    const { slug, role: taken } = await call('invitations.accept', { body: { token } })
+    forgetLinkSecret('invitation')
+    await client.invalidateQueries()
+    await navigate(homeIn(slug, [taken]))
   }
+  const { form, errors, sentence, isSending } = useForm(takeUp, { beside: ['account'] })
   return (
-    <main id="main" className="wrap narrow">
-      <div className="panel my-12 max-w-[34rem]">
-        <form className="pad" onSubmit={submit} noValidate>
-          {invitation.isPending && <SkeletonRows rows={3} />}
-          {invitation.error && <Notice kind="flag">{sentenceOf(invitation.error)}</Notice>}
-          {invitation.data && (
-            <>
-              <h1 className="mb-3">{invitation.data.academyName}</h1>
-              <p className="lead mb-4">
-                {invitation.data.email} is invited as {invitation.data.role}.
-              </p>
-              {error && <Notice kind="flag">{error}</Notice>}
-              {!session?.account && (
-                <SignInFields fields={fields} errors={{}} returnTo={`/invitation#${token}`} />
-              )}
-              <Button type="submit" kind="go" isWide isBig waiting={accept.isPending && 'Joining…'}>
-                Join {invitation.data.academyName}
-              </Button>
-            </>
-          )}
-        </form>
-      </div>
-    </main>
+    <form {...form}>
+      <h1 className="mb-3">{academyName}</h1>
+      <p className="lead mb-4">
+        {email} is invited {inRole(role)}.
+      </p>
+      {sentence && (
+        <div className="mb-4">
+          <Notice kind="flag">{sentence}</Notice>
+        </div>
+      )}
+      {!session?.account && (
+        <SignInFields fields={fields} errors={errors} returnTo={paths.invitation()} />
+      )}
+      <Button type="submit" kind="go" isWide isBig waiting={isSending && 'Joining…'}>
+        Join {academyName}
+      </Button>
+    </form>
   )
 }

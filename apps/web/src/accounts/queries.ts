@@ -1,11 +1,12 @@
 import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
 import type { Answer, Sent } from '@marram/contract'
 import { call } from '../api/client'
+import { routeQuery } from '../api/query'
+import { SESSION_KEY } from '../api/session-key'
+import { takeOver } from './take-over'
 
 export type Session = Answer<'session.read'>
 export type Membership = Session['memberships'][number]
-
-const SESSION_KEY = ['', 'session.read'] as const
 
 export const sessionQuery = queryOptions({
   queryKey: SESSION_KEY,
@@ -15,12 +16,26 @@ export const sessionQuery = queryOptions({
 
 export const useSession = () => useQuery(sessionQuery)
 
+/** Those whom a demonstration lets anybody be; an academy's own Marram has none. */
+export const demoPeopleQuery = () => routeQuery('demo.people', {})
+
+export type Invitation = Answer<'invitations.read'>
+
+/** What an invitation is to, by the secret of its link. It is read with a POST, to keep it secret. */
+export const invitationQuery = (token: string) =>
+  queryOptions({
+    queryKey: ['', 'invitations.read', token],
+    queryFn: ({ signal }) => call('invitations.read', { body: { token }, signal }),
+    // It says the same until it is taken up, and after that it is gone: it is asked for once.
+    staleTime: 'static',
+  })
+
 /** The roles of the person in an academy; none for a visitor. */
 export function rolesIn(session: Session | undefined, academy: string): Membership['roles'] {
   return session?.memberships.find((entry) => entry.academy.slug === academy)?.roles ?? []
 }
 
-/** Signs in, or up: both answer with the new session, and whatever was asked before is asked anew. */
+/** Signs in, or up: both answer with the new session, which takes over from the one before. */
 export function useSignIn() {
   const client = useQueryClient()
   return useMutation({
@@ -44,9 +59,4 @@ export function useSignOut() {
       call(options.isEverywhere ? 'session.sign-out-everywhere' : 'session.sign-out', {}),
     onSuccess: () => client.clear(),
   })
-}
-
-function takeOver(client: ReturnType<typeof useQueryClient>, session: Session): void {
-  client.setQueryData(SESSION_KEY, session)
-  void client.invalidateQueries({ predicate: ({ queryKey }) => queryKey !== SESSION_KEY })
 }

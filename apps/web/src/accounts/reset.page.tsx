@@ -1,8 +1,8 @@
-import { useState, type SubmitEvent } from 'react'
+import { useQueryClient } from '@tanstack/react-query'
+import { useState } from 'react'
 import { useNavigate } from 'react-router'
-import { useMutation } from '@tanstack/react-query'
 import { call } from '../api/client'
-import { sentenceOf } from '../api/problem'
+import { useForm } from '../api/form'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
 import { Button } from '../ui/button'
@@ -25,12 +25,13 @@ export default function ResetPage() {
 
 function Ask() {
   const [email, setEmail] = useState('')
-  const ask = useMutation({ mutationFn: () => call('accounts.ask-reset', { body: { email } }) })
-  const submit = (event: SubmitEvent) => {
-    event.preventDefault()
-    ask.mutate()
+  const [isAsked, setIsAsked] = useState(false)
+  const ask = async () => {
+    await call('accounts.ask-reset', { body: { email } })
+    setIsAsked(true)
   }
-  if (ask.isSuccess) {
+  const { form, errors, sentence, isSending } = useForm(ask, { beside: ['email'] })
+  if (isAsked) {
     return (
       <Notice kind="ok">
         If {email} has an account, a mail is on its way. Its link works for one hour.
@@ -38,17 +39,18 @@ function Ask() {
     )
   }
   return (
-    <form onSubmit={submit} noValidate>
+    <form {...form}>
       <h1 className="mb-4">A new password</h1>
-      {ask.error && <Notice kind="flag">{sentenceOf(ask.error)}</Notice>}
+      {sentence && <Notice kind="flag">{sentence}</Notice>}
       <Field
         label="E-mail"
         type="email"
         autoComplete="email"
         value={email}
         onChange={(event) => setEmail(event.target.value)}
+        error={errors['email']}
       />
-      <Button type="submit" kind="go" isWide isBig waiting={ask.isPending && 'Asking…'}>
+      <Button type="submit" kind="go" isWide isBig waiting={isSending && 'Asking…'}>
         Send me a link
       </Button>
     </form>
@@ -58,21 +60,19 @@ function Ask() {
 function Choose({ secret }: { secret: string }) {
   const [password, setPassword] = useState('')
   const navigate = useNavigate()
-  const reset = useMutation({
-    mutationFn: () => call('accounts.reset', { body: { token: secret, password } }),
-    onSuccess: async () => {
-      toast('The new password is set, and you are signed in.')
-      await navigate(paths.home())
-    },
-  })
-  const submit = (event: SubmitEvent) => {
-    event.preventDefault()
-    reset.mutate()
+  const client = useQueryClient()
+  const reset = async () => {
+    await call('accounts.reset', { body: { token: secret, password } })
+    // Whoever was signed in here before left nothing for the next.
+    client.clear()
+    toast('The new password is set, and you are signed in.')
+    await navigate(paths.home())
   }
+  const { form, errors, sentence, isSending } = useForm(reset, { beside: ['password'] })
   return (
-    <form onSubmit={submit} noValidate>
+    <form {...form}>
       <h1 className="mb-4">Choose a new password</h1>
-      {reset.error && <Notice kind="flag">{sentenceOf(reset.error)}</Notice>}
+      {sentence && <Notice kind="flag">{sentence}</Notice>}
       <Field
         label="New password"
         type="password"
@@ -80,8 +80,9 @@ function Choose({ secret }: { secret: string }) {
         hint="Twelve characters or more. It signs you out everywhere else."
         value={password}
         onChange={(event) => setPassword(event.target.value)}
+        error={errors['password']}
       />
-      <Button type="submit" kind="go" isWide isBig waiting={reset.isPending && 'Setting…'}>
+      <Button type="submit" kind="go" isWide isBig waiting={isSending && 'Setting…'}>
         Set the password
       </Button>
     </form>

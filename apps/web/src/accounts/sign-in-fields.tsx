@@ -1,4 +1,5 @@
 import { useState } from 'react'
+import { asPart } from '../api/as-part'
 import { paths } from '../paths'
 import { Drawing } from '../ui/drawing'
 import { Field } from '../ui/field'
@@ -10,7 +11,7 @@ export interface SignInFieldsState {
   email: string
   password: string
   set: (change: Partial<{ name: string; email: string; password: string }>) => void
-  /** Signs up, or in: the same address and password serve both. */
+  /** Signs up, or in: the same address and password serve both. Its fields are wrong as `account`. */
   submit: () => Promise<unknown>
 }
 
@@ -20,7 +21,7 @@ export function useSignInFields(): SignInFieldsState {
   return {
     ...fields,
     set: (change) => setFields((had) => ({ ...had, ...change })),
-    submit: () => signUp.mutateAsync(fields),
+    submit: () => asPart('account', signUp.mutateAsync(fields)),
   }
 }
 
@@ -45,7 +46,7 @@ export function SignInFields(props: {
         autoComplete="name"
         value={fields.name}
         onChange={(event) => fields.set({ name: event.target.value })}
-        error={errors['name']}
+        error={errors['account.name']}
       />
       <Field
         label="E-mail"
@@ -53,7 +54,7 @@ export function SignInFields(props: {
         autoComplete="email"
         value={fields.email}
         onChange={(event) => fields.set({ email: event.target.value })}
-        error={errors['email']}
+        error={errors['account.email']}
       />
       <Field
         label="Password"
@@ -62,7 +63,7 @@ export function SignInFields(props: {
         hint="Been here before? Your old password signs you in. New? Twelve characters or more make your account."
         value={fields.password}
         onChange={(event) => fields.set({ password: event.target.value })}
-        error={errors['password']}
+        error={errors['account.password']}
       />
     </>
   )

@@ -1,16 +1,17 @@
-import { useQuery } from '@tanstack/react-query'
-import { useRef, useState, type SubmitEvent } from 'react'
+import type { QueryClient } from '@tanstack/react-query'
+import { useState } from 'react'
 import { Link, useNavigate, useSearchParams } from 'react-router'
-import { routeQuery } from '../api/query'
-import { ApiProblem } from '../api/problem'
+import { useForm } from '../api/form'
+import { problemOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
 import { Button, buttonClass } from '../ui/button'
 import { Drawing } from '../ui/drawing'
-import { Field, focusFirstWrong } from '../ui/field'
+import { Field } from '../ui/field'
 import { Notice } from '../ui/notice'
+import { DemoPeople } from './demo-people'
 import { homeOf } from './home'
-import { useSignIn } from './queries'
+import { demoPeopleQuery, useSignIn } from './queries'
 import { returnPath } from './return-path'
 
 const GOOGLE_SAID: Record<string, string> = {
@@ -18,43 +19,42 @@ const GOOGLE_SAID: Record<string, string> = {
   unconfirmed: 'That Google account has no confirmed address. Use your e-mail and a password.',
 }
 
+export const loader = (client: QueryClient) => () =>
+  // Only a demonstration has people to look around as.
+  client.query(demoPeopleQuery()).catch(() => undefined)
+
 export default function SignInPage() {
   useTitle('Sign in – Marram')
   const [query] = useSearchParams()
   const navigate = useNavigate()
-  const form = useRef<HTMLFormElement>(null)
   const [email, setEmail] = useState('')
   const [password, setPassword] = useState('')
-  const [problem, setProblem] = useState<ApiProblem | null>(null)
   const signIn = useSignIn()
   const to = returnPath(query.get('to'))
   const google = GOOGLE_SAID[query.get('google') ?? '']
 
-  const go = async (body: { email: string; password: string }) => {
-    setProblem(null)
-    try {
-      const session = await signIn.mutateAsync(body)
-      await navigate(to ?? homeOf(session))
-    } catch (error) {
-      if (error instanceof ApiProblem) setProblem(error)
-      focusFirstWrong(form.current)
-    }
+  const enter = async (body: { email: string; password: string }) => {
+    const session = await signIn.mutateAsync(body)
+    await navigate(to ?? homeOf(session))
   }
-  const submit = (event: SubmitEvent) => {
-    event.preventDefault()
-    void go({ email, password })
+  const { form, errors, sentence, refuse } = useForm(() => enter({ email, password }), {
+    beside: ['email', 'password'],
+  })
+  const lookAround = (body: { email: string; password: string }) => {
+    refuse(null)
+    enter(body).catch((error: unknown) => refuse(problemOf(error)))
   }
 
   return (
     <main id="main" className="wrap narrow">
       <div className="cols paycols pt-12">
         <div className="panel">
-          <form className="pad" ref={form} onSubmit={submit} noValidate aria-label="Sign in">
+          <form {...form} className="pad" aria-label="Sign in">
             <h1 className="mb-4">Sign in</h1>
             {google && <Notice kind="flag">{google}</Notice>}
-            {problem && Object.keys(problem.fields).length === 0 && (
+            {sentence && (
               <div className="mb-4">
-                <Notice kind="flag">{problem.message}</Notice>
+                <Notice kind="flag">{sentence}</Notice>
               </div>
             )}
             <a className={buttonClass({ isWide: true })} href={paths.google(to ?? '/')}>
@@ -70,7 +70,7 @@ export default function SignInPage() {
               autoComplete="email"
               value={email}
               onChange={(event) => setEmail(event.target.value)}
-              error={problem?.fields['email']}
+              error={errors['email']}
             />
             <Field
               label="Password"
@@ -78,7 +78,7 @@ export default function SignInPage() {
               autoComplete="current-password"
               value={password}
               onChange={(event) => setPassword(event.target.value)}
-              error={problem?.fields['password']}
+              error={errors['password']}
             />
             <Button
               type="submit"
@@ -94,47 +94,8 @@ export default function SignInPage() {
             </p>
           </form>
         </div>
-        <DemoPeople onPick={(body) => void go(body)} />
+        <DemoPeople onPick={lookAround} />
       </div>
     </main>
-  )
-}
-
-function DemoPeople({ onPick }: { onPick: (body: { email: string; password: string }) => void }) {
-  const demo = useQuery({ ...routeQuery('demo.people', {}), retry: false })
-  if (!demo.data) {
-    return (
-      <div>
-        <h2>New here?</h2>
-        <p className="lead my-3">
-          Take a place in a clinic and your account is made on the way. There is nothing to fill in
-          before you have seen a price.
-        </p>
-        <Link to={paths.open()}>Open an academy of your own</Link>
-      </div>
-    )
-  }
-  const { people, password } = demo.data
-  return (
-    <div>
-      <h2>Look around as</h2>
-      <p className="soft my-3">Invented people of two invented academies. Press one to sign in.</p>
-      <ul className="reg">
-        {people.map((person) => (
-          <li key={person.email}>
-            <button
-              type="button"
-              className="person"
-              onClick={() => onPick({ email: person.email, password })}
-            >
-              <b>{person.name}</b>
-              <small>
-                {person.what}, {person.academy}
-              </small>
-            </button>
-          </li>
-        ))}
-      </ul>
-    </div>
   )
 }

@@ -1,5 +1,6 @@
 import { useMutation } from '@tanstack/react-query'
 import { call } from '../api/client'
+import { sentenceOf } from '../api/problem'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { useSession } from './queries'
@@ -24,6 +25,7 @@ export function VerifyReminder() {
         {send.isSuccess
           ? `A mail is on its way to ${account.email}.`
           : `Please confirm ${account.email}: the link is in your mail.`}
+        {send.error && <p className="flagtext">{sentenceOf(send.error)}</p>}
       </Notice>
     </div>
   )

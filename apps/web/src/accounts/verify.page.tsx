@@ -1,4 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
+import { useState } from 'react'
 import { Link } from 'react-router'
 import { call } from '../api/client'
 import { sentenceOf } from '../api/problem'
@@ -6,17 +7,21 @@ import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
 import { Button, buttonClass } from '../ui/button'
 import { Notice } from '../ui/notice'
+import { forgetLinkSecret, takeLinkSecret } from './link-secret'
 import { useSession } from './queries'
 
 /** Confirms an address: only for who is signed in to the account, and only when they press. */
 export default function VerifyPage() {
   useTitle('Confirm your address – Marram')
-  const secret = location.hash.slice(1)
+  const [secret] = useState(() => takeLinkSecret('verify'))
   const client = useQueryClient()
   const { data: session, isPending } = useSession()
   const verify = useMutation({
     mutationFn: () => call('accounts.verify', { body: { token: secret } }),
-    onSuccess: () => client.invalidateQueries(),
+    onSuccess: () => {
+      forgetLinkSecret('verify')
+      return client.invalidateQueries()
+    },
   })
   return (
     <main id="main" className="wrap narrow py-12">
@@ -42,7 +47,7 @@ export default function VerifyPage() {
       ) : (
         <>
           <p className="lead mb-4">Sign in first, then this link works.</p>
-          <Link className={buttonClass({ kind: 'go' })} to={paths.signIn(`/verify#${secret}`)}>
+          <Link className={buttonClass({ kind: 'go' })} to={paths.signIn(paths.verify())}>
             Sign in
           </Link>
         </>

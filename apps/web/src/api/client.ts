@@ -16,6 +16,7 @@ export type CallInput<K extends RouteKey> = Part<K, 'query'> &
 /** Calls a route of the API. Throws an `ApiProblem` with a sentence for every refusal. */
 export async function call<K extends RouteKey>(key: K, input: CallInput<K>): Promise<Answer<K>> {
   const { method } = ROUTES[key]
+  // Each route has its own shape; sending it takes only what all shapes share.
   const loose = input as {
     academy?: string
     params?: Record<string, string>
@@ -25,8 +26,9 @@ export async function call<K extends RouteKey>(key: K, input: CallInput<K>): Pro
   }
   const path = addressOf(key, loose)
   const answer = await send(method, path, loose)
-  if (answer.status === 403 && method !== 'GET' && (await isOutOfDate(answer))) {
-    // The token belongs to an earlier sign-in of another tab: take the new one and try once more.
+  if (method !== 'GET' && (await isOutOfDate(key, answer))) {
+    // The token belongs to an earlier sign-in, of another tab or one that has ended: take the new
+    // one and try once more.
     await send('GET', ROUTES['session.read'].path, {})
     return read<K>(await send(method, path, loose))
   }
@@ -73,18 +75,31 @@ async function send(
   }
 }
 
-async function isOutOfDate(response: Response): Promise<boolean> {
-  const document = (await response.clone().json()) as ProblemDocument
-  return document.code === 'foreign-origin'
+async function isOutOfDate(key: RouteKey, response: Response): Promise<boolean> {
+  if (response.status !== 403 && response.status !== 401) return false
+  const code = await codeOf(response.clone())
+  // A public route asks for no sign-in, so what is missing there is a token of now.
+  return code === 'foreign-origin' || (code === 'not-signed-in' && ROUTES[key].access === 'public')
 }
 
+/** The code of a refusal; undefined where it is not the API that refused, but something before it. */
+async function codeOf(response: Response): Promise<string | undefined> {
+  if (!isJson(response)) return undefined
+  // A refusal in JSON is a problem document: the API writes no other.
+  const document = (await response.json()) as ProblemDocument
+  return document.code
+}
+
+const isJson = (response: Response): boolean =>
+  (response.headers.get('content-type') ?? '').includes('json')
+
 async function read<K extends RouteKey>(response: Response): Promise<Answer<K>> {
-  const type = response.headers.get('content-type') ?? ''
-  if (!type.includes('json')) {
+  if (!isJson(response)) {
     const detail = 'The server gave an answer that this page does not understand.'
     throw new ApiProblem({ code: 'unexpected', status: response.status, detail })
   }
   const answer: unknown = await response.json()
+  // A refusal in JSON is a problem document: the API writes no other.
   if (!response.ok) throw fromDocument(answer as ProblemDocument)
   // The contract says what this route answers; the API's tests hold it to that.
   return answer as Answer<K>

@@ -4,6 +4,7 @@ let waiting: { key: string; answer: unknown } | null | undefined
 export function takePageData(address: string): unknown {
   if (waiting === undefined) {
     const text = document.getElementById('page-data')?.textContent
+    // The server writes this script itself, in this one shape.
     waiting = text ? (JSON.parse(text) as { key: string; answer: unknown }) : null
   }
   if (waiting?.key !== address) return undefined

@@ -23,11 +23,18 @@ export const noConnection = () =>
   new ApiProblem({
     code: 'no-connection',
     status: 0,
-    detail: 'No connection. Nothing was lost; try again when there is signal.',
+    detail: 'No connection. Please try again when there is signal.',
   })
 
 export function fromDocument(document: ProblemDocument): ApiProblem {
   return new ApiProblem(document)
+}
+
+/** Anything that was thrown, as a refusal with a sentence. What is no refusal is a fault, and told. */
+export function problemOf(error: unknown): ApiProblem {
+  if (error instanceof ApiProblem) return error
+  reportError(error)
+  return new ApiProblem({ code: 'unexpected', status: 0, detail: sentenceOf(error) })
 }
 
 /** The sentence to show for anything that was thrown. */

@@ -1,16 +1,12 @@
-import { MutationCache, QueryClient } from '@tanstack/react-query'
+import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query'
 import { ApiProblem } from './problem'
+import { SESSION_KEY } from './session-key'
 
 const MOST_RETRIES = 2
 
 export const queryClient = new QueryClient({
-  mutationCache: new MutationCache({
-    // The sign-in has ended elsewhere: asked anew, so that a form can offer it beside what is typed.
-    onError: (error) => {
-      if (!(error instanceof ApiProblem) || error.code !== 'not-signed-in') return
-      void queryClient.invalidateQueries({ queryKey: ['', 'session.read'] })
-    },
-  }),
+  queryCache: new QueryCache({ onError: noticeSignedOut }),
+  mutationCache: new MutationCache({ onError: noticeSignedOut }),
   defaultOptions: {
     // Without a connection a press fails and says so. The library's own way is to wait, and to send
     // a payment or a giving-up by itself, minutes later, when nobody expects it any more.
@@ -25,3 +21,9 @@ export const queryClient = new QueryClient({
     },
   },
 })
+
+/** The sign-in has ended elsewhere: asked anew, so that the page can offer it beside what is typed. */
+function noticeSignedOut(error: Error): void {
+  if (!(error instanceof ApiProblem) || error.code !== 'not-signed-in') return
+  void queryClient.invalidateQueries({ queryKey: SESSION_KEY })
+}

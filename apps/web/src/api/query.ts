@@ -9,12 +9,14 @@ import { takePageData } from './page-data'
  * every answer of a route, or of an academy, be asked for again.
  */
 export function routeQuery<K extends RouteKey>(key: K, input: CallInput<K>) {
+  // Each route has its own shape; its address takes only what all shapes share.
   const loose = input as Parameters<typeof addressOf>[1]
   const address = addressOf(key, loose)
   return queryOptions({
     queryKey: [loose.academy ?? '', key, address],
     queryFn: ({ signal }) => call(key, { ...input, signal }),
-    // What came inside the page's HTML was true a moment ago; the server wrote what the route answers.
+    // What came inside the page's HTML was true a moment ago; the server wrote there what the route
+    // answers at this address, so it is of the route's type.
     initialData: () => takePageData(address) as Answer<K> | undefined,
   })
 }

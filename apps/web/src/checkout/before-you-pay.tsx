@@ -1,5 +1,4 @@
-import type { Format } from '../academies/format'
-import { taxInWords } from '../academies/format'
+import { taxInWords, type Format } from '../academies/format'
 import { sentenceOf } from '../api/problem'
 import { refundInWords } from '../clinics/refund-words'
 import type { AcademyFace } from '../clinics/queries'
@@ -17,34 +16,12 @@ export function BeforeYouPay(props: {
   format: Format
   isBack: boolean
 }) {
-  const { enrolment, academy, format, isBack } = props
-  const pay = useGoToPayment(academy.slug, enrolment.id)
-  const atDesk = usePayAtDesk(academy.slug, enrolment.id)
-  const letGo = useLetGo(academy.slug, enrolment.id)
-  const until = enrolment.heldUntil ? format.time(enrolment.heldUntil) : ''
-  const error = pay.error ?? atDesk.error ?? letGo.error
-  const isCard = enrolment.payMode === 'card'
-  const isDeclined = enrolment.payment === 'declined'
+  const { enrolment, academy, format } = props
   return (
     <>
       <h1>{enrolment.isOffer ? 'A place is free for you' : 'Before you pay'}</h1>
       <div className="my-5 grid gap-3">
-        {isDeclined ? (
-          <Notice kind="flag">
-            <b>The payment did not go through.</b> Your bank said no. Nothing was taken, and the
-            place is held until {until}.
-          </Notice>
-        ) : isBack ? (
-          <Notice>
-            <b>Waiting for word of your payment.</b> This takes a few seconds; the place is held
-            meanwhile.
-          </Notice>
-        ) : (
-          <Notice>
-            The place is held until <b>{until}</b>.
-          </Notice>
-        )}
-        {error && <Notice kind="flag">{sentenceOf(error)}</Notice>}
+        <HeldNotice {...props} />
       </div>
       <div className="cols">
         <Facts
@@ -72,44 +49,87 @@ export function BeforeYouPay(props: {
                 ['To pay', format.money(enrolment.totalMinor)],
               ]}
             />
-            {isCard && (
-              <Button
-                kind="go"
-                isWide
-                isBig
-                waiting={(pay.isPending || pay.isSuccess) && 'Going to payment…'}
-                onClick={() => pay.mutate()}
-              >
-                {isDeclined ? 'Try again' : 'Go to payment'}
-              </Button>
-            )}
-            {(academy.canPayAtDesk || !isCard) && (
-              <div className="mt-3">
-                <Button
-                  kind={isCard ? 'plain' : 'go'}
-                  isWide
-                  waiting={atDesk.isPending && 'Taking the place…'}
-                  onClick={() => atDesk.mutate()}
-                >
-                  Pay at the desk instead
-                </Button>
-              </div>
-            )}
-            <div className="mt-3">
-              <Button
-                kind="quiet"
-                waiting={letGo.isPending && 'Letting go…'}
-                onClick={() => letGo.mutate()}
-              >
-                Let the place go
-              </Button>
-            </div>
+            <WaysToPay enrolment={enrolment} academy={academy} />
             <p className="hint mt-3">
-              {isCard && 'Card numbers are typed on the payment provider’s page only. '}
+              {enrolment.payMode === 'card' &&
+                'Card numbers are typed on the payment provider’s page only. '}
               {taxInWords(academy)}
             </p>
           </div>
         </div>
+      </div>
+    </>
+  )
+}
+
+/** Until when the place is held, and how its payment stands. */
+function HeldNotice(props: { enrolment: Enrolment; format: Format; isBack: boolean }) {
+  const { enrolment, format, isBack } = props
+  const until = enrolment.heldUntil ? format.time(enrolment.heldUntil) : ''
+  if (enrolment.payment === 'declined') {
+    return (
+      <Notice kind="flag">
+        <b>The payment did not go through.</b> Your bank said no. Nothing was taken, and the place
+        is held until {until}.
+      </Notice>
+    )
+  }
+  if (isBack) {
+    return (
+      <Notice>
+        <b>Waiting for word of your payment.</b> This takes a few seconds; the place is held
+        meanwhile.
+      </Notice>
+    )
+  }
+  return (
+    <Notice>
+      The place is held until <b>{until}</b>.
+    </Notice>
+  )
+}
+
+/** By card, at the desk, or not at all; why a press was refused stands above them. */
+function WaysToPay({ enrolment, academy }: { enrolment: Enrolment; academy: AcademyFace }) {
+  const pay = useGoToPayment(academy.slug, enrolment.id)
+  const atDesk = usePayAtDesk(academy.slug, enrolment.id)
+  const letGo = useLetGo(academy.slug, enrolment.id)
+  const error = pay.error ?? atDesk.error ?? letGo.error
+  const isCard = enrolment.payMode === 'card'
+  return (
+    <>
+      {error && <Notice kind="flag">{sentenceOf(error)}</Notice>}
+      {isCard && (
+        <Button
+          kind="go"
+          isWide
+          isBig
+          waiting={(pay.isPending || pay.isSuccess) && 'Going to payment…'}
+          onClick={() => pay.mutate()}
+        >
+          {enrolment.payment === 'declined' ? 'Try again' : 'Go to payment'}
+        </Button>
+      )}
+      {(academy.canPayAtDesk || !isCard) && (
+        <div className="mt-3">
+          <Button
+            kind={isCard ? 'plain' : 'go'}
+            isWide
+            waiting={atDesk.isPending && 'Taking the place…'}
+            onClick={() => atDesk.mutate()}
+          >
+            {isCard ? 'Pay at the desk instead' : 'Pay at the desk'}
+          </Button>
+        </div>
+      )}
+      <div className="mt-3">
+        <Button
+          kind="quiet"
+          waiting={letGo.isPending && 'Letting go…'}
+          onClick={() => letGo.mutate()}
+        >
+          Let the place go
+        </Button>
       </div>
     </>
   )

@@ -21,15 +21,15 @@ export function ConfirmedPlace(props: {
     <>
       <h1>{clinic.title}</h1>
       <div className="my-5">
-        {enrolment.payment === 'at-desk' ? (
+        {enrolment.owedMinor > 0 ? (
           <Notice kind="ok">
-            <b>The place is yours.</b> {format.money(enrolment.totalMinor)} is to be paid at the
+            <b>The place is yours.</b> {format.money(enrolment.owedMinor)} is to be paid at the
             desk.
           </Notice>
         ) : (
           <Notice kind="ok">
-            <b>{isBack ? 'Paid: the place is yours.' : 'The place is yours.'}</b> A mail with the
-            dates for your calendar is on its way.
+            <b>{isBack ? 'Paid: the place is yours.' : 'The place is yours.'}</b> The dates for your
+            calendar come by mail.
           </Notice>
         )}
       </div>
@@ -54,35 +54,42 @@ export function ConfirmedPlace(props: {
           ]}
         />
         <div>
-          <div className="card">
-            <table className="sc">
-              <thead>
-                <tr>
-                  <th scope="col">Session</th>
-                  <th scope="col">When</th>
-                  <th scope="col" className="ctr">
-                    Mark
-                  </th>
-                </tr>
-              </thead>
-              <tbody>
-                {enrolment.places.map((place) => (
-                  <tr key={place.id}>
-                    <th scope="row">{place.number}</th>
-                    <td className={place.isCalledOff ? 'off' : undefined}>
-                      {format.day(place.startsAt)}, {format.time(place.startsAt)}
-                    </td>
-                    <td className="mk">
-                      {place.isCalledOff ? 'Called off' : <Mark mark={place.mark ?? 'not-yet'} />}
-                    </td>
-                  </tr>
-                ))}
-              </tbody>
-            </table>
-          </div>
-          <GiveUp enrolment={enrolment} academy={academy} format={format} />
+          <DatesCard enrolment={enrolment} format={format} />
+          <GiveUp academy={academy.slug} enrolment={enrolment} format={format} />
         </div>
       </div>
     </>
+  )
+}
+
+/** Every session of the place, with its mark once there is one. */
+function DatesCard({ enrolment, format }: { enrolment: Enrolment; format: Format }) {
+  return (
+    <div className="card">
+      <table className="sc">
+        <thead>
+          <tr>
+            <th scope="col">Session</th>
+            <th scope="col">When</th>
+            <th scope="col" className="ctr">
+              Mark
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {enrolment.places.map((place) => (
+            <tr key={place.id}>
+              <th scope="row">{place.number}</th>
+              <td className={place.isCalledOff ? 'off' : undefined}>
+                {format.day(place.startsAt)}, {format.time(place.startsAt)}
+              </td>
+              <td className="mk">
+                {place.isCalledOff ? 'Called off' : <Mark mark={place.mark ?? 'not-yet'} />}
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
   )
 }

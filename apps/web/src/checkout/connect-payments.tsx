@@ -3,16 +3,14 @@ import { useState } from 'react'
 import { call } from '../api/client'
 import { useAcademyMutation } from '../api/mutation'
 import { sentenceOf } from '../api/problem'
-import { routeQuery } from '../api/query'
 import { Button, type ButtonKind } from '../ui/button'
 import { Notice } from '../ui/notice'
-import { SkeletonRows } from '../ui/states'
-
-export const paymentsQuery = (academy: string) => routeQuery('payments.read', { academy })
+import { ErrorState, SkeletonRows } from '../ui/states'
+import { paymentsQuery } from './queries'
 
 /** How the academy is paid: connected, under way, or still to be begun on the provider's page. */
 export function ConnectPayments(props: { slug: string; mayConnect: boolean; kind: ButtonKind }) {
-  const { data } = useQuery(paymentsQuery(props.slug))
+  const payments = useQuery(paymentsQuery(props.slug))
   const [error, setError] = useState('')
   const connect = useAcademyMutation(props.slug, () =>
     call('payments.connect', { academy: props.slug }),
@@ -26,6 +24,12 @@ export function ConnectPayments(props: { slug: string; mayConnect: boolean; kind
       setError(sentenceOf(caught))
     }
   }
+  if (payments.isError) {
+    return (
+      <ErrorState sentence={sentenceOf(payments.error)} onRetry={() => void payments.refetch()} />
+    )
+  }
+  const { data } = payments
   if (!data) return <SkeletonRows rows={1} />
   if (data.state === 'ready') {
     return (

@@ -5,14 +5,8 @@ import type { Enrolment } from '../enrolments/queries'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
 import { Notice } from '../ui/notice'
+import { endedInWords } from './ended-words'
 import { OwedPlaces } from './owed-places'
-
-const SAID: Record<NonNullable<Enrolment['endedBecause']>, string> = {
-  lapsed: 'The time to pay ran out, and the place went to the next person. Nothing was taken.',
-  'given-up': 'You gave this place up.',
-  'called-off': 'The sessions of this place were called off.',
-  'let-go': 'You let this place go. Nothing was taken.',
-}
 
 /** A place that has ended: why, what is owed for it, and what else there is. */
 export function EndedPlace(props: { enrolment: Enrolment; academy: AcademyFace; format: Format }) {
@@ -22,7 +16,7 @@ export function EndedPlace(props: { enrolment: Enrolment; academy: AcademyFace; 
       <h1>{enrolment.clinic.title}</h1>
       <div className="my-5">
         <Notice kind={enrolment.endedBecause === 'lapsed' ? 'flag' : 'haar'}>
-          {SAID[enrolment.endedBecause ?? 'lapsed']}
+          {endedInWords(enrolment)}
         </Notice>
       </div>
       <OwedPlaces enrolment={enrolment} academy={academy} format={format} />

@@ -10,6 +10,7 @@ import { ErrorState, SkeletonRows } from '../ui/states'
 import { BeforeYouPay } from './before-you-pay'
 import { ConfirmedPlace } from './confirmed-place'
 import { EndedPlace } from './ended-place'
+import { nextLookMs } from './next-look'
 
 export const loader =
   (client: QueryClient) =>
@@ -21,8 +22,6 @@ export const loader =
     ])
   }
 
-const LOOK_AGAIN_MS = 1_000
-
 /** One place, however it stands: to be paid, paid, declined, run out, given up. */
 export default function PlacePage() {
   const { academy: slug = '', enrolmentId = '' } = useParams()
@@ -31,11 +30,7 @@ export default function PlacePage() {
   const { data: page } = useQuery(academyPageQuery(slug))
   const place = useQuery({
     ...enrolmentQuery(slug, enrolmentId),
-    // After paying, the provider's word takes a moment to arrive.
-    refetchInterval: ({ state }) =>
-      state.data?.state === 'held' && (isBack || state.data.payment !== 'none')
-        ? LOOK_AGAIN_MS
-        : false,
+    refetchInterval: ({ state }) => nextLookMs(state.data, { isBack, nowMs: Date.now() }),
   })
   useTitle(place.data?.clinic.title)
   if (!page || place.isPending) {

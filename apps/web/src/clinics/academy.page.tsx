@@ -1,18 +1,18 @@
 import { useSuspenseQuery } from '@tanstack/react-query'
 import type { QueryClient } from '@tanstack/react-query'
-import { useState } from 'react'
-import { Link, useParams, type LoaderFunctionArgs } from 'react-router'
-import { makeFormat, taxInWords, type Format } from '../academies/format'
+import { Link, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router'
+import { makeFormat, taxInWords } from '../academies/format'
 import { useAccent, useTitle } from '../layouts/accent'
 import { PublicNav } from '../layouts/public-bar'
 import { PublicFoot } from '../layouts/public-foot'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
+import { Initials } from '../ui/initials'
 import { placesLeft } from '../ui/place-ticks'
 import { EmptyState } from '../ui/states'
 import { ClinicFilter } from './clinic-filter'
 import { ClinicLine } from './clinic-line'
-import { NO_FILTER, filterClinics, type Filter } from './filter'
+import { NO_FILTER, filterClinics, filterOf, queryOf, type Filter } from './filter'
 import { academyPageQuery, type AcademyPage, type PageClinic } from './queries'
 
 export const loader =
@@ -23,22 +23,25 @@ export const loader =
 export default function AcademyPageView() {
   const { academy: slug = '' } = useParams()
   const { data: page } = useSuspenseQuery(academyPageQuery(slug))
-  const [filter, setFilter] = useState<Filter>(NO_FILTER)
+  const [query, setQuery] = useSearchParams()
+  const filter = filterOf(query)
+  // In the address, so that it is there again after Back; no step of its own, so that Back leaves.
+  const setFilter = (next: Filter) =>
+    setQuery(queryOf(next), { replace: true, preventScrollReset: true })
   const { academy } = page
   useAccent(academy)
   useTitle(`${academy.name}: golf clinics in ${academy.place}`)
-  const format = makeFormat(academy)
   const shown = filterClinics(page.clinics, filter)
   return (
     <div className="pub">
-      <PageTop page={page} format={format} />
+      <PageTop page={page} />
       <main id="main" className="wrap public">
         {page.clinics.length === 0 ? (
           <EmptyState>No clinics on the page just now. Look again soon.</EmptyState>
         ) : (
           <>
             <ClinicFilter page={page} filter={filter} onChange={setFilter} />
-            <ClinicMonths clinics={shown} academy={academy} format={format} />
+            <ClinicMonths clinics={shown} academy={academy} />
             {shown.length === 0 && (
               <EmptyState
                 action={
@@ -62,7 +65,7 @@ export default function AcademyPageView() {
   )
 }
 
-function PageTop({ page, format }: { page: AcademyPage; format: Format }) {
+function PageTop({ page }: { page: AcademyPage }) {
   const { academy, clinics } = page
   const next = clinics.find(({ taken, capacity }) => taken < capacity)
   return (
@@ -85,7 +88,7 @@ function PageTop({ page, format }: { page: AcademyPage; format: Format }) {
             <span className="max-w-[9rem] leading-tight">
               <b>{next.title}</b>
               <br />
-              {format.day(next.startsAt, 'weekday')}, {placesLeft(next)}
+              {makeFormat({ ...academy, zone: next.zone }).day(next.startsAt)}, {placesLeft(next)}
             </span>
           </p>
         )}
@@ -94,14 +97,10 @@ function PageTop({ page, format }: { page: AcademyPage; format: Format }) {
   )
 }
 
-function ClinicMonths(props: {
-  clinics: readonly PageClinic[]
-  academy: AcademyPage['academy']
-  format: Format
-}) {
+function ClinicMonths(props: { clinics: readonly PageClinic[]; academy: AcademyPage['academy'] }) {
   const months = new Map<string, PageClinic[]>()
   for (const clinic of props.clinics) {
-    const month = monthOf(clinic, props.format)
+    const month = monthOf(clinic, props.academy.locale)
     months.set(month, [...(months.get(month) ?? []), clinic])
   }
   return [...months].map(([month, clinics]) => (
@@ -114,21 +113,16 @@ function ClinicMonths(props: {
       </div>
       <ul className="fix">
         {clinics.map((clinic) => (
-          <ClinicLine
-            key={clinic.slug}
-            clinic={clinic}
-            academy={props.academy}
-            format={props.format}
-          />
+          <ClinicLine key={clinic.slug} clinic={clinic} academy={props.academy} />
         ))}
       </ul>
     </section>
   ))
 }
 
-function monthOf(clinic: PageClinic, { locale, zone }: Format): string {
+function monthOf(clinic: PageClinic, locale: string): string {
   if (clinic.sessionsAhead < clinic.sessionsTotal) return 'Running now'
-  const month = new Intl.DateTimeFormat(locale, { month: 'long', timeZone: zone })
+  const month = new Intl.DateTimeFormat(locale, { month: 'long', timeZone: clinic.zone })
   return `Starting in ${month.format(new Date(clinic.startsAt))}`
 }
 
@@ -142,10 +136,7 @@ function Coaches({ page }: { page: AcademyPage }) {
         </div>
         {page.coaches.map((coach) => (
           <p key={coach.name} className="py-2">
-            <span className="ini" aria-hidden>
-              {coach.initials}
-            </span>{' '}
-            <b>{coach.name}.</b> {coach.about}
+            <Initials of={coach.initials} /> <b>{coach.name}.</b> {coach.about}
           </p>
         ))}
       </div>

@@ -1,31 +1,45 @@
 import type { Answer } from '@marram/contract'
+import { formatLocalTime } from '@marram/schedule/format'
+import { localDayOf, localTimeOf } from '../academies/local-day'
 
 export type Board = Answer<'sessions.list'>
 export type BoardSession = Board['sessions'][number]
 
-/** The hours that the board shows: the sessions' own, with an hour around them. */
-export function hoursOf(board: Board): { from: number; to: number } {
-  const starts = board.sessions.map(({ startsAt }) => minutesOfDay(startsAt, board.zone))
-  const ends = board.sessions.map(({ endsAt }) => minutesOfDay(endsAt, board.zone))
-  const from = Math.min(9 * 60, ...starts)
-  const to = Math.max(20 * 60, ...ends.map((end) => (end === 0 ? 1440 : end)))
-  return { from: Math.floor(from / 60), to: Math.min(24, Math.ceil(to / 60) + 1) }
-}
-
-const clocks = new Map<string, Intl.DateTimeFormat>()
+const MINUTES_OF_A_DAY = 24 * 60
 
 /** Minutes after midnight on the venue's own clock. */
-export function minutesOfDay(at: string, zone: string): number {
-  let clock = clocks.get(zone)
-  if (!clock) {
-    clock = new Intl.DateTimeFormat('en-GB', { timeZone: zone, hour: '2-digit', minute: '2-digit' })
-    clocks.set(zone, clock)
-  }
-  const [hours = 0, minutes = 0] = clock.format(new Date(at)).split(':').map(Number)
+export function minutesOfDay(at: string | number, zone: string): number {
+  const [hours = 0, minutes = 0] = localTimeOf(at, zone).split(':').map(Number)
   return hours * 60 + minutes
 }
 
-/** The local day of an instant at the venue: "2026-09-17". */
-export function dayOfInstant(at: string, zone: string): string {
-  return new Intl.DateTimeFormat('en-CA', { timeZone: zone }).format(new Date(at))
+/** Where a session stands in the day it starts on, in minutes; what runs over midnight ends there. */
+export function spanOf({ startsAt, endsAt, zone }: Timed) {
+  const isOver = localDayOf(endsAt, zone) !== localDayOf(startsAt, zone)
+  return {
+    from: minutesOfDay(startsAt, zone),
+    to: isOver ? MINUTES_OF_A_DAY : minutesOfDay(endsAt, zone),
+  }
+}
+
+/** The hours that the board shows: the sessions' own, with an hour around them. */
+export function hoursOf({ sessions }: { sessions: readonly Timed[] }) {
+  const spans = sessions.map(spanOf)
+  const from = Math.min(9 * 60, ...spans.map((span) => span.from))
+  const to = Math.max(20 * 60, ...spans.map((span) => span.to))
+  return { from: Math.floor(from / 60), to: Math.min(24, Math.ceil(to / 60) + 1) }
+}
+
+type Timed = Pick<BoardSession, 'startsAt' | 'endsAt' | 'zone'>
+
+/** "18:00" of minutes after midnight. */
+export function timeLocalOf(minutes: number): string {
+  const [hours, rest] = [Math.floor(minutes / 60), minutes % 60]
+  return `${String(hours).padStart(2, '0')}:${String(rest).padStart(2, '0')}`
+}
+
+/** A full hour in as little room as it takes: "18", in the United States "6 pm". */
+export function hourInShort(hour: number, locale: string): string {
+  const time = formatLocalTime({ timeLocal: timeLocalOf(hour * 60), locale })
+  return time.replace(':00', '').replace(/^0(?=\d)/, '')
 }

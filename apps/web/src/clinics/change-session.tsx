@@ -1,59 +1,102 @@
 import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
-import type { Sent } from '@marram/contract'
+import type { Answer, Sent } from '@marram/contract'
 import type { Format } from '../academies/format'
-import { coachesQuery, venuesQuery } from '../academies/queries'
 import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
+import { sentenceOf } from '../api/problem'
+import { together } from '../api/together'
+import { coachesQuery } from '../coaches/queries'
 import { Button } from '../ui/button'
 import { Field, SelectField } from '../ui/field'
 import { Notice } from '../ui/notice'
+import { ErrorState, SkeletonRows } from '../ui/states'
 import { toast } from '../ui/toast'
+import { venuesQuery } from '../venues/queries'
 import type { Session } from './queries'
+import { changeOf, wishOf, type SessionWish } from './session-wish'
 
-type Body = Sent<'sessions.change', 'body'>
+/** All of its fields say beside themselves what is wrong. */
+const SHOWN = {
+  beside: ['startsOnLocal', 'startsAtLocal', 'durationMinutes', 'capacity', 'coachIds', 'areas'],
+}
 
-/** One session's own time, places, coach and area. Its other coaches and areas stay as they are. */
-export function ChangeSession(props: {
+interface ChangeProps {
   academy: string
   session: Session
   format: Format
   onDone: () => void
-}) {
-  const { academy, session, format, onDone } = props
-  const coaches = useQuery(coachesQuery(academy))
-  const venues = useQuery(venuesQuery(academy))
-  const [wanted, setWanted] = useState(() => wantedOf(session, format.zone))
-  const set = (part: Partial<typeof wanted>) => setWanted((had) => ({ ...had, ...part }))
-  const [firstArea] = session.areas
-  const venue = venues.data?.venues.find(({ areas }) =>
-    areas.some(({ id }) => id === firstArea?.id),
-  )
-  const area = venue?.areas.find(({ id }) => id === wanted.areaId)
-  const change = useAcademyMutation(academy, (body: Body) =>
+}
+
+/** One session's own time, places, coach and area. Its other coaches and areas stay as they are. */
+export function ChangeSession(props: ChangeProps) {
+  const coaches = useQuery(coachesQuery(props.academy))
+  const venues = useQuery(venuesQuery(props.academy))
+  const { error, retry } = together(coaches, venues)
+  if (error) return <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
+  if (!coaches.data || !venues.data) return <SkeletonRows rows={4} />
+  const [area] = props.session.areas
+  const venue = venues.data.venues.find(({ areas }) => areas.some(({ id }) => id === area?.id))
+  return <ChangeForm {...props} coaches={coaches.data.coaches} areas={venue?.areas ?? []} />
+}
+
+type Areas = Answer<'venues.list'>['venues'][number]['areas']
+
+function ChangeForm(
+  props: ChangeProps & { coaches: Answer<'coaches.list'>['coaches']; areas: Areas },
+) {
+  const { academy, session, format, onDone, coaches, areas } = props
+  const [wish, setWish] = useState(() => wishOf(session, format.zone))
+  const set = (part: Partial<SessionWish>) => setWish((had) => ({ ...had, ...part }))
+  const change = useAcademyMutation(academy, (body: Sent<'sessions.change', 'body'>) =>
     call('sessions.change', { academy, params: { sessionId: session.id }, body }),
   )
   const { form, errors, sentence, isSending } = useForm(async () => {
-    await change.mutateAsync(bodyOf(wanted, session))
-    toast('Changed. Golfers get a mail where the time or the place is another.')
+    await change.mutateAsync(changeOf(wish, session))
+    toast('Changed. Golfers get a mail where the time, the place or the coach is another.')
     onDone()
-  })
+  }, SHOWN)
   return (
     <form {...form}>
       {sentence && <Notice kind="flag">{sentence}</Notice>}
+      <TimeFields wish={wish} set={set} errors={errors} />
+      <SelectField
+        label="Coach"
+        value={wish.coachId}
+        onChange={(coachId) => set({ coachId })}
+        options={coaches.map(({ id, name }) => ({ value: id, label: name }))}
+        error={errors['coachIds']}
+      />
+      <AreaFields wish={wish} set={set} errors={errors} areas={areas} />
+      <Button type="submit" kind="go" waiting={isSending && 'Changing…'}>
+        Change this session
+      </Button>
+    </form>
+  )
+}
+
+interface FieldsProps {
+  wish: SessionWish
+  set: (part: Partial<SessionWish>) => void
+  errors: Readonly<Record<string, string>>
+}
+
+function TimeFields({ wish, set, errors }: FieldsProps) {
+  return (
+    <>
       <div className="f two">
         <Field
           label="Day"
           type="date"
-          value={wanted.startsOnLocal}
+          value={wish.startsOnLocal}
           onChange={(event) => set({ startsOnLocal: event.target.value })}
           error={errors['startsOnLocal']}
         />
         <Field
           label="Starts at"
           type="time"
-          value={wanted.startsAtLocal}
+          value={wish.startsAtLocal}
           onChange={(event) => set({ startsAtLocal: event.target.value })}
           error={errors['startsAtLocal']}
         />
@@ -62,32 +105,35 @@ export function ChangeSession(props: {
         <Field
           label="Minutes"
           type="number"
-          value={wanted.durationMinutes}
+          value={wish.durationMinutes}
           onChange={(event) => set({ durationMinutes: event.target.value })}
           error={errors['durationMinutes']}
         />
         <Field
           label="Places"
           type="number"
-          value={wanted.capacity}
+          value={wish.capacity}
           onChange={(event) => set({ capacity: event.target.value })}
           error={errors['capacity']}
         />
       </div>
-      <SelectField
-        label="Coach"
-        value={wanted.coachId}
-        onChange={(coachId) => set({ coachId })}
-        options={(coaches.data?.coaches ?? []).map(({ id, name }) => ({ value: id, label: name }))}
-      />
+    </>
+  )
+}
+
+function AreaFields({ wish, set, errors, areas }: FieldsProps & { areas: Areas }) {
+  const area = areas.find(({ id }) => id === wish.areaId)
+  return (
+    <>
       <SelectField
         label="Area"
-        value={wanted.areaId}
+        value={wish.areaId}
         onChange={(areaId) => {
-          const units = venue?.areas.find(({ id }) => id === areaId)?.units ?? 1
+          const units = areas.find(({ id }) => id === areaId)?.units ?? 1
           set({ areaId, fromUnit: '1', toUnit: String(units) })
         }}
-        options={(venue?.areas ?? []).map(({ id, name }) => ({ value: id, label: name }))}
+        options={areas.map(({ id, name }) => ({ value: id, label: name }))}
+        error={errors['areas']}
       />
       {area && area.units > 1 && (
         <div className="f two">
@@ -96,7 +142,7 @@ export function ChangeSession(props: {
             type="number"
             min={1}
             max={area.units}
-            value={wanted.fromUnit}
+            value={wish.fromUnit}
             onChange={(event) => set({ fromUnit: event.target.value })}
           />
           <Field
@@ -104,64 +150,11 @@ export function ChangeSession(props: {
             type="number"
             min={1}
             max={area.units}
-            value={wanted.toUnit}
+            value={wish.toUnit}
             onChange={(event) => set({ toUnit: event.target.value })}
           />
         </div>
       )}
-      <Button type="submit" kind="go" waiting={isSending && 'Changing…'}>
-        Change this session
-      </Button>
-    </form>
+    </>
   )
-}
-
-type Wanted = ReturnType<typeof wantedOf>
-
-function wantedOf(session: Session, timeZone: string) {
-  const [coach] = session.coaches
-  const [area] = session.areas
-  const startsAt = new Date(session.startsAt)
-  const clock = { timeZone, hour: '2-digit', minute: '2-digit' } as const
-  return {
-    startsOnLocal: new Intl.DateTimeFormat('en-CA', { timeZone }).format(startsAt),
-    startsAtLocal: new Intl.DateTimeFormat('en-GB', clock).format(startsAt),
-    durationMinutes: String((Date.parse(session.endsAt) - startsAt.getTime()) / 60_000),
-    capacity: String(session.capacity),
-    coachId: coach?.id ?? '',
-    areaId: area?.id ?? '',
-    fromUnit: String(area?.fromUnit ?? 1),
-    toUnit: String(area?.toUnit ?? 1),
-  }
-}
-
-/** Only what is another than before is sent: what is not sent stays. */
-function bodyOf(wanted: Wanted, session: Session): Body {
-  const [coach, ...moreCoaches] = session.coaches
-  const [area, ...moreAreas] = session.areas
-  const fromUnit = Number(wanted.fromUnit)
-  const toUnit = Number(wanted.toUnit)
-  const isSameArea =
-    area?.id === wanted.areaId && area.fromUnit === fromUnit && area.toUnit === toUnit
-  return {
-    startsOnLocal: wanted.startsOnLocal,
-    startsAtLocal: wanted.startsAtLocal,
-    durationMinutes: Number(wanted.durationMinutes),
-    capacity: Number(wanted.capacity),
-    ...(coach?.id === wanted.coachId
-      ? {}
-      : { coachIds: [wanted.coachId, ...moreCoaches.map(({ id }) => id)] }),
-    ...(isSameArea
-      ? {}
-      : {
-          areas: [
-            { areaId: wanted.areaId, fromUnit, toUnit },
-            ...moreAreas.map((each) => ({
-              areaId: each.id,
-              fromUnit: each.fromUnit,
-              toUnit: each.toUnit,
-            })),
-          ],
-        }),
-  }
 }

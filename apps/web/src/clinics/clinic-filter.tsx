@@ -12,9 +12,7 @@ export function ClinicFilter(props: {
   onChange: (filter: Filter) => void
 }) {
   const { page, filter, onChange } = props
-  const set = (change: Partial<Record<keyof Filter, string>>) =>
-    // Each word's options are the values of its own type.
-    onChange({ ...filter, ...change } as Filter)
+  const set = (change: Partial<Filter>) => onChange({ ...filter, ...change })
   const days = [...new Set(page.clinics.map(dayOf))].sort()
   const coaches = [...new Set(page.clinics.flatMap((clinic) => clinic.coaches))].sort()
   return (

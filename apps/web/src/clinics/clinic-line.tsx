@@ -1,13 +1,13 @@
 import { Link } from 'react-router'
-import { levelInWords, type Format } from '../academies/format'
+import { levelInWords, makeFormat, type Format } from '../academies/format'
 import { paths } from '../paths'
 import { PlaceTicks, placesLeft } from '../ui/place-ticks'
 import { listOf } from './list-of'
 import type { AcademyFace, PageClinic } from './queries'
 
 /** One clinic in one line of sight: day, name, where and who, places, price. */
-export function ClinicLine(props: { clinic: PageClinic; academy: AcademyFace; format: Format }) {
-  const { clinic, academy, format } = props
+export function ClinicLine({ clinic, academy }: { clinic: PageClinic; academy: AcademyFace }) {
+  const format = makeFormat({ ...academy, zone: clinic.zone })
   const isFull = clinic.taken >= clinic.capacity
   return (
     <li>

@@ -41,7 +41,7 @@ export function ClinicPreview(props: {
                 Time
               </th>
               <th scope="col" className="ctr">
-                Sunset
+                {format.dusk.word}
               </th>
               <th scope="col" className="l">
                 What we found
@@ -57,9 +57,16 @@ export function ClinicPreview(props: {
                 <th scope="row">{date.number}</th>
                 <td className="l">{format.day(date.startsAt)}</td>
                 <td className="ctr">{format.range(date)}</td>
-                <td className="ctr">{date.duskAt ? format.time(date.duskAt) : '–'}</td>
+                <td className="ctr">
+                  <span className="soft sm:hidden">{format.dusk.word} </span>
+                  {date.duskAt ? format.time(date.duskAt) : '–'}
+                </td>
                 <td className="l">
-                  <Found date={date} holiday={holidayOn.get(date.startsOnLocal)} />
+                  <Found
+                    date={date}
+                    holiday={holidayOn.get(date.startsOnLocal)}
+                    dusk={format.dusk.inText}
+                  />
                 </td>
                 <td className="l">
                   <button
@@ -92,7 +99,12 @@ export function ClinicPreview(props: {
   )
 }
 
-function Found({ date, holiday }: { date: Preview['dates'][number]; holiday: string | undefined }) {
+function Found(props: {
+  date: Preview['dates'][number]
+  holiday: string | undefined
+  dusk: string
+}) {
+  const { date, holiday, dusk } = props
   const isClear = date.clashes.length === 0 && date.darkMinutes === 0 && !holiday && !date.isPast
   if (isClear) {
     return (
@@ -112,8 +124,8 @@ function Found({ date, holiday }: { date: Preview['dates'][number]; holiday: str
       {date.darkMinutes > 0 && (
         <Tag kind="haar" drawing="dusk">
           {date.darkMinutes >= minutes
-            ? 'All of it after sunset, no lamps'
-            : `Ends ${date.darkMinutes} min after sunset, no lamps`}
+            ? `All of it after ${dusk}, no lamps`
+            : `Ends ${date.darkMinutes} min after ${dusk}, no lamps`}
         </Tag>
       )}
       {holiday && (

@@ -61,8 +61,9 @@ function headOfDates({ sessions }: ClinicPage['clinic']): string {
 
 function factsOf({ academy, clinic }: ClinicPage, format: Format) {
   const { venue } = clinic
+  const elsewhere = format.zoneIfElsewhere(clinic.startsAt)
   return [
-    ['When', whenInWords(clinic, format)],
+    ['When', [whenInWords(clinic, format), elsewhere].filter(Boolean).join(', ')],
     ['Where', [clinic.areas.join(' and '), venue.name, venue.address].filter(Boolean).join(', ')],
     [
       clinic.coachDetails.length === 1 ? 'Coach' : 'Coaches',

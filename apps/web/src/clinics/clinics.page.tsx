@@ -1,8 +1,12 @@
-import { useQuery } from '@tanstack/react-query'
-import { Link, useParams } from 'react-router'
-import { academyQuery } from '../academies/queries'
+import { useQuery, type QueryClient } from '@tanstack/react-query'
+import { Link, useParams, type LoaderFunctionArgs } from 'react-router'
+import { scopeOf } from '@marram/contract/routes'
 import { makeFormat } from '../academies/format'
+import { academyQuery } from '../academies/queries'
+import { rolesIn, useSession } from '../accounts/queries'
 import { sentenceOf } from '../api/problem'
+import { together } from '../api/together'
+import { coachesQuery } from '../coaches/queries'
 import { useTitle } from '../layouts/accent'
 import { useMay } from '../layouts/staff.layout'
 import { paths } from '../paths'
@@ -11,9 +15,18 @@ import { Initials } from '../ui/initials'
 import { PageHead } from '../ui/page-head'
 import { PlaceTicks } from '../ui/place-ticks'
 import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
-import { clinicsQuery } from './queries'
+import { clinicsQuery, type ClinicInList } from './queries'
 
 const STATES = { draft: 'Draft', published: 'On the page', withdrawn: 'Off the page' } as const
+
+export const loader =
+  (client: QueryClient) =>
+  ({ params }: LoaderFunctionArgs) => {
+    const { academy = '' } = params
+    void client.query(clinicsQuery(academy)).catch(() => undefined)
+    void client.query(academyQuery(academy)).catch(() => undefined)
+    return null
+  }
 
 /** Every clinic of the academy: what runs, what comes, what has been. */
 export default function ClinicsPage() {
@@ -21,11 +34,13 @@ export default function ClinicsPage() {
   const may = useMay()
   const clinics = useQuery(clinicsQuery(slug))
   const academy = useQuery(academyQuery(slug))
+  const mayOpen = useMayOpenCard(slug)
   useTitle('Clinics')
-  if (clinics.isError) {
+  const { error, retry } = together(clinics, academy)
+  if (error) {
     return (
       <main id="main" className="wrap py-8">
-        <ErrorState sentence={sentenceOf(clinics.error)} onRetry={() => void clinics.refetch()} />
+        <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
       </main>
     )
   }
@@ -74,7 +89,7 @@ export default function ClinicsPage() {
               {clinics.data.clinics.map((clinic) => (
                 <tr key={clinic.id}>
                   <th scope="row">
-                    {may('clinics:read') ? (
+                    {mayOpen(clinic) ? (
                       <Link to={paths.clinicCard(slug, clinic.id)}>{clinic.title}</Link>
                     ) : (
                       clinic.title
@@ -114,4 +129,13 @@ export default function ClinicsPage() {
       )}
     </main>
   )
+}
+
+/** Whose card the person may open: everybody's, for a coach those they teach, or none. */
+function useMayOpenCard(slug: string): (clinic: Pick<ClinicInList, 'coaches'>) => boolean {
+  const { data: session } = useSession()
+  const scope = scopeOf(rolesIn(session, slug), 'places:read')
+  const coaches = useQuery({ ...coachesQuery(slug), enabled: scope === 'own' })
+  const me = coaches.data?.coaches.find(({ accountId }) => accountId === session?.account?.id)
+  return (clinic) => scope === 'all' || clinic.coaches.some(({ id }) => id === me?.id)
 }

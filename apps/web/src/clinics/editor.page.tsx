@@ -1,11 +1,11 @@
-import { useQuery } from '@tanstack/react-query'
+import { useQuery, type QueryClient } from '@tanstack/react-query'
 import { useState } from 'react'
-import type { Answer } from '@marram/contract'
-import { Link, useNavigate, useParams } from 'react-router'
-import { academyQuery, coachesQuery, venuesQuery, type Academy } from '../academies/queries'
-import { call } from '../api/client'
-import { useAcademyMutation } from '../api/mutation'
-import { ApiProblem, sentenceOf } from '../api/problem'
+import { Link, useNavigate, useParams, type LoaderFunctionArgs } from 'react-router'
+import { todayIn } from '../academies/local-day'
+import { academyQuery, type Academy } from '../academies/queries'
+import { sentenceOf } from '../api/problem'
+import { together } from '../api/together'
+import { coachesQuery } from '../coaches/queries'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
 import { Button } from '../ui/button'
@@ -13,10 +13,24 @@ import { Notice } from '../ui/notice'
 import { PageHead } from '../ui/page-head'
 import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
 import { toast } from '../ui/toast'
+import { venuesQuery } from '../venues/queries'
 import { ClinicEditor } from './clinic-editor'
 import { draftOf, newDraft, type Draft } from './draft'
 import { clinicQuery, type Clinic } from './queries'
 import { useSaveClinic } from './save-clinic'
+import type { EditorChoices } from './sentence-part'
+import { ThrowAway } from './throw-away'
+
+export const loader =
+  (client: QueryClient) =>
+  ({ params }: LoaderFunctionArgs) => {
+    const { academy = '', clinicId } = params
+    void client.query(academyQuery(academy)).catch(() => undefined)
+    void client.query(venuesQuery(academy)).catch(() => undefined)
+    void client.query(coachesQuery(academy)).catch(() => undefined)
+    if (clinicId) void client.query(clinicQuery(academy, clinicId)).catch(() => undefined)
+    return null
+  }
 
 /** A new clinic, or one that is changed. */
 export default function EditorPage() {
@@ -25,11 +39,11 @@ export default function EditorPage() {
   const venues = useQuery(venuesQuery(slug))
   const coaches = useQuery(coachesQuery(slug))
   const clinic = useQuery({ ...clinicQuery(slug, clinicId ?? ''), enabled: clinicId !== undefined })
-  const error = academy.error ?? venues.error ?? coaches.error ?? clinic.error
+  const { error, retry } = together(academy, venues, coaches, clinic)
   if (error) {
     return (
       <main id="main" className="wrap py-8">
-        <ErrorState sentence={sentenceOf(error)} />
+        <ErrorState sentence={sentenceOf(error)} onRetry={retry} />
       </main>
     )
   }
@@ -40,6 +54,7 @@ export default function EditorPage() {
       </main>
     )
   }
+  const { currency, zone } = academy.data
   const [venue] = venues.data.venues
   const [area] = venue?.areas ?? []
   const [coach] = coaches.data.coaches
@@ -52,50 +67,39 @@ export default function EditorPage() {
       </main>
     )
   }
+  const first = { venueId: venue.id, areaId: area.id, units: area.units, coachId: coach.id }
   return (
     <Editor
+      key={clinicId ?? 'new'}
       academy={academy.data}
       venues={venues.data.venues}
       coaches={coaches.data.coaches}
       clinic={clinic.data ?? null}
       first={
-        clinic.data
-          ? draftOf(clinic.data, academy.data.currency)
-          : newDraft({ venueId: venue.id, areaId: area.id, units: area.units, coachId: coach.id })
+        clinic.data ? draftOf(clinic.data, currency) : newDraft({ ...first, today: todayIn(zone) })
       }
     />
   )
 }
 
-function Editor(props: {
-  academy: Academy
-  venues: Answer<'venues.list'>['venues']
-  coaches: Answer<'coaches.list'>['coaches']
-  clinic: Clinic | null
-  first: Draft
-}) {
+function Editor(props: EditorChoices & { academy: Academy; clinic: Clinic | null; first: Draft }) {
   const { academy, venues, coaches, clinic } = props
   const { slug } = academy
   const navigate = useNavigate()
   const [draft, setDraft] = useState(props.first)
-  const [problem, setProblem] = useState<ApiProblem | null>(null)
   const title = clinic ? `Change ${clinic.title}` : 'New clinic'
   useTitle(title)
-
-  const { save, keptId } = useSaveClinic(academy, clinic?.id)
-  const throwAway = useAcademyMutation(slug, (clinicId: string) =>
-    call('clinics.throw-away', { academy: slug, params: { clinicId } }),
-  )
-  const press = async ({ isPublished }: { isPublished: boolean }) => {
-    setProblem(null)
-    try {
-      const saved = await save.mutateAsync({ draft, isPublished })
-      toast(isPublished ? 'On the page now.' : 'Kept.')
-      await navigate(paths.clinicCard(slug, saved.id))
-    } catch (error) {
-      if (error instanceof ApiProblem) setProblem(error)
-    }
-  }
+  const { save, keptId, errors, notice } = useSaveClinic(academy, clinic?.id)
+  const press = ({ isPublished }: { isPublished: boolean }) =>
+    save.mutate(
+      { draft, isPublished },
+      {
+        onSuccess: (saved) => {
+          toast(isPublished ? 'On the page now.' : 'Kept.')
+          void navigate(paths.clinicCard(slug, saved.id))
+        },
+      },
+    )
   const isLive = clinic?.state === 'published'
   return (
     <main id="main" className="wrap">
@@ -110,20 +114,15 @@ function Editor(props: {
         actions={
           <>
             {clinic?.state === 'draft' && (
-              <Button
-                kind="quiet"
-                onClick={() =>
-                  throwAway.mutate(clinic.id, {
-                    onSuccess: () => void navigate(paths.clinics(slug)),
-                  })
-                }
-              >
-                Throw draft away
-              </Button>
+              <ThrowAway
+                academy={slug}
+                clinic={clinic}
+                onGone={() => void navigate(paths.clinics(slug))}
+              />
             )}
             <Button
               waiting={save.isPending && 'Keeping…'}
-              onClick={() => void press({ isPublished: false })}
+              onClick={() => press({ isPublished: false })}
             >
               {isLive ? 'Keep the change' : 'Keep as draft'}
             </Button>
@@ -131,7 +130,7 @@ function Editor(props: {
               <Button
                 kind="go"
                 waiting={save.isPending && 'Keeping…'}
-                onClick={() => void press({ isPublished: true })}
+                onClick={() => press({ isPublished: true })}
               >
                 Put on the page
               </Button>
@@ -139,9 +138,9 @@ function Editor(props: {
           </>
         }
       />
-      {problem && (
+      {notice && (
         <div className="mb-4">
-          <Notice kind="flag">{problem.message}</Notice>
+          <Notice kind="flag">{notice}</Notice>
         </div>
       )}
       <ClinicEditor
@@ -150,8 +149,8 @@ function Editor(props: {
         coaches={coaches}
         draft={draft}
         onChange={(change) => setDraft((had) => ({ ...had, ...change }))}
-        errors={problem?.fields ?? {}}
-        {...(keptId ? { clinicId: keptId } : {})}
+        errors={errors}
+        clinicId={keptId}
       />
     </main>
   )

@@ -1,11 +1,12 @@
 import { useState } from 'react'
+import { todayIn } from '../academies/local-day'
 import type { Academy } from '../academies/queries'
-import { ApiProblem } from '../api/problem'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
-import { ClinicEditor, type EditorChoices } from './clinic-editor'
+import { ClinicEditor } from './clinic-editor'
 import { newDraft } from './draft'
 import { useSaveClinic } from './save-clinic'
+import type { EditorChoices } from './sentence-part'
 
 /** The third sentence: the first clinic, with every date of it. */
 export function FirstClinic(props: EditorChoices & { academy: Academy; onLater: () => void }) {
@@ -18,18 +19,10 @@ export function FirstClinic(props: EditorChoices & { academy: Academy; onLater: 
       areaId: area?.id ?? '',
       units: area?.units ?? 1,
       coachId: coaches[0]?.id ?? '',
+      today: todayIn(academy.zone),
     })
   })
-  const [problem, setProblem] = useState<ApiProblem | null>(null)
-  const { save, keptId } = useSaveClinic(academy)
-  const press = async () => {
-    setProblem(null)
-    try {
-      await save.mutateAsync({ draft, isPublished: true })
-    } catch (caught) {
-      if (caught instanceof ApiProblem) setProblem(caught)
-    }
-  }
+  const { save, keptId, errors, notice } = useSaveClinic(academy)
   return (
     <>
       <ClinicEditor
@@ -38,12 +31,17 @@ export function FirstClinic(props: EditorChoices & { academy: Academy; onLater: 
         coaches={coaches}
         draft={draft}
         onChange={(change) => setDraft((had) => ({ ...had, ...change }))}
-        errors={problem?.fields ?? {}}
-        {...(keptId ? { clinicId: keptId } : {})}
+        errors={errors}
+        clinicId={keptId}
       />
-      {problem && <Notice kind="flag">{problem.message}</Notice>}
+      {notice && <Notice kind="flag">{notice}</Notice>}
       <p className="rowb2 mt-4">
-        <Button kind="go" isBig waiting={save.isPending && 'Keeping…'} onClick={() => void press()}>
+        <Button
+          kind="go"
+          isBig
+          waiting={save.isPending && 'Keeping…'}
+          onClick={() => save.mutate({ draft, isPublished: true })}
+        >
           Keep these dates
         </Button>
         <Button kind="quiet" onClick={props.onLater}>

@@ -1,6 +1,7 @@
 import type { Answer } from '@marram/contract'
+import { formatLocalTime } from '@marram/schedule/format'
 import type { Format } from '../academies/format'
-import { minutesOfDay } from './board-times'
+import { minutesOfDay, timeLocalOf } from './board-times'
 
 type Preview = Answer<'clinics.preview'>
 
@@ -11,7 +12,7 @@ const RIGHT = 16
 const TOP = 14
 const BOTTOM = 34
 
-/** The light over a run: sunset from day to day, and each session against it. */
+/** The light over a run: dusk from day to day, and each session against it. */
 export function LightChart({ preview, format }: { preview: Preview; format: Format }) {
   const { light, dates, clockChanges } = preview
   const days = new Map(light.map(({ dayLocal }, index) => [dayLocal, index]))
@@ -39,7 +40,7 @@ export function LightChart({ preview, format }: { preview: Preview; format: Form
   const spoken =
     dark === 0
       ? 'Every session ends in daylight, or has lamps or a roof.'
-      : `${dark} of ${dates.length} sessions run past sunset without lamps.`
+      : `${dark} of ${dates.length} sessions run past ${format.dusk.inText} without lamps.`
   return (
     <>
       <div className="sect">
@@ -57,7 +58,7 @@ export function LightChart({ preview, format }: { preview: Preview; format: Form
             <g key={minutes}>
               <path className="gr" d={`M${LEFT} ${y(minutes)}H${WIDTH - RIGHT}`} />
               <text x={LEFT - 8} y={y(minutes) + 5} textAnchor="end">
-                {`${Math.floor(minutes / 60)}:00`}
+                {formatLocalTime({ timeLocal: timeLocalOf(minutes), locale: format.locale })}
               </text>
             </g>
           ))}

@@ -1,4 +1,6 @@
-import type { Answer } from '@marram/contract'
+import { keepPreviousData, queryOptions, skipToken } from '@tanstack/react-query'
+import type { Answer, Sent } from '@marram/contract'
+import { call } from '../api/client'
 import { routeQuery } from '../api/query'
 
 export type AcademyPage = Answer<'page.read'>
@@ -6,6 +8,7 @@ export type PageClinic = AcademyPage['clinics'][number]
 export type ClinicPage = Answer<'page.clinic'>
 export type AcademyFace = AcademyPage['academy']
 export type Clinic = Answer<'clinics.read'>
+export type ClinicInList = Answer<'clinics.list'>['clinics'][number]
 export type Session = Clinic['sessions'][number]
 
 export const academyPageQuery = (academy: string) => routeQuery('page.read', { academy })
@@ -16,5 +19,12 @@ export const clinicQuery = (academy: string, clinicId: string) =>
   routeQuery('clinics.read', { academy, params: { clinicId } })
 export const boardQuery = (academy: string, from: string, to: string) =>
   routeQuery('sessions.list', { academy, query: { from, to } })
-export const cardQuery = (academy: string, clinicId: string) =>
-  routeQuery('register.card', { academy, params: { clinicId } })
+
+/** The dates of a clinic while it is being written; nothing is asked while a word is missing. */
+export const previewQuery = (academy: string, body: Sent<'clinics.preview', 'body'> | null) =>
+  queryOptions({
+    queryKey: [academy, 'clinics.preview', JSON.stringify(body)],
+    queryFn: body ? ({ signal }) => call('clinics.preview', { academy, body, signal }) : skipToken,
+    placeholderData: keepPreviousData,
+    retry: false,
+  })

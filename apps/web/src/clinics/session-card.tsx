@@ -55,7 +55,7 @@ function Table(props: { sessions: readonly PageSession[]; foldAt: number | null;
           ))}
         </tr>
         <tr>
-          <th scope="row">Sunset</th>
+          <th scope="row">{format.dusk.word}</th>
           {sessions.map((session, index) => (
             <td key={session.id} className={cell(session, index)}>
               {session.duskAt ? format.time(session.duskAt) : '–'}

@@ -14,7 +14,6 @@ import type { Session } from './queries'
 /** One session: change it, or call it off. */
 export function SessionDialog(props: {
   academy: string
-  clinicId: string
   session: Session
   format: Format
   onClose: () => void
@@ -24,7 +23,7 @@ export function SessionDialog(props: {
   const title = `Session ${session.number}, ${format.session(session)}`
   const isOver = session.state === 'called-off' || session.registerState === 'closed'
   return (
-    <Dialog title={title} isOpen onClose={onClose}>
+    <Dialog title={title} isOpen isWrittenOn onClose={onClose}>
       {isOver ? (
         <p>
           {session.state === 'called-off'

@@ -59,6 +59,8 @@ export function CoachSection(props: {
   )
 }
 
+const SHOWN = ['name', 'initials', 'about', 'invite', 'email']
+
 function CoachDialog(props: { slug: string; coach: Coach | null; onClose: () => void }) {
   const { slug, coach, onClose } = props
   const [wanted, setWanted] = useState({
@@ -88,11 +90,14 @@ function CoachDialog(props: { slug: string; coach: Coach | null; onClose: () => 
     }
     return changed
   })
-  const { errors, ...dialog } = useForm(async () => {
-    await keep.mutateAsync(undefined)
-    if (wanted.invite) toast(`${wanted.invite} gets a mail with an invitation.`)
-    onClose()
-  })
+  const { errors, ...dialog } = useForm(
+    async () => {
+      await keep.mutateAsync(undefined)
+      if (wanted.invite) toast(`${wanted.invite} gets a mail with an invitation.`)
+      onClose()
+    },
+    { beside: coach?.accountId ? ['name', 'initials', 'about'] : SHOWN },
+  )
   return (
     <FormDialog
       {...dialog}

@@ -1,23 +1,25 @@
 import { useQuery } from '@tanstack/react-query'
 import { Link } from 'react-router'
 import type { Format } from '../academies/format'
-import { routeQuery } from '../api/query'
 import { sentenceOf } from '../api/problem'
 import { paths } from '../paths'
 import { ErrorState, SkeletonRows } from '../ui/states'
-import { standingOf } from './standing'
+import { placesOfClinicQuery } from './queries'
+import { standingAtDesk } from './standing'
 
 /** Who has a place in a clinic and how it is paid, and who waits for one. */
 export function EnrolledGolfers(props: { academy: string; clinicId: string; format: Format }) {
   const { academy, clinicId, format } = props
-  const places = useQuery(routeQuery('enrolments.of-clinic', { academy, params: { clinicId } }))
+  const places = useQuery(placesOfClinicQuery(academy, clinicId))
   return (
     <section>
       <div className="sh">
         <h2>Who has a place</h2>
       </div>
       {places.isPending && <SkeletonRows rows={3} />}
-      {places.isError && <ErrorState sentence={sentenceOf(places.error)} />}
+      {places.isError && (
+        <ErrorState sentence={sentenceOf(places.error)} onRetry={() => void places.refetch()} />
+      )}
       {places.data && (
         <table className="bill">
           <tbody>
@@ -30,7 +32,7 @@ export function EnrolledGolfers(props: { academy: string; clinicId: string; form
                       {enrolment.golfer.name}
                     </Link>
                     <br />
-                    <span className="soft note">{standingOf(enrolment)}</span>
+                    <span className="soft note">{standingAtDesk(enrolment)}</span>
                   </td>
                   <td>
                     {enrolment.totalMinor === 0 ? 'Free' : format.money(enrolment.totalMinor)}

@@ -1,17 +1,17 @@
-import { useQuery, useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
+import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
 import { Link, useParams, type LoaderFunctionArgs } from 'react-router'
 import { makeFormat, type Format } from '../academies/format'
 import { useSession } from '../accounts/queries'
 import { VerifyReminder } from '../accounts/verify-reminder'
-import { academyPageQuery } from '../clinics/queries'
+import { academyPageQuery, type AcademyFace } from '../clinics/queries'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
-import { Button, buttonClass } from '../ui/button'
+import { buttonClass } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { EmptyState } from '../ui/states'
-import { call } from '../api/client'
-import { useAcademyMutation } from '../api/mutation'
-import { myPlacesQuery, type Enrolment, type MyPlaces } from './queries'
+import { useNow } from '../ui/use-now'
+import { MyWaitlist } from './my-waitlist'
+import { myPlacesQuery, type Enrolment, type MyPlaces, type PlaceOfEnrolment } from './queries'
 
 export const loader =
   (client: QueryClient) =>
@@ -31,10 +31,10 @@ export default function MyPage() {
   const { data: mine } = useSuspenseQuery(myPlacesQuery(slug))
   const { data: page } = useSuspenseQuery(academyPageQuery(slug))
   const { data: session } = useSession()
-  const now = useQuery({ queryKey: ['', 'now'], queryFn: () => Date.now(), staleTime: 60_000 }).data
+  const now = useNow()
   useTitle(`Your golf – ${page.academy.name}`)
   const format = makeFormat(page.academy)
-  const next = upcoming(mine, now ?? 0).slice(0, SHOWN_AHEAD)
+  const next = upcoming(mine, now).slice(0, SHOWN_AHEAD)
   return (
     <main id="main" className="wrap narrow">
       <div className="head">
@@ -58,34 +58,42 @@ export default function MyPage() {
         </EmptyState>
       ) : (
         <ul className="fix">
-          {next.map(({ enrolment, place }) => (
-            <li key={place.id}>
-              <div className="day">
-                {format.day(place.startsAt)}
-                <small>{format.range(place)}</small>
-              </div>
-              <div className="mid">
-                <h3>
-                  <Link to={paths.myPlace(slug, enrolment.id)}>{enrolment.clinic.title}</Link>
-                </h3>
-                <p>
-                  {[place.areas.join(' and '), enrolment.clinic.venueName]
-                    .filter(Boolean)
-                    .join(', ')}
-                </p>
-              </div>
-              <div className="pl">
-                {enrolment.golfer.isMe ? 'You' : enrolment.golfer.name}
-                <div className="soft">
-                  {enrolment.clinic.bring && `Bring: ${enrolment.clinic.bring}`}
-                </div>
-              </div>
-            </li>
+          {next.map((each) => (
+            <NextSession key={each.place.id} {...each} academy={page.academy} />
           ))}
         </ul>
       )}
-      <Waiting mine={mine} slug={slug} format={format} />
+      <MyWaitlist mine={mine} slug={slug} format={format} />
     </main>
+  )
+}
+
+/** A session ahead, at the venue's own time. */
+function NextSession(props: {
+  enrolment: Enrolment
+  place: PlaceOfEnrolment
+  academy: AcademyFace
+}) {
+  const { enrolment, place, academy } = props
+  const { clinic, golfer } = enrolment
+  const format = makeFormat({ ...academy, zone: clinic.zone })
+  return (
+    <li>
+      <div className="day">
+        {format.day(place.startsAt)}
+        <small>{format.range(place)}</small>
+      </div>
+      <div className="mid">
+        <h3>
+          <Link to={paths.myPlace(academy.slug, enrolment.id)}>{clinic.title}</Link>
+        </h3>
+        <p>{[place.areas.join(' and '), clinic.venueName].filter(Boolean).join(', ')}</p>
+      </div>
+      <div className="pl">
+        {golfer.isMe ? 'You' : golfer.name}
+        <div className="soft">{clinic.bring && `Bring: ${clinic.bring}`}</div>
+      </div>
+    </li>
   )
 }
 
@@ -108,7 +116,9 @@ function Decisions({ mine, slug, format }: { mine: MyPlaces; slug: string; forma
       {held.map((enrolment) => (
         <Notice key={enrolment.id} action={<GoTo enrolment={enrolment} slug={slug} label="Pay" />}>
           <b>{enrolment.clinic.title}</b> is held for {enrolment.golfer.name} until{' '}
-          {enrolment.heldUntil && format.time(enrolment.heldUntil)}.
+          {enrolment.heldUntil &&
+            makeFormat({ ...format, zone: enrolment.clinic.zone }).time(enrolment.heldUntil)}
+          .
         </Notice>
       ))}
       {owed.map((enrolment) => (
@@ -133,39 +143,5 @@ function GoTo({ enrolment, slug, label }: { enrolment: Enrolment; slug: string; 
     <Link className={buttonClass()} to={paths.myPlace(slug, enrolment.id)}>
       {label}
     </Link>
-  )
-}
-
-function Waiting({ mine, slug, format }: { mine: MyPlaces; slug: string; format: Format }) {
-  const leave = useAcademyMutation(slug, (entryId: string) =>
-    call('waitlist.leave', { academy: slug, params: { entryId } }),
-  )
-  const waiting = mine.waitlist.filter(({ state }) => state === 'waiting')
-  if (waiting.length === 0) return null
-  return (
-    <section>
-      <h2 className="mt-8 mb-3">Waiting for a place</h2>
-      <ul className="reg">
-        {waiting.map((entry) => (
-          <li key={entry.id} className="waitrow">
-            <span>
-              <b>{entry.clinic.title}</b>
-              {entry.sessionStartsAt && `, ${format.day(entry.sessionStartsAt)}`}
-              <br />
-              <span className="soft">
-                {entry.golferName}, number {entry.position} in the queue
-              </span>
-            </span>
-            <Button
-              kind="quiet"
-              waiting={leave.isPending && 'Leaving…'}
-              onClick={() => leave.mutate(entry.id)}
-            >
-              Leave
-            </Button>
-          </li>
-        ))}
-      </ul>
-    </section>
   )
 }

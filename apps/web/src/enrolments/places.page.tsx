@@ -25,7 +25,6 @@ export default function PlacesPage() {
   const { data: mine } = useSuspenseQuery(myPlacesQuery(slug))
   const { data: page } = useSuspenseQuery(academyPageQuery(slug))
   useTitle(`Places – ${page.academy.name}`)
-  const format = makeFormat(page.academy)
   return (
     <main id="main" className="wrap narrow">
       <div className="head">
@@ -45,6 +44,7 @@ export default function PlacesPage() {
       <ul className="fix">
         {mine.enrolments.map((enrolment) => {
           const [first] = enrolment.places
+          const format = makeFormat({ ...page.academy, zone: enrolment.clinic.zone })
           return (
             <li key={enrolment.id}>
               <div className="day">

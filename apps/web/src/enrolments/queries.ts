@@ -10,7 +10,10 @@ export type PlaceOfEnrolment = Enrolment['places'][number]
 export const myPlacesQuery = (academy: string) => routeQuery('enrolments.mine', { academy })
 export const enrolmentQuery = (academy: string, enrolmentId: string) =>
   routeQuery('enrolments.read', { academy, params: { enrolmentId } })
-export const myGolfersQuery = (academy: string) => routeQuery('golfers.mine', { academy })
+export const placesOfGolferQuery = (academy: string, golferId: string) =>
+  routeQuery('enrolments.of-golfer', { academy, params: { golferId } })
+export const placesOfClinicQuery = (academy: string, clinicId: string) =>
+  routeQuery('enrolments.of-clinic', { academy, params: { clinicId } })
 
 export const useHold = (academy: string) =>
   useAcademyMutation(academy, (body: Sent<'enrolments.hold', 'body'>) =>
@@ -20,4 +23,14 @@ export const useHold = (academy: string) =>
 export const useJoinWaitlist = (academy: string) =>
   useAcademyMutation(academy, (body: Sent<'waitlist.join', 'body'>) =>
     call('waitlist.join', { academy, body }),
+  )
+
+export const useLeaveWaitlist = (academy: string) =>
+  useAcademyMutation(academy, (entryId: string) =>
+    call('waitlist.leave', { academy, params: { entryId } }),
+  )
+
+export const useGivePlace = (academy: string) =>
+  useAcademyMutation(academy, (body: Sent<'enrolments.give', 'body'>) =>
+    call('enrolments.give', { academy, body }),
   )

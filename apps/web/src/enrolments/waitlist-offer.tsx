@@ -1,6 +1,6 @@
 import { useState } from 'react'
 import { useNavigate } from 'react-router'
-import { ApiProblem } from '../api/problem'
+import { problemOf, type ApiProblem } from '../api/problem'
 import { paths } from '../paths'
 import { Button } from '../ui/button'
 import { toast } from '../ui/toast'
@@ -37,8 +37,7 @@ export function WaitlistOffer(props: {
       toast(`On the waitlist, number ${entry.position}.`)
       await navigate(paths.my(academy))
     } catch (caught) {
-      if (!(caught instanceof ApiProblem)) throw caught
-      props.onRefused(caught)
+      props.onRefused(problemOf(caught))
     } finally {
       setIsBusy(false)
     }

@@ -1,12 +1,14 @@
-import type { Answer, Sent } from '@marram/contract'
+import type { Sent } from '@marram/contract'
 import type { Format } from '../academies/format'
+import { localDayOf } from '../academies/local-day'
 import type { ClinicPage } from '../clinics/queries'
 import type { DependantDraft } from '../golfers/dependant-fields'
+import { ageOn } from '../golfers/age'
 import { toDependant } from '../golfers/dependant-fields'
-import type { Pick } from '../ui/picks'
+import type { OwnGolfer } from '../golfers/queries'
+import type { Pick as Choice } from '../ui/picks'
 
 type Clinic = ClinicPage['clinic']
-type OwnGolfer = Answer<'golfers.mine'>['golfers'][number]
 
 /** What it costs, before tax that is added on top. */
 export function amountOf(clinic: Clinic, what: string): number {
@@ -18,10 +20,10 @@ export function whatPicks(
   clinic: Clinic,
   ahead: readonly Clinic['sessions'][number][],
   format: Format,
-): Pick[] {
+): Choice[] {
   const [first] = ahead
   const isLate = ahead.length < clinic.sessions.length
-  const picks: Pick[] = []
+  const picks: Choice[] = []
   if (clinic.saleMode !== 'drop-in') {
     picks.push({
       value: 'run',
@@ -47,12 +49,26 @@ function priced(amountMinor: number | null, { payMode }: Clinic, format: Format)
   return payMode === 'free' || amountMinor === null ? {} : { amount: format.money(amountMinor) }
 }
 
-/** Why a golfer of the family cannot take this, where that is known before asking. */
-export function refusalFor(golfer: OwnGolfer | null, clinic: Clinic): { refusal?: string } {
-  const { ageMin, ageMax } = clinic
-  const age = golfer?.ageYears ?? (golfer?.isMe === false ? null : 18)
-  if (age === null || (ageMin === null && ageMax === null)) return {}
-  const isAdultWithoutDate = golfer?.bornOn == null && (ageMin ?? 0) >= 18
+type AgeRange = Pick<Clinic, 'ageMin' | 'ageMax' | 'zone'>
+type AgedGolfer = Pick<OwnGolfer, 'isMe' | 'bornOn'>
+
+const ADULT_AGE_YEARS = 18
+
+/**
+ * Why a golfer of the family cannot take this, where that is known before asking. Ages are those of
+ * the day of the first session taken, as the API counts them: who turns seven by then may come.
+ */
+export function refusalFor(
+  golfer: AgedGolfer | null,
+  { ageMin, ageMax, zone }: AgeRange,
+  firstStartsAt: string,
+): { refusal?: string } {
+  if (ageMin === null && ageMax === null) return {}
+  const bornOn = golfer?.bornOn ?? null
+  const assumed = golfer?.isMe === false ? null : ADULT_AGE_YEARS
+  const age = bornOn === null ? assumed : ageOn(bornOn, localDayOf(firstStartsAt, zone))
+  if (age === null) return {}
+  const isAdultWithoutDate = bornOn === null && (ageMin ?? 0) >= ADULT_AGE_YEARS
   if (ageMin !== null && age < ageMin && !isAdultWithoutDate) {
     return { refusal: `This clinic is for ages ${ageMin} and up.` }
   }
@@ -62,11 +78,52 @@ export function refusalFor(golfer: OwnGolfer | null, clinic: Clinic): { refusal?
 }
 
 /** Who it is most likely for: the person where they fit, else somebody of the family who does. */
-export function whoFits(golfers: readonly OwnGolfer[], clinic: Clinic): string {
+export function whoFits(
+  golfers: readonly OwnGolfer[],
+  clinic: AgeRange,
+  firstStartsAt: string,
+): string {
+  const fits = (golfer: OwnGolfer | null) => !refusalFor(golfer, clinic, firstStartsAt).refusal
+  if (fits(golfers.find(({ isMe }) => isMe) ?? null)) return 'me'
+  return golfers.find((golfer) => !golfer.isMe && fits(golfer))?.id ?? 'new'
+}
+
+/** Everybody it can be for; who does not fit is shown, with the reason. */
+export function whoPicks(given: {
+  golfers: readonly OwnGolfer[]
+  clinic: AgeRange
+  firstStartsAt: string
+  myName: string | undefined
+}): Choice[] {
+  const { golfers, clinic, firstStartsAt, myName } = given
   const me = golfers.find(({ isMe }) => isMe) ?? null
-  if (!refusalFor(me, clinic).refusal) return 'me'
-  const other = golfers.find((golfer) => !golfer.isMe && !refusalFor(golfer, clinic).refusal)
-  return other?.id ?? 'new'
+  return [
+    { value: 'me', title: 'Me', detail: myName, ...refusalFor(me, clinic, firstStartsAt) },
+    ...golfers
+      .filter(({ isMe }) => !isMe)
+      .map((golfer) => ({
+        value: golfer.id,
+        title: `${golfer.name}${golfer.ageYears === null ? '' : `, ${golfer.ageYears}`}`,
+        ...refusalFor(golfer, clinic, firstStartsAt),
+      })),
+    {
+      value: 'new',
+      title: 'Add someone you look after',
+      detail: 'Name, date of birth, who to call',
+    },
+  ]
+}
+
+/** Each date ahead with the places it has left. */
+export function datePicks(ahead: readonly Clinic['sessions'][number][], format: Format): Choice[] {
+  return ahead.map((session) => ({
+    value: session.id,
+    title: format.session(session),
+    detail:
+      session.taken >= session.capacity
+        ? 'Full: you can join the waitlist'
+        : `${session.capacity - session.taken} of ${session.capacity} places left`,
+  }))
 }
 
 /** The golfer part of a hold. */

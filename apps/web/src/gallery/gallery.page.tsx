@@ -102,10 +102,7 @@ export default function GalleryPage() {
           <EmptyState action={<Button>Write a clinic</Button>}>
             No clinics on the page yet. Say when, where and for how many.
           </EmptyState>
-          <ErrorState
-            sentence="The list did not come. Nothing was lost."
-            onRetry={() => undefined}
-          />
+          <ErrorState sentence="The list did not come." onRetry={() => undefined} />
         </Part>
         <Part name="Lying on top">
           <div className="actions">

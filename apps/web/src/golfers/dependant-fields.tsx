@@ -19,6 +19,9 @@ export const EMPTY_DEPENDANT: DependantDraft = {
   hasConsent: false,
 }
 
+/** The fields that say beside themselves what is wrong. */
+export const DEPENDANT_FIELDS = ['name', 'bornOn', 'handicap', 'emergencyContact', 'hasConsent']
+
 /** What is sent; the API says in words what is missing. */
 export function toDependant(draft: DependantDraft): Sent<'golfers.add-dependant', 'body'> {
   return {
@@ -26,6 +29,7 @@ export function toDependant(draft: DependantDraft): Sent<'golfers.add-dependant'
     bornOn: draft.bornOn,
     handicap: draft.handicap.trim() === '' ? null : Number(draft.handicap.replace(',', '.')),
     emergencyContact: { name: draft.contactName, phone: draft.contactPhone },
+    // The API says the sentence when this is not so.
     hasConsent: draft.hasConsent as true,
   }
 }

@@ -2,16 +2,14 @@ import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query'
 import { useState } from 'react'
 import { useParams, type LoaderFunctionArgs } from 'react-router'
 import { SignOut } from '../accounts/sign-out'
-import { call } from '../api/client'
 import { useForm } from '../api/form'
-import { useAcademyMutation } from '../api/mutation'
 import { academyPageQuery } from '../clinics/queries'
-import { myGolfersQuery } from '../enrolments/queries'
 import { useTitle } from '../layouts/accent'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { toast } from '../ui/toast'
-import { DependantFields, EMPTY_DEPENDANT, toDependant } from './dependant-fields'
+import { DEPENDANT_FIELDS, DependantFields, EMPTY_DEPENDANT, toDependant } from './dependant-fields'
+import { myGolfersQuery, useAddDependant } from './queries'
 
 export const loader =
   (client: QueryClient) =>
@@ -76,14 +74,15 @@ export default function FamilyPage() {
 
 function AddDependant(props: { slug: string; safeguarding: string; onDone: () => void }) {
   const [draft, setDraft] = useState(EMPTY_DEPENDANT)
-  const add = useAcademyMutation(props.slug, () =>
-    call('golfers.add-dependant', { academy: props.slug, body: toDependant(draft) }),
+  const add = useAddDependant(props.slug)
+  const { form, errors, sentence, isSending } = useForm(
+    async () => {
+      const golfer = await add.mutateAsync(toDependant(draft))
+      toast(`${golfer.name} is in your family here.`)
+      props.onDone()
+    },
+    { beside: DEPENDANT_FIELDS },
   )
-  const { form, errors, sentence, isSending } = useForm(async () => {
-    const golfer = await add.mutateAsync(undefined)
-    toast(`${golfer.name} is in your family here.`)
-    props.onDone()
-  })
   return (
     <form {...form} className="panel max-w-[34rem]">
       <div className="pad">

@@ -1,11 +1,13 @@
 import { useQuery, type QueryClient } from '@tanstack/react-query'
 import { NavLink, Outlet, redirect, useParams, type LoaderFunctionArgs } from 'react-router'
 import { sessionQuery } from '../accounts/queries'
+import { SignOutWord } from '../accounts/sign-out'
 import { academyPageQuery } from '../clinics/queries'
 import { paths } from '../paths'
 import { useAccent } from './accent'
 import { PublicBar } from './public-bar'
 import { PublicFoot } from './public-foot'
+import { SignedOut } from './signed-out'
 
 /** A golfer's own pages need sign-in; coming back afterwards is seen to. */
 export const loader =
@@ -22,19 +24,33 @@ export default function GolferLayout() {
   useAccent(data?.academy)
   return (
     <div className="golfer">
-      <PublicBar academy={{ slug, name: data?.academy.name ?? '' }} />
+      <PublicBar academy={{ slug, name: data?.academy.name ?? '' }}>
+        <span className="sp" />
+        <OwnWords slug={slug} className="hide" />
+        <SignOutWord className="hide" />
+      </PublicBar>
+      <SignedOut />
       <Outlet />
       <nav className="tabs" aria-label="Your golf">
-        <NavLink to={paths.my(slug)} end>
-          Today
-        </NavLink>
-        <NavLink to={paths.academy(slug)} end>
-          Clinics
-        </NavLink>
-        <NavLink to={paths.myPlaces(slug)}>Places</NavLink>
-        <NavLink to={paths.family(slug)}>Family</NavLink>
+        <OwnWords slug={slug} />
       </nav>
       <PublicFoot>{data?.academy.name}</PublicFoot>
     </div>
   )
+}
+
+const OWN_PAGES = [
+  { label: 'Today', to: paths.my, isWhole: true },
+  { label: 'Clinics', to: paths.academy, isWhole: true },
+  { label: 'Places', to: paths.myPlaces, isWhole: false },
+  { label: 'Family', to: paths.family, isWhole: false },
+] as const
+
+/** The four words of somebody's own golf: at the bottom on a phone, in the bar at a desk. */
+function OwnWords({ slug, className }: { slug: string; className?: string }) {
+  return OWN_PAGES.map(({ label, to, isWhole }) => (
+    <NavLink key={label} to={to(slug)} end={isWhole} {...(className ? { className } : {})}>
+      {label}
+    </NavLink>
+  ))
 }

@@ -1,6 +1,7 @@
 import { scopeOf, type Permission } from '@marram/contract/routes'
 import { useQuery, type QueryClient } from '@tanstack/react-query'
 import { Link, NavLink, Outlet, redirect, useParams, type LoaderFunctionArgs } from 'react-router'
+import { homeIn } from '../accounts/home'
 import { rolesIn, sessionQuery, useSession } from '../accounts/queries'
 import { ApiProblem } from '../api/problem'
 import { paths } from '../paths'
@@ -8,6 +9,7 @@ import { Drawing } from '../ui/drawing'
 import { Initials, Pennon, initialsOf } from '../ui/initials'
 import { ThemeSwitch } from '../ui/theme-switch'
 import { useAccent } from './accent'
+import { SignedOut } from './signed-out'
 
 /** Staff pages need sign-in and a role here. Somebody without one sees nothing of the academy. */
 export const loader =
@@ -42,7 +44,7 @@ export default function StaffLayout() {
     <div className="staff">
       <header className="mast">
         <div>
-          <Link to={paths.desk(slug)} className="mark">
+          <Link to={homeIn(slug, roles)} className="mark">
             <Drawing of="logo" />
             Marram
           </Link>
@@ -63,10 +65,16 @@ export default function StaffLayout() {
           </Link>
         </div>
       </header>
+      <SignedOut />
       <Outlet />
       <footer className="foot">
         <div className="wrap">
           <Link to={paths.my(slug)}>Your own golf</Link>
+          {may('venues:change') && (
+            <Link className="onhand" to={paths.setUp(slug)}>
+              Set-up
+            </Link>
+          )}
           <ThemeSwitch />
         </div>
       </footer>

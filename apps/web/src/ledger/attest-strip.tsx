@@ -1,18 +1,13 @@
 import type { Format } from '../academies/format'
-import { Figure } from './figure'
-import type { FigureName, MoneyCard, OpenFigure } from './queries'
+import { Figure, isSameFigure, type Openable } from './figure'
+import type { FigureName, MoneyCard } from './queries'
 
 /** The foot of the card: taken, less refunded, less fees, and what is still to be earned. */
-export function AttestStrip(props: {
-  card: MoneyCard
-  format: Format
-  open: OpenFigure | null
-  onOpen: (figure: OpenFigure) => void
-}) {
+export function AttestStrip(props: Openable & { card: MoneyCard; format: Format }) {
   const { card, format, open, onOpen } = props
   const figure = (name: FigureName, title: string, amountMinor: number) => (
     <Figure
-      isOpen={open?.figure === name && open.month === undefined}
+      isOpen={isSameFigure(open, { figure: name, title })}
       label={`${title}: ${format.money(amountMinor)}`}
       onOpen={() => onOpen({ figure: name, title })}
     >

@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
+import { useEffect, useRef } from 'react'
 import { formatLocalDay } from '@marram/schedule/format'
 import type { Format } from '../academies/format'
 import { sentenceOf } from '../api/problem'
@@ -6,7 +7,7 @@ import { ErrorState, SkeletonRows } from '../ui/states'
 import { accountInWords } from './account-words'
 import { figureQuery, type OpenFigure } from './queries'
 
-/** What a figure is made of: its transfers, which add up to it. */
+/** What a figure is made of: its transfers, which add up to it. The focus goes to its Close. */
 export function FigureDrawer(props: {
   academy: string
   year: number
@@ -16,14 +17,10 @@ export function FigureDrawer(props: {
 }) {
   const { academy, year, open, format, onClose } = props
   const figure = useQuery(figureQuery(academy, year, open))
+  const close = useRef<HTMLButtonElement>(null)
+  useEffect(() => close.current?.focus(), [])
   return (
-    <section
-      className="drawer"
-      aria-label={open.title}
-      onKeyDown={(event) => {
-        if (event.key === 'Escape') onClose()
-      }}
-    >
+    <section className="drawer" aria-label={open.title}>
       <div className="dh">
         <div>
           <h2>
@@ -32,12 +29,14 @@ export function FigureDrawer(props: {
           </h2>
           <p className="soft">{figure.data && transfersInWords(figure.data.transfers.length)}</p>
         </div>
-        <button type="button" className="linkish ml-auto" onClick={onClose}>
+        <button ref={close} type="button" className="linkish ml-auto" onClick={onClose}>
           Close
         </button>
       </div>
       {figure.isPending && <SkeletonRows rows={3} />}
-      {figure.isError && <ErrorState sentence={sentenceOf(figure.error)} />}
+      {figure.isLoadingError && (
+        <ErrorState sentence={sentenceOf(figure.error)} onRetry={() => void figure.refetch()} />
+      )}
       {figure.data && (
         <table className="sc led">
           <thead>

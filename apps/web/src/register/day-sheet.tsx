@@ -1,42 +1,32 @@
 import { useEffect, useState } from 'react'
-import { formatTime } from '@marram/schedule/format'
+import { makeFormat, type Format } from '../academies/format'
+import type { Academy } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
 import { listOf } from '../clinics/list-of'
 import { Mark, markName } from '../ui/mark'
 import { Notice } from '../ui/notice'
-import {
-  useCloseRegister,
-  useMarkPlace,
-  type Register,
-  type RegisterRow,
-  type SetMark,
-} from './queries'
+import { CloseRegister } from './close-register'
+import { useMarkPlace, type Register, type RegisterRow, type SetMark } from './queries'
 
 const MARKS: readonly SetMark[] = ['present', 'late', 'absent', 'excused']
 const UNDO_MS = 10_000
 
+/** A kept mark, with the row as it was before. */
 interface Undo {
-  text: string
-  placeId: string
-  mark: SetMark | null
+  row: RegisterRow
+  marked: SetMark | null
 }
 
 /** One register, for a gloved thumb: a row is present, Other has the four marks. */
-export function DaySheet(props: {
-  academy: string
-  date: string
-  register: Register
-  locale: string
-}) {
-  const { academy, date, register, locale } = props
+export function DaySheet(props: { academy: Academy; date: string; register: Register }) {
+  const { academy, date, register } = props
   const { session, rows } = register
-  const mark = useMarkPlace(academy, date)
-  const close = useCloseRegister(academy)
+  const format = makeFormat({ ...academy, zone: session.zone })
+  const mark = useMarkPlace(academy.slug, date)
   const [openRow, setOpenRow] = useState<string | null>(null)
   const [undo, setUndo] = useState<Undo | null>(null)
+  const [refusal, setRefusal] = useState<string | null>(null)
   const isClosed = session.registerState === 'closed'
-  const marked = rows.filter((row) => row.mark !== null).length
-  const error = mark.error ?? close.error
 
   useEffect(() => {
     if (!undo) return
@@ -44,37 +34,30 @@ export function DaySheet(props: {
     return () => clearTimeout(timer)
   }, [undo])
 
-  const press = (row: RegisterRow, next: SetMark | null) => {
-    mark.mutate({ sessionId: session.id, placeId: row.placeId, mark: next })
-    const first = row.name.split(' ')[0] ?? row.name
-    const text = next
-      ? `${first} is marked ${markName(next).toLowerCase()}`
-      : `${first}'s mark is gone`
-    setUndo({ text, placeId: row.placeId, mark: row.mark })
+  /** Keeps a mark and says how it went: each press for itself, also when another follows it. */
+  const keep = async (row: RegisterRow, next: SetMark | null): Promise<boolean> => {
     setOpenRow(null)
-  }
-  const takeBack = () => {
-    if (!undo) return
-    mark.mutate({ sessionId: session.id, placeId: undo.placeId, mark: undo.mark })
     setUndo(null)
+    setRefusal(null)
+    try {
+      await mark.mutateAsync({ sessionId: session.id, placeId: row.placeId, mark: next })
+      return true
+    } catch (error) {
+      setRefusal(`${firstNameOf(row)}’s mark was not kept. ${sentenceOf(error)}`)
+      return false
+    }
   }
-  const time = (at: string) => formatTime({ at, zone: session.zone, locale })
+  const press = async (row: RegisterRow, next: SetMark | null) => {
+    if (await keep(row, next)) setUndo({ row, marked: next })
+  }
 
   return (
     <>
-      <div className="p-4">
-        <h2>{session.clinicTitle}</h2>
-        <p>
-          {listOf(session.areas.map(({ name }) => name))}, until {time(session.endsAt)}.
-          <br />
-          {isClosed ? 'The register is closed. ' : 'Press a name for present. '}
-          {session.duskAt && <b className="haartext">Sunset {time(session.duskAt)}</b>}
-        </p>
-      </div>
+      <SheetHead session={session} format={format} />
       {session.state === 'called-off' && (
         <Notice drawing="wind">Called off: {session.calledOffReason}. There is no register.</Notice>
       )}
-      {error && <Notice kind="flag">{sentenceOf(error)}</Notice>}
+      {refusal && <Notice kind="flag">{refusal}</Notice>}
       <ul className="reg">
         {rows.map((row) => (
           <Row
@@ -83,37 +66,56 @@ export function DaySheet(props: {
             isClosed={isClosed || session.state === 'called-off'}
             isOpen={openRow === row.placeId}
             onOpen={() => setOpenRow(openRow === row.placeId ? null : row.placeId)}
-            onPress={(next) => press(row, next)}
+            onPress={(next) => void press(row, next)}
           />
         ))}
         {rows.length === 0 && <li className="p-4">Nobody has a place in this session.</li>}
       </ul>
       {session.state === 'planned' && (
         <div className="dock">
-          {undo && (
-            <div className="undo" role="status">
-              <span>{undo.text}</span>
-              <button type="button" onClick={takeBack}>
-                Undo
-              </button>
-            </div>
-          )}
-          <CloseButton
-            isClosed={isClosed}
-            isBusy={close.isPending}
-            marked={marked}
-            total={rows.length}
-            onPress={() =>
-              close.mutate({
-                sessionId: session.id,
-                revision: register.revision,
-                isClosing: !isClosed,
-              })
-            }
-          />
+          {undo && <UndoLine undo={undo} onUndo={() => void keep(undo.row, undo.row.mark)} />}
+          <CloseRegister academy={academy.slug} register={register} />
         </div>
       )}
     </>
+  )
+}
+
+function SheetHead({ session, format }: { session: Register['session']; format: Format }) {
+  const isClosed = session.registerState === 'closed'
+  return (
+    <div className="p-4">
+      <h2>{session.clinicTitle}</h2>
+      <p>
+        {listOf(session.areas.map(({ name }) => name))}, until {format.time(session.endsAt)}.
+        <br />
+        {isClosed ? 'The register is closed. ' : 'Press a name for present. '}
+        {session.duskAt && (
+          <b className="haartext">
+            {format.dusk.word} {format.time(session.duskAt)}
+          </b>
+        )}
+      </p>
+    </div>
+  )
+}
+
+const firstNameOf = ({ name }: RegisterRow): string => name.split(' ')[0] ?? name
+
+/** The last thing done, and the way back from it. */
+function UndoLine({ undo, onUndo }: { undo: Undo; onUndo: () => void }) {
+  const first = firstNameOf(undo.row)
+  return (
+    <div className="undo" role="status">
+      <span>
+        {undo.marked
+          ? `${first} is marked ${markName(undo.marked).toLowerCase()}`
+          : `${first}’s mark is gone`}
+      </span>
+      <button type="button" onClick={onUndo}>
+        Undo
+      </button>
+    </div>
   )
 }
 
@@ -133,7 +135,7 @@ function Row(props: {
           className="mainb"
           disabled={isClosed}
           onClick={() => onPress(row.mark === 'present' ? null : 'present')}
-          aria-label={`${row.name}, ${row.mark ? markName(row.mark) : 'not yet marked'}. Press for present.`}
+          aria-label={`${row.name}, ${row.mark ? markName(row.mark) : 'not yet marked'}. ${row.mark === 'present' ? 'Press to take the mark away.' : 'Press for present.'}`}
         >
           <span className="mkb">
             <Mark mark={row.mark ?? 'not-yet'} isSilent />
@@ -172,32 +174,5 @@ function Row(props: {
         </div>
       )}
     </li>
-  )
-}
-
-function CloseButton(props: {
-  isClosed: boolean
-  isBusy: boolean
-  marked: number
-  total: number
-  onPress: () => void
-}) {
-  const { isClosed, isBusy, marked, total, onPress } = props
-  if (isClosed) {
-    return (
-      <button type="button" className="btn wide big" disabled={isBusy} onClick={onPress}>
-        Open the register again
-      </button>
-    )
-  }
-  return (
-    <button
-      type="button"
-      className="btn go wide big"
-      disabled={isBusy || marked < total}
-      onClick={onPress}
-    >
-      {isBusy ? 'Closing…' : `Close register, ${marked} of ${total} marked`}
-    </button>
   )
 }

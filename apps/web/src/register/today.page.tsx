@@ -2,18 +2,17 @@ import { useQuery, useSuspenseQuery, type QueryClient } from '@tanstack/react-qu
 import { useState } from 'react'
 import { Link, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router'
 import { formatLocalDay, formatTime } from '@marram/schedule/format'
-import { academyQuery } from '../academies/queries'
+import { shiftDay, todayIn } from '../academies/local-day'
+import { academyQuery, type Academy } from '../academies/queries'
 import { sentenceOf } from '../api/problem'
 import { useTitle } from '../layouts/accent'
 import { paths } from '../paths'
 import { buttonClass } from '../ui/button'
 import { EmptyState, ErrorState, SkeletonRows } from '../ui/states'
+import { useNow } from '../ui/use-now'
 import { DaySheet } from './day-sheet'
+import { firstRegister } from './first-register'
 import { dayQuery, type Register } from './queries'
-
-/** Today where the academy is, as a local date. */
-const todayIn = (timeZone: string): string =>
-  new Intl.DateTimeFormat('en-CA', { timeZone }).format(new Date(Date.now()))
 
 export const loader =
   (client: QueryClient) =>
@@ -33,27 +32,24 @@ export default function TodayPage() {
   const { locale } = academy
   const date = query.get('day') ?? todayIn(academy.zone)
   const day = useQuery(dayQuery(slug, date))
-  const [chosen, setChosen] = useState<string | null>(null)
   const title = formatLocalDay({ dayLocal: date, locale, style: 'weekday' })
   useTitle(title)
 
   if (day.isPending) {
     return (
-      <main id="main" className="hand body">
+      <main id="main" className="hand">
         <h1 className="p-4">{title}</h1>
         <SkeletonRows rows={6} />
       </main>
     )
   }
-  if (day.isError) {
+  if (day.isLoadingError) {
     return (
       <main id="main" className="hand">
         <ErrorState sentence={sentenceOf(day.error)} onRetry={() => void day.refetch()} />
       </main>
     )
   }
-  const { registers, zone } = day.data
-  const current = registers.find(({ session }) => session.id === chosen) ?? nextOf(registers)
   return (
     <main id="main" className="hand">
       <div className="bar">
@@ -61,75 +57,70 @@ export default function TodayPage() {
         <span className="actions">
           <Link
             className={buttonClass()}
-            to={paths.today(slug, shift(date, -1))}
+            to={paths.today(slug, shiftDay(date, -1))}
             aria-label="The day before"
           >
             ‹
           </Link>
           <Link
             className={buttonClass()}
-            to={paths.today(slug, shift(date, 1))}
+            to={paths.today(slug, shiftDay(date, 1))}
             aria-label="The day after"
           >
             ›
           </Link>
         </span>
       </div>
-      {registers.length > 1 && (
-        <nav className="strip" aria-label="Sessions of the day">
-          {registers.map((register) => (
-            <a
-              key={register.session.id}
-              href={`#${register.session.id}`}
-              aria-current={register === current ? 'true' : undefined}
-              onClick={(event) => {
-                event.preventDefault()
-                setChosen(register.session.id)
-              }}
-            >
-              {formatTime({ at: register.session.startsAt, zone, locale })}
-              <small>{stateOf(register)}</small>
-            </a>
-          ))}
-        </nav>
-      )}
-      {current ? (
-        <DaySheet
-          key={current.session.id}
-          academy={slug}
-          date={date}
-          register={current}
-          locale={locale}
-        />
-      ) : (
-        <div className="p-4">
-          <EmptyState>No session on this day.</EmptyState>
-        </div>
-      )}
+      <Registers key={date} academy={academy} date={date} registers={day.data.registers} />
     </main>
   )
 }
 
-/** The one that goes on or comes next; after the last, the first that is still open. */
-function nextOf(registers: readonly Register[]): Register | undefined {
-  const now = Date.now()
+function Registers(props: { academy: Academy; date: string; registers: readonly Register[] }) {
+  const { academy, date, registers } = props
+  // Chosen once for a day: a mark pressed after a session's end must not lead to the next sheet.
+  const [chosenId, setChosenId] = useState(
+    () => firstRegister(registers, Date.now())?.session.id ?? null,
+  )
+  const current = registers.find(({ session }) => session.id === chosenId) ?? registers[0]
+  const now = useNow()
+  if (!current) {
+    return (
+      <div className="p-4">
+        <EmptyState>No session on this day.</EmptyState>
+      </div>
+    )
+  }
   return (
-    registers.find(
-      ({ session }) => Date.parse(session.endsAt) > now && session.state === 'planned',
-    ) ??
-    registers.find(({ session }) => session.registerState === 'open') ??
-    registers[0]
+    <>
+      {registers.length > 1 && (
+        <nav className="strip" aria-label="Sessions of the day">
+          {registers.map((register) => (
+            <button
+              key={register.session.id}
+              type="button"
+              aria-current={register === current ? 'true' : undefined}
+              onClick={() => setChosenId(register.session.id)}
+            >
+              {formatTime({
+                at: register.session.startsAt,
+                zone: register.session.zone,
+                locale: academy.locale,
+              })}
+              <small>{stateOf(register, now)}</small>
+            </button>
+          ))}
+        </nav>
+      )}
+      <DaySheet key={current.session.id} academy={academy} date={date} register={current} />
+    </>
   )
 }
 
-function stateOf({ session, rows }: Register): string {
+function stateOf({ session, rows }: Register, now: number): string {
   if (session.state === 'called-off') return 'Called off'
   if (session.registerState === 'closed') return 'Done'
-  const minutes = Math.round((Date.parse(session.startsAt) - Date.now()) / 60_000)
+  const minutes = Math.round((Date.parse(session.startsAt) - now) / 60_000)
   if (minutes > 0 && minutes <= 90) return `In ${minutes} min`
   return `${rows.length} ${rows.length === 1 ? 'golfer' : 'golfers'}`
-}
-
-function shift(day: string, by: number): string {
-  return new Date(Date.parse(`${day}T12:00:00Z`) + by * 86_400_000).toISOString().slice(0, 10)
 }

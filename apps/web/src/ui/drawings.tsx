@@ -106,20 +106,6 @@ export const DRAWINGS = {
       </>
     ),
   },
-  noSignal: {
-    viewBox: '0 0 16 16',
-    paths: (
-      <>
-        <path
-          d="M1 14.500 14.500 1M2.500 6.500C5 4.300 8 3.700 10 4M5 9.800c1.200-1 2.600-1.400 4-1.200M13.700 6.700l-1-.8M8 13.600v.1"
-          stroke="currentColor"
-          strokeWidth="1.800"
-          fill="none"
-          strokeLinecap="round"
-        />
-      </>
-    ),
-  },
   clock: {
     viewBox: '0 0 16 16',
     paths: (

@@ -52,13 +52,20 @@ export function TextArea({
   )
 }
 
-interface SelectProps extends FieldProps {
-  value: string
-  options: readonly { value: string; label: string }[]
-  onChange: (value: string) => void
+interface SelectProps<Value extends string> extends FieldProps {
+  value: Value
+  options: readonly { value: Value; label: string }[]
+  onChange: (value: Value) => void
 }
 
-export function SelectField({ label, hint, error, value, options, onChange }: SelectProps) {
+export function SelectField<Value extends string>({
+  label,
+  hint,
+  error,
+  value,
+  options,
+  onChange,
+}: SelectProps<Value>) {
   const { id, describedBy } = useFieldIds({ hint, error })
   return (
     <div className={error ? 'f bad' : 'f'}>
@@ -67,7 +74,9 @@ export function SelectField({ label, hint, error, value, options, onChange }: Se
         id={id}
         value={value}
         aria-describedby={describedBy}
-        onChange={(event) => onChange(event.target.value)}
+        aria-invalid={error ? true : undefined}
+        // A select holds the value of one of its options, and of nothing else.
+        onChange={(event) => onChange(event.target.value as Value)}
       >
         {options.map((option) => (
           <option key={option.value} value={option.value}>

@@ -16,7 +16,7 @@ export function FormDialog(props: {
 }) {
   const { title, action, form, sentence, isSending, onClose } = props
   return (
-    <Dialog title={title} isOpen onClose={onClose}>
+    <Dialog title={title} isOpen isWrittenOn onClose={onClose}>
       <form {...form}>
         {sentence && <Notice kind="flag">{sentence}</Notice>}
         {props.children}

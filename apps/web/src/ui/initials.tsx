@@ -1,3 +1,5 @@
+import { Drawing } from './drawing'
+
 /** Somebody's initials in a printed box; the name stands beside it. */
 export function Initials({ of: initials }: { of: string }) {
   return (
@@ -7,14 +9,8 @@ export function Initials({ of: initials }: { of: string }) {
   )
 }
 
-export function Pennon() {
-  return (
-    <svg className="pennon" viewBox="0 0 14 20" aria-hidden>
-      <path d="M1 0h1.600v20H1z" fill="var(--color-ink)" />
-      <path d="M2.600 1.200 13.400 5 2.600 8.900z" fill="currentColor" />
-    </svg>
-  )
-}
+/** The academy's pennon, in its accent; its name follows. */
+export const Pennon = () => <Drawing of="pennon" className="pennon" />
 
 /** "Priya Nandakumar" is PN. */
 export function initialsOf(name: string): string {

@@ -1,4 +1,5 @@
-const MOST_TICKS = 12
+/** Over so many places a figure is read faster than ticks. */
+export const MOST_TICKS = 12
 
 /** One pencil tally for each place; over twelve the figure is written. */
 export function PlaceTicks({ taken, capacity }: { taken: number; capacity: number }) {

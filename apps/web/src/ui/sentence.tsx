@@ -5,21 +5,29 @@ export function Sentence({ children, isSmall }: { children: ReactNode; isSmall?:
   return <p className={isSmall ? 'say sm' : 'say'}>{children}</p>
 }
 
-interface WordProps {
+interface WordProps<Value extends string> {
   /** What the word is about, for those who hear it: "Day". */
   label: string
-  value: string
-  onChange: (value: string) => void
+  value: Value
+  onChange: (value: Value) => void
+  isWrong?: boolean
 }
 
-export function SelectWord({
+export function SelectWord<Value extends string>({
   label,
   value,
   onChange,
   options,
-}: WordProps & { options: readonly { value: string; label: string }[] }) {
+  isWrong,
+}: WordProps<Value> & { options: readonly { value: Value; label: string }[] }) {
   return (
-    <select aria-label={label} value={value} onChange={(event) => onChange(event.target.value)}>
+    <select
+      aria-label={label}
+      aria-invalid={isWrong || undefined}
+      value={value}
+      // A select holds the value of one of its options, and of nothing else.
+      onChange={(event) => onChange(event.target.value as Value)}
+    >
       {options.map((option) => (
         <option key={option.value} value={option.value}>
           {option.label}
@@ -33,9 +41,10 @@ export function InputWord({
   label,
   value,
   onChange,
+  isWrong,
   type = 'text',
   ...rest
-}: WordProps & {
+}: WordProps<string> & {
   type?: 'text' | 'date' | 'time' | 'number'
   min?: number
   max?: number
@@ -43,12 +52,10 @@ export function InputWord({
   size?: number
   placeholder?: string
   inputMode?: 'decimal'
-  isWrong?: boolean
 }) {
-  const { isWrong, ...input } = rest
   return (
     <input
-      {...input}
+      {...rest}
       type={type}
       aria-label={label}
       aria-invalid={isWrong || undefined}

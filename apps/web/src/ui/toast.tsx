@@ -1,4 +1,4 @@
-import { useEffect, useSyncExternalStore } from 'react'
+import { useEffect, useRef, useState, useSyncExternalStore, type RefObject } from 'react'
 
 interface Toast {
   id: number
@@ -29,23 +29,46 @@ function subscribe(listener: () => void): () => void {
   return () => listeners.delete(listener)
 }
 
-/** Where toasts are laid down; read out as they come. */
+/** Where toasts are laid down; read out as they come. F6 leads to them, and back. */
 export function ToastRegion() {
   const shown = useSyncExternalStore(subscribe, () => toasts)
+  const region = useRef<HTMLDivElement>(null)
+  const [isHovered, setIsHovered] = useState(false)
+  const [isFocused, setIsFocused] = useState(false)
+  useF6(region)
   return (
-    <div className="toasts" role="status" aria-live="polite">
+    <div
+      ref={region}
+      className="toasts"
+      role="status"
+      aria-live="polite"
+      tabIndex={-1}
+      onMouseEnter={() => setIsHovered(true)}
+      onMouseLeave={() => setIsHovered(false)}
+      onFocus={() => setIsFocused(true)}
+      onBlur={() => setIsFocused(false)}
+    >
       {shown.map((entry) => (
-        <ToastLine key={entry.id} entry={entry} />
+        <ToastLine
+          key={entry.id}
+          entry={entry}
+          isHeld={isHovered || isFocused}
+          // A button that goes away with the focus on it says nothing of it.
+          onUndone={() => setIsFocused(false)}
+        />
       ))}
     </div>
   )
 }
 
-function ToastLine({ entry }: { entry: Toast }) {
+/** Nothing is taken away under the pointer or the focus: the time begins anew when they leave. */
+function ToastLine(props: { entry: Toast; isHeld: boolean; onUndone: () => void }) {
+  const { entry, isHeld, onUndone } = props
   useEffect(() => {
+    if (isHeld) return
     const timer = setTimeout(() => dismiss(entry.id), SHOWN_MS)
     return () => clearTimeout(timer)
-  }, [entry.id])
+  }, [entry.id, isHeld])
   const { undo } = entry
   return (
     <div className="toast">
@@ -57,6 +80,7 @@ function ToastLine({ entry }: { entry: Toast }) {
           onClick={() => {
             undo()
             dismiss(entry.id)
+            onUndone()
           }}
         >
           Undo
@@ -64,4 +88,23 @@ function ToastLine({ entry }: { entry: Toast }) {
       )}
     </div>
   )
+}
+
+function useF6(region: RefObject<HTMLElement | null>): void {
+  const origin = useRef<Element | null>(null)
+  useEffect(() => {
+    const press = (event: KeyboardEvent) => {
+      if (event.key !== 'F6' || !region.current || toasts.length === 0) return
+      event.preventDefault()
+      if (region.current.contains(document.activeElement)) {
+        if (origin.current instanceof HTMLElement) origin.current.focus()
+        return
+      }
+      origin.current = document.activeElement
+      const target = region.current.querySelector('button') ?? region.current
+      target.focus()
+    }
+    document.addEventListener('keydown', press)
+    return () => document.removeEventListener('keydown', press)
+  }, [region])
 }

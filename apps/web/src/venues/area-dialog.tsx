@@ -4,7 +4,7 @@ import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { CheckField, Field, SelectField } from '../ui/field'
 import { FormDialog } from '../ui/form-dialog'
-import { AREA_KINDS, usualArea, type Area, type AreaBody, type AreaKind } from './area-words'
+import { AREA_KINDS, usualArea, type Area, type AreaBody } from './area-words'
 
 /** A part of a venue: what it is, how many bays, and whether it can be used in the dark or the wet. */
 export function AreaDialog(props: {
@@ -21,10 +21,13 @@ export function AreaDialog(props: {
       ? call('areas.change', { academy: slug, params: { areaId: area.id }, body: wanted })
       : call('areas.add', { academy: slug, params: { venueId }, body: wanted }),
   )
-  const { errors, ...dialog } = useForm(async () => {
-    await keep.mutateAsync(undefined)
-    onClose()
-  })
+  const { errors, ...dialog } = useForm(
+    async () => {
+      await keep.mutateAsync(undefined)
+      onClose()
+    },
+    { beside: ['name', 'units'] },
+  )
   return (
     <FormDialog
       {...dialog}
@@ -36,7 +39,7 @@ export function AreaDialog(props: {
         label="What it is"
         value={wanted.kind}
         options={AREA_KINDS}
-        onChange={(kind) => setWanted(usualArea(kind as AreaKind))}
+        onChange={(kind) => setWanted(usualArea(kind))}
       />
       <Field
         label="Name"

@@ -50,7 +50,7 @@ export const AREA_KINDS: readonly {
 
 export function lightOf({ kind, hasLamps }: Pick<Area, 'kind' | 'hasLamps'>): string {
   if (kind === 'indoor') return 'Indoors'
-  return hasLamps ? 'Lamps' : 'None'
+  return hasLamps ? 'Lamps' : 'No lamps'
 }
 
 /** An area as one of its kind usually is. */

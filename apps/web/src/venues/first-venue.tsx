@@ -1,136 +1,60 @@
 import { useState } from 'react'
-import { call } from '../api/client'
 import { useForm } from '../api/form'
 import { useAcademyMutation } from '../api/mutation'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
-import { InputWord, SelectWord, Sentence } from '../ui/sentence'
-import { AREA_KINDS, usualArea, type AreaKind, type Venue } from './area-words'
-import { readPosition } from './position'
+import { InputWord, Sentence } from '../ui/sentence'
+import { AreaWords, PositionWords } from './first-venue-words'
+import {
+  WORD_NAMES,
+  keepFirstVenue,
+  type FirstVenueContext,
+  type FirstVenueDraft,
+} from './keep-first-venue'
 
-interface Wanted {
-  name: string
-  latitude: string
-  northOrSouth: 'north' | 'south'
-  longitude: string
-  eastOrWest: 'east' | 'west'
-  kind: AreaKind
-  units: string
-  lamps: 'lamps' | 'no lamps'
-  cover: 'covered' | 'open'
-  coach: string
+const USUAL: FirstVenueDraft = {
+  name: '',
+  latitude: '',
+  northOrSouth: 'north',
+  longitude: '',
+  eastOrWest: 'west',
+  kind: 'range',
+  units: '12',
+  lamps: 'lamps',
+  cover: 'covered',
+  coach: '',
 }
 
 /** The second sentence: where teaching happens, and who does it. */
-export function FirstVenue(props: {
-  slug: string
-  me: { name: string; email: string }
-  /** What an earlier try got as far as keeping. */
-  kept: { venue: Venue | undefined; hasCoach: boolean }
-}) {
-  const [wanted, setWanted] = useState<Wanted>({
-    name: '',
-    latitude: '',
-    northOrSouth: 'north',
-    longitude: '',
-    eastOrWest: 'west',
-    kind: 'range',
-    units: '12',
-    lamps: 'lamps',
-    cover: 'covered',
-    coach: props.me.name,
+export function FirstVenue(props: FirstVenueContext) {
+  const [draft, setDraft] = useState({ ...USUAL, coach: props.me.name })
+  const change = (part: Partial<FirstVenueDraft>) => setDraft((had) => ({ ...had, ...part }))
+  const keep = useAcademyMutation(props.slug, () => keepFirstVenue(props, draft))
+  const { form, errors, sentence, isSending } = useForm(() => keep.mutateAsync(undefined), {
+    named: WORD_NAMES,
   })
-  const set = (change: Partial<Wanted>) => setWanted((had) => ({ ...had, ...change }))
-  const keep = useAcademyMutation(props.slug, () => keepVenue(props, wanted))
-
-  const { form, all, isSending } = useForm(() => keep.mutateAsync(undefined))
-  const chooseKind = (kind: AreaKind) => {
-    const { units, hasLamps, isCovered } = usualArea(kind)
-    set({
-      kind,
-      units: String(units),
-      lamps: hasLamps ? 'lamps' : 'no lamps',
-      cover: isCovered ? 'covered' : 'open',
-    })
-  }
-
+  const words = { draft, onChange: change, errors }
   return (
     <form {...form}>
       <Sentence>
         At{' '}
         <InputWord
           label="Name of the venue"
-          value={wanted.name}
+          value={draft.name}
           placeholder="your range or club"
-          onChange={(name) => set({ name })}
+          isWrong={Boolean(errors['venue.name'])}
+          onChange={(name) => change({ name })}
         />
-        ,{' '}
+        , <PositionWords {...words} />. It has <AreaWords {...words} />.{' '}
         <InputWord
-          label="Latitude in degrees"
-          value={wanted.latitude}
-          placeholder="53.8512"
-          inputMode="decimal"
-          onChange={(latitude) => set({ latitude })}
+          label="Coach"
+          value={draft.coach}
+          isWrong={Boolean(errors['coach.name'])}
+          onChange={(coach) => change({ coach })}
         />{' '}
-        <SelectWord
-          label="North or south"
-          value={wanted.northOrSouth}
-          onChange={(side) => set({ northOrSouth: side as Wanted['northOrSouth'] })}
-          options={['north', 'south'].map((value) => ({ value, label: value }))}
-        />
-        ,{' '}
-        <InputWord
-          label="Longitude in degrees"
-          value={wanted.longitude}
-          placeholder="6.2410"
-          inputMode="decimal"
-          onChange={(longitude) => set({ longitude })}
-        />{' '}
-        <SelectWord
-          label="East or west"
-          value={wanted.eastOrWest}
-          onChange={(side) => set({ eastOrWest: side as Wanted['eastOrWest'] })}
-          options={['east', 'west'].map((value) => ({ value, label: value }))}
-        />
-        . It has{' '}
-        <SelectWord
-          label="Area"
-          value={wanted.kind}
-          onChange={(kind) => chooseKind(kind as AreaKind)}
-          options={AREA_KINDS}
-        />{' '}
-        with{' '}
-        <InputWord
-          label="Bays"
-          type="number"
-          min={1}
-          max={200}
-          value={wanted.units}
-          onChange={(units) => set({ units })}
-        />{' '}
-        {wanted.units === '1' ? 'bay' : 'bays'}
-        {wanted.kind !== 'indoor' && (
-          <>
-            ,{' '}
-            <SelectWord
-              label="Lamps"
-              value={wanted.lamps}
-              onChange={(lamps) => set({ lamps: lamps as Wanted['lamps'] })}
-              options={['lamps', 'no lamps'].map((value) => ({ value, label: value }))}
-            />
-          </>
-        )}
-        ,{' '}
-        <SelectWord
-          label="Cover"
-          value={wanted.cover}
-          onChange={(cover) => set({ cover: cover as Wanted['cover'] })}
-          options={['covered', 'open'].map((value) => ({ value, label: value }))}
-        />
-        . <InputWord label="Coach" value={wanted.coach} onChange={(coach) => set({ coach })} />{' '}
         teaches.
       </Sentence>
-      {all && <Notice kind="flag">{all}</Notice>}
+      {sentence && <Notice kind="flag">{sentence}</Notice>}
       <p className="rowb2 mt-4">
         <Button type="submit" kind="go" isBig waiting={isSending && 'Keeping…'}>
           Keep the place
@@ -139,40 +63,4 @@ export function FirstVenue(props: {
       </p>
     </form>
   )
-}
-
-/** Goes on where an earlier try stopped, so that nothing is kept twice. */
-async function keepVenue(
-  { slug, me, kept }: Pick<Parameters<typeof FirstVenue>[0], 'slug' | 'me' | 'kept'>,
-  wanted: Wanted,
-) {
-  const { latitudeDeg, longitudeDeg } = readPosition(wanted)
-  const venue =
-    kept.venue ??
-    (await call('venues.add', {
-      academy: slug,
-      body: {
-        name: wanted.name,
-        latitudeDeg: wanted.northOrSouth === 'south' ? -latitudeDeg : latitudeDeg,
-        longitudeDeg: wanted.eastOrWest === 'west' ? -longitudeDeg : longitudeDeg,
-      },
-    }))
-  if (venue.areas.length === 0) {
-    await call('areas.add', {
-      academy: slug,
-      params: { venueId: venue.id },
-      body: {
-        ...usualArea(wanted.kind),
-        units: Number(wanted.units),
-        hasLamps: wanted.lamps === 'lamps',
-        isCovered: wanted.cover === 'covered',
-      },
-    })
-  }
-  if (kept.hasCoach) return
-  const isMe = wanted.coach.trim() === me.name
-  await call('coaches.add', {
-    academy: slug,
-    body: { name: wanted.coach, ...(isMe ? { invite: me.email } : {}) },
-  })
 }

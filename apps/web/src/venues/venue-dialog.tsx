@@ -29,10 +29,13 @@ export function VenueDialog(props: { slug: string; venue: Venue | null; onClose:
       ? call('venues.change', { academy: slug, params: { venueId: venue.id }, body })
       : call('venues.add', { academy: slug, body })
   })
-  const { errors, ...dialog } = useForm(async () => {
-    await keep.mutateAsync(undefined)
-    onClose()
-  })
+  const { errors, ...dialog } = useForm(
+    async () => {
+      await keep.mutateAsync(undefined)
+      onClose()
+    },
+    { beside: ['name', 'latitudeDeg', 'longitudeDeg', 'address', 'gettingHere'] },
+  )
   return (
     <FormDialog
       {...dialog}

@@ -53,53 +53,7 @@ function VenueCard(props: { slug: string; venue: Venue; mayChange: boolean }) {
           </span>
         )}
       </div>
-      <div className="card mb-5">
-        <table className="sc jv">
-          <thead>
-            <tr>
-              <th scope="col">Area</th>
-              <th scope="col" className="ctr">
-                Bays
-              </th>
-              <th scope="col" className="l">
-                Lamps
-              </th>
-              <th scope="col" className="l">
-                Cover
-              </th>
-              <th scope="col" className="l">
-                <span className="vh">Change</span>
-              </th>
-            </tr>
-          </thead>
-          <tbody>
-            {venue.areas.map((each) => (
-              <tr key={each.id}>
-                <th scope="row">{each.name}</th>
-                <td className="ctr">
-                  <b>{each.units}</b>
-                </td>
-                <td className="l">{lightOf(each)}</td>
-                <td className="l">{each.isCovered ? 'Covered' : 'Open'}</td>
-                <td className="l">
-                  {mayChange && (
-                    <button type="button" className="linkish" onClick={() => setArea(each)}>
-                      Change<span className="vh"> {each.name}</span>
-                    </button>
-                  )}
-                </td>
-              </tr>
-            ))}
-            {venue.areas.length === 0 && (
-              <tr>
-                <td colSpan={5} className="l">
-                  No area yet. Say what golfers stand on here.
-                </td>
-              </tr>
-            )}
-          </tbody>
-        </table>
-      </div>
+      <AreaTable areas={venue.areas} {...(mayChange ? { onChange: setArea } : {})} />
       {isChanging && <VenueDialog slug={slug} venue={venue} onClose={() => setIsChanging(false)} />}
       {area && (
         <AreaDialog
@@ -110,6 +64,60 @@ function VenueCard(props: { slug: string; venue: Venue; mayChange: boolean }) {
         />
       )}
     </>
+  )
+}
+
+/** The areas of a venue, with their bays and their light. */
+function AreaTable(props: { areas: readonly Area[]; onChange?: (area: Area) => void }) {
+  const { areas, onChange } = props
+  return (
+    <div className="card mb-5">
+      <table className="sc jv">
+        <thead>
+          <tr>
+            <th scope="col">Area</th>
+            <th scope="col" className="ctr">
+              Bays
+            </th>
+            <th scope="col" className="l">
+              Lamps
+            </th>
+            <th scope="col" className="l">
+              Cover
+            </th>
+            <th scope="col" className="l">
+              <span className="vh">Change</span>
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {areas.map((each) => (
+            <tr key={each.id}>
+              <th scope="row">{each.name}</th>
+              <td className="ctr">
+                <b>{each.units}</b>
+              </td>
+              <td className="l">{lightOf(each)}</td>
+              <td className="l">{each.isCovered ? 'Covered' : 'Open'}</td>
+              <td className="l">
+                {onChange && (
+                  <button type="button" className="linkish" onClick={() => onChange(each)}>
+                    Change<span className="vh"> {each.name}</span>
+                  </button>
+                )}
+              </td>
+            </tr>
+          ))}
+          {areas.length === 0 && (
+            <tr>
+              <td colSpan={5} className="l">
+                No area yet. Say what golfers stand on here.
+              </td>
+            </tr>
+          )}
+        </tbody>
+      </table>
+    </div>
   )
 }
 

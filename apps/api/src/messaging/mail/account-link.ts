@@ -1,4 +1,7 @@
+import { LINK_HOURS } from '../../accounts/accounts'
+import { INVITATION_DAYS } from '../../academies/staff'
 import type { Letter } from '../letter'
+import { spanInWords } from '../span-in-words'
 
 const FOOTER = 'Marram. If you did not ask for this, do nothing: without the link nothing changes.'
 const ACCENT = '#26563d'
@@ -9,7 +12,8 @@ export function verificationLetter(given: { name: string; url: string }): Letter
     heading: 'Marram',
     greeting: `Hello ${given.name},`,
     paragraphs: [
-      'Press the button to confirm that this address is yours. It works for seven days.',
+      'Press the button to confirm that this address is yours. ' +
+        `It works for ${spanInWords({ hours: LINK_HOURS.verify })}.`,
     ],
     action: { label: 'Confirm my address', url: given.url },
     footer: FOOTER,
@@ -23,7 +27,9 @@ export function resetLetter(given: { name: string; url: string }): Letter {
     heading: 'Marram',
     greeting: `Hello ${given.name},`,
     paragraphs: [
-      'Press the button to choose a new password. It works for one hour, once, and signs you out everywhere else.',
+      'Press the button to choose a new password. ' +
+        `It works for ${spanInWords({ hours: LINK_HOURS.reset })}, once, and signs you out ` +
+        'everywhere else.',
     ],
     action: { label: 'Choose a new password', url: given.url },
     footer: FOOTER,
@@ -43,7 +49,8 @@ export function invitationLetter(given: {
     greeting: 'Hello,',
     paragraphs: [
       `You are invited to join ${given.academyName} as ${roleInWords(given.role)}.`,
-      'Press the button and sign in, or make an account with this address. It works for seven days.',
+      'Press the button and sign in, or make an account with this address. ' +
+        `It works for ${spanInWords({ hours: INVITATION_DAYS * 24 })}.`,
     ],
     action: { label: 'Take up the invitation', url: given.url },
     footer: 'If you do not know this academy, do nothing.',

@@ -1,6 +1,8 @@
 import { formatTime, formatDay } from '@marram/schedule/format'
 import { moneyText, timeText, type EnrolmentFacts } from '../facts'
+import { CHOICE_DAYS } from '../../checkout/called-off'
 import type { Letter } from '../letter'
+import { spanInWords } from '../span-in-words'
 
 type Draft = Pick<Letter, 'subject' | 'paragraphs' | 'facts' | 'action'>
 
@@ -96,7 +98,8 @@ export function calledOffLetter(
     given.owedMinor > 0
       ? [
           `${moneyText(academy, given.owedMinor)} is yours: back as money, or kept as credit. ` +
-            `You have seven days to choose; then it is ${defaultInWords(academy.owedDefault)}.`,
+            `You have ${spanInWords({ hours: CHOICE_DAYS * 24 })} to choose; ` +
+            `then it is ${defaultInWords(academy.owedDefault)}.`,
         ]
       : []
   return letter(facts, {
@@ -114,7 +117,12 @@ const defaultInWords = (choice: 'credit' | 'money') =>
 
 export function changedLetter(
   facts: EnrolmentFacts,
-  given: { session: { startsAt: Date; endsAt: Date }; areas: readonly string[]; url: string },
+  given: {
+    session: { startsAt: Date; endsAt: Date }
+    areas: readonly string[]
+    coaches: readonly string[]
+    url: string
+  },
 ): Letter {
   const { clinic, venue } = facts
   return letter(facts, {
@@ -123,6 +131,7 @@ export function changedLetter(
     facts: [
       ['When', timeText(facts, given.session)],
       ['Where', [given.areas.join(' and '), venue.name].filter(Boolean).join(', ')],
+      ['With', given.coaches.join(' and ')],
     ],
     action: { label: 'See the place', url: given.url },
   })

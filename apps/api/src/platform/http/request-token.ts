@@ -2,6 +2,7 @@ import { createHmac, randomBytes, timingSafeEqual } from 'node:crypto'
 import type { Request, RequestHandler, Response } from 'express'
 import { Problem } from '../errors'
 import type { Services } from '../services'
+import { cookieName } from './sign-in-session'
 
 const SAFE_METHODS = new Set(['GET', 'HEAD', 'OPTIONS'])
 const HEADER = 'x-marram-token'
@@ -19,7 +20,10 @@ export function checkOriginAndToken(services: Services): RequestHandler {
       throw new Problem('foreign-origin', 'This came from a page that is not ours.')
     }
     const sent = request.get(HEADER) ?? ''
-    if (!isValid(services, request, sent) || sent !== cookieOf(request)) {
+    if (!isValid(services, request, sent) || sent !== cookieOf(request, COOKIE)) {
+      if (isSignInGone(services, request)) {
+        throw new Problem('not-signed-in', 'Your sign-in has ended. Please sign in again.')
+      }
       throw new Problem(
         'foreign-origin',
         'This page is out of date. Load it again and try once more.',
@@ -31,7 +35,7 @@ export function checkOriginAndToken(services: Services): RequestHandler {
 
 /** The token of this visitor, made when there is none or when it belongs to an earlier sign-in. */
 export function tokenOf(services: Services, request: Request, response: Response): string {
-  const had = cookieOf(request)
+  const had = cookieOf(request, COOKIE)
   if (had && isValid(services, request, had)) return had
   const nonce = randomBytes(18).toString('base64url')
   const token = `${nonce}.${sign(services, request, nonce)}`
@@ -58,10 +62,19 @@ function sign(services: Services, request: Request, nonce: string): string {
     .digest('base64url')
 }
 
-function cookieOf(request: Request): string | undefined {
+/**
+ * Whether the browser still carries a sign-in that has ended: the session middleware found nothing
+ * under its id and began anew. Its token is then as old as the sign-in, and no page is to blame.
+ */
+function isSignInGone(services: Services, request: Request): boolean {
+  const carried = cookieOf(request, cookieName(services.config))
+  return carried !== undefined && !carried.includes(request.sessionID)
+}
+
+function cookieOf(request: Request, name: string): string | undefined {
   const header = request.get('cookie') ?? ''
   return header
     .split(/;\s*/)
-    .find((pair) => pair.startsWith(`${COOKIE}=`))
-    ?.slice(COOKIE.length + 1)
+    .find((pair) => pair.startsWith(`${name}=`))
+    ?.slice(name.length + 1)
 }

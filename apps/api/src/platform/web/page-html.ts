@@ -48,10 +48,12 @@ export function inScript(value: unknown): string {
     .replaceAll('\u2029', '\\u2029')
 }
 
+/** Text as it may stand in HTML, in an attribute as well. */
 export function escapeHtml(text: string): string {
   return text
     .replaceAll('&', '&amp;')
     .replaceAll('<', '&lt;')
     .replaceAll('>', '&gt;')
     .replaceAll('"', '&quot;')
+    .replaceAll("'", '&#39;')
 }

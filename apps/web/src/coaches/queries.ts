@@ -1,0 +1,3 @@
+import { routeQuery } from '../api/query'
+
+export const coachesQuery = (academy: string) => routeQuery('coaches.list', { academy })
