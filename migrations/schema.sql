@@ -304,6 +304,30 @@ ALTER TABLE ONLY public.coaches FORCE ROW LEVEL SECURITY;
 
 ALTER TABLE public.coaches OWNER TO marram_owner;
 
+CREATE TABLE public.coaching_settings (
+    academy_id uuid NOT NULL,
+    tolerance_deg numeric(4,1) NOT NULL,
+    sensor_error_deg numeric(4,1) NOT NULL,
+    camera_error_deg numeric(4,1) NOT NULL,
+    goniometer_error_deg numeric(4,1) NOT NULL,
+    eye_error_deg numeric(4,1) NOT NULL,
+    extension_out_deg numeric(4,1) NOT NULL,
+    radial_back_deg numeric(4,1) NOT NULL,
+    changed_by uuid,
+    changed_at timestamp with time zone NOT NULL,
+    CONSTRAINT coaching_settings_camera_error_deg_check CHECK (((camera_error_deg >= 0.1) AND (camera_error_deg <= (30)::numeric))),
+    CONSTRAINT coaching_settings_extension_out_deg_check CHECK (((extension_out_deg >= (0)::numeric) AND (extension_out_deg <= (90)::numeric))),
+    CONSTRAINT coaching_settings_eye_error_deg_check CHECK (((eye_error_deg >= 0.1) AND (eye_error_deg <= (30)::numeric))),
+    CONSTRAINT coaching_settings_goniometer_error_deg_check CHECK (((goniometer_error_deg >= 0.1) AND (goniometer_error_deg <= (30)::numeric))),
+    CONSTRAINT coaching_settings_radial_back_deg_check CHECK (((radial_back_deg >= (0)::numeric) AND (radial_back_deg <= (60)::numeric))),
+    CONSTRAINT coaching_settings_sensor_error_deg_check CHECK (((sensor_error_deg >= 0.1) AND (sensor_error_deg <= (30)::numeric))),
+    CONSTRAINT coaching_settings_tolerance_deg_check CHECK (((tolerance_deg >= (0)::numeric) AND (tolerance_deg <= (15)::numeric)))
+);
+
+ALTER TABLE ONLY public.coaching_settings FORCE ROW LEVEL SECURITY;
+
+ALTER TABLE public.coaching_settings OWNER TO marram_owner;
+
 CREATE TABLE public.consents (
     academy_id uuid NOT NULL,
     id uuid NOT NULL,
@@ -786,6 +810,85 @@ CREATE TABLE public.silenced_addresses (
 
 ALTER TABLE public.silenced_addresses OWNER TO marram_owner;
 
+CREATE TABLE public.swing_targets (
+    academy_id uuid NOT NULL,
+    id uuid NOT NULL,
+    golfer_id uuid NOT NULL,
+    club text,
+    address_flexion_deg numeric(4,1),
+    address_ulnar_deg numeric(4,1),
+    top_flexion_deg numeric(4,1),
+    top_ulnar_deg numeric(4,1),
+    impact_flexion_deg numeric(4,1),
+    impact_ulnar_deg numeric(4,1),
+    set_by uuid,
+    set_at timestamp with time zone NOT NULL,
+    CONSTRAINT swing_targets_address_flexion_deg_check CHECK (((address_flexion_deg >= '-87.5'::numeric) AND (address_flexion_deg <= (100)::numeric))),
+    CONSTRAINT swing_targets_address_ulnar_deg_check CHECK (((address_ulnar_deg >= ('-25'::integer)::numeric) AND (address_ulnar_deg <= 37.5))),
+    CONSTRAINT swing_targets_club_check CHECK ((club ~ '^[a-z0-9]+(-[a-z0-9]+)*$'::text)),
+    CONSTRAINT swing_targets_impact_flexion_deg_check CHECK (((impact_flexion_deg >= '-87.5'::numeric) AND (impact_flexion_deg <= (100)::numeric))),
+    CONSTRAINT swing_targets_impact_ulnar_deg_check CHECK (((impact_ulnar_deg >= ('-25'::integer)::numeric) AND (impact_ulnar_deg <= 37.5))),
+    CONSTRAINT swing_targets_top_flexion_deg_check CHECK (((top_flexion_deg >= '-87.5'::numeric) AND (top_flexion_deg <= (100)::numeric))),
+    CONSTRAINT swing_targets_top_ulnar_deg_check CHECK (((top_ulnar_deg >= ('-25'::integer)::numeric) AND (top_ulnar_deg <= 37.5)))
+);
+
+ALTER TABLE ONLY public.swing_targets FORCE ROW LEVEL SECURITY;
+
+ALTER TABLE public.swing_targets OWNER TO marram_owner;
+
+CREATE TABLE public.swings (
+    academy_id uuid NOT NULL,
+    id uuid NOT NULL,
+    golfer_id uuid NOT NULL,
+    session_id uuid,
+    recorded_by uuid,
+    recorded_at timestamp with time zone NOT NULL,
+    club text NOT NULL,
+    method text NOT NULL,
+    error_deg numeric(4,1) NOT NULL,
+    address_flexion_deg numeric(4,1) NOT NULL,
+    address_ulnar_deg numeric(4,1) NOT NULL,
+    top_flexion_deg numeric(4,1) NOT NULL,
+    top_ulnar_deg numeric(4,1) NOT NULL,
+    impact_flexion_deg numeric(4,1) NOT NULL,
+    impact_ulnar_deg numeric(4,1) NOT NULL,
+    ball_start text,
+    ball_curve text,
+    ball_height text,
+    contact text,
+    distance_metres numeric(4,1),
+    face_deg numeric(4,1),
+    path_deg numeric(4,1),
+    attack_deg numeric(4,1),
+    speed_mps numeric(4,1),
+    note text DEFAULT ''::text NOT NULL,
+    removed_at timestamp with time zone,
+    removed_by uuid,
+    CONSTRAINT swings_address_flexion_deg_check CHECK (((address_flexion_deg >= '-87.5'::numeric) AND (address_flexion_deg <= (100)::numeric))),
+    CONSTRAINT swings_address_ulnar_deg_check CHECK (((address_ulnar_deg >= ('-25'::integer)::numeric) AND (address_ulnar_deg <= 37.5))),
+    CONSTRAINT swings_attack_deg_check CHECK (((attack_deg >= ('-20'::integer)::numeric) AND (attack_deg <= (20)::numeric))),
+    CONSTRAINT swings_ball_curve_check CHECK ((ball_curve = ANY (ARRAY['hook'::text, 'draw'::text, 'straight'::text, 'fade'::text, 'slice'::text]))),
+    CONSTRAINT swings_ball_height_check CHECK ((ball_height = ANY (ARRAY['low'::text, 'usual'::text, 'high'::text]))),
+    CONSTRAINT swings_ball_start_check CHECK ((ball_start = ANY (ARRAY['pulled'::text, 'straight'::text, 'pushed'::text]))),
+    CONSTRAINT swings_check CHECK (((removed_by IS NULL) OR (removed_at IS NOT NULL))),
+    CONSTRAINT swings_club_check CHECK ((club ~ '^[a-z0-9]+(-[a-z0-9]+)*$'::text)),
+    CONSTRAINT swings_contact_check CHECK ((contact = ANY (ARRAY['clean'::text, 'fat'::text, 'thin'::text, 'heel'::text, 'toe'::text, 'shank'::text]))),
+    CONSTRAINT swings_distance_metres_check CHECK (((distance_metres >= (0)::numeric) AND (distance_metres <= (400)::numeric))),
+    CONSTRAINT swings_error_deg_check CHECK (((error_deg >= 0.1) AND (error_deg <= (30)::numeric))),
+    CONSTRAINT swings_face_deg_check CHECK (((face_deg >= ('-45'::integer)::numeric) AND (face_deg <= (45)::numeric))),
+    CONSTRAINT swings_impact_flexion_deg_check CHECK (((impact_flexion_deg >= '-87.5'::numeric) AND (impact_flexion_deg <= (100)::numeric))),
+    CONSTRAINT swings_impact_ulnar_deg_check CHECK (((impact_ulnar_deg >= ('-25'::integer)::numeric) AND (impact_ulnar_deg <= 37.5))),
+    CONSTRAINT swings_method_check CHECK ((method = ANY (ARRAY['sensor'::text, 'camera'::text, 'goniometer'::text, 'eye'::text]))),
+    CONSTRAINT swings_path_deg_check CHECK (((path_deg >= ('-30'::integer)::numeric) AND (path_deg <= (30)::numeric))),
+    CONSTRAINT swings_speed_mps_check CHECK (((speed_mps >= (1)::numeric) AND (speed_mps <= (70)::numeric))),
+    CONSTRAINT swings_top_flexion_deg_check CHECK (((top_flexion_deg >= '-87.5'::numeric) AND (top_flexion_deg <= (100)::numeric))),
+    CONSTRAINT swings_top_ulnar_deg_check CHECK (((top_ulnar_deg >= ('-25'::integer)::numeric) AND (top_ulnar_deg <= 37.5)))
+);
+
+ALTER TABLE ONLY public.swings FORCE ROW LEVEL SECURITY;
+
+ALTER TABLE public.swings OWNER TO marram_owner;
+
 CREATE TABLE public.venues (
     academy_id uuid NOT NULL,
     id uuid NOT NULL,
@@ -873,6 +976,9 @@ ALTER TABLE ONLY public.coaches
 
 ALTER TABLE ONLY public.coaches
     ADD CONSTRAINT coaches_pkey PRIMARY KEY (academy_id, id);
+
+ALTER TABLE ONLY public.coaching_settings
+    ADD CONSTRAINT coaching_settings_pkey PRIMARY KEY (academy_id);
 
 ALTER TABLE ONLY public.consents
     ADD CONSTRAINT consents_pkey PRIMARY KEY (academy_id, id);
@@ -973,6 +1079,15 @@ ALTER TABLE ONLY public.sign_in_sessions
 ALTER TABLE ONLY public.silenced_addresses
     ADD CONSTRAINT silenced_addresses_pkey PRIMARY KEY (email);
 
+ALTER TABLE ONLY public.swing_targets
+    ADD CONSTRAINT swing_targets_one_each UNIQUE NULLS NOT DISTINCT (academy_id, golfer_id, club);
+
+ALTER TABLE ONLY public.swing_targets
+    ADD CONSTRAINT swing_targets_pkey PRIMARY KEY (academy_id, id);
+
+ALTER TABLE ONLY public.swings
+    ADD CONSTRAINT swings_pkey PRIMARY KEY (academy_id, id);
+
 ALTER TABLE ONLY public.transfers
     ADD CONSTRAINT transfers_academy_id_source_type_source_id_kind_revision_key UNIQUE (academy_id, source_type, source_id, kind, revision);
 
@@ -1041,6 +1156,10 @@ CREATE INDEX sign_in_sessions_account ON public.sign_in_sessions USING btree (ac
 
 CREATE INDEX sign_in_sessions_expiry ON public.sign_in_sessions USING btree (expires_at);
 
+CREATE INDEX swings_newest ON public.swings USING btree (academy_id, golfer_id, recorded_at DESC, id DESC) WHERE (removed_at IS NULL);
+
+CREATE INDEX swings_session ON public.swings USING btree (academy_id, session_id);
+
 CREATE INDEX transfers_by_day ON public.transfers USING btree (academy_id, happened_on);
 
 CREATE UNIQUE INDEX waitlist_once_for_run ON public.waitlist_entries USING btree (academy_id, clinic_id, golfer_id) WHERE ((session_id IS NULL) AND (state = ANY (ARRAY['waiting'::text, 'offered'::text])));
@@ -1088,6 +1207,12 @@ ALTER TABLE ONLY public.coaches
 
 ALTER TABLE ONLY public.coaches
     ADD CONSTRAINT coaches_account_id_fkey FOREIGN KEY (account_id) REFERENCES public.accounts(id) ON DELETE SET NULL;
+
+ALTER TABLE ONLY public.coaching_settings
+    ADD CONSTRAINT coaching_settings_academy_id_fkey FOREIGN KEY (academy_id) REFERENCES public.academies(academy_id) ON DELETE CASCADE;
+
+ALTER TABLE ONLY public.coaching_settings
+    ADD CONSTRAINT coaching_settings_changed_by_fkey FOREIGN KEY (changed_by) REFERENCES public.accounts(id) ON DELETE SET NULL;
 
 ALTER TABLE ONLY public.consents
     ADD CONSTRAINT consents_academy_id_golfer_id_fkey FOREIGN KEY (academy_id, golfer_id) REFERENCES public.golfers(academy_id, id) ON DELETE CASCADE;
@@ -1215,6 +1340,24 @@ ALTER TABLE ONLY public.sessions
 ALTER TABLE ONLY public.sign_in_sessions
     ADD CONSTRAINT sign_in_sessions_account_id_fkey FOREIGN KEY (account_id) REFERENCES public.accounts(id) ON DELETE CASCADE;
 
+ALTER TABLE ONLY public.swing_targets
+    ADD CONSTRAINT swing_targets_academy_id_golfer_id_fkey FOREIGN KEY (academy_id, golfer_id) REFERENCES public.golfers(academy_id, id) ON DELETE CASCADE;
+
+ALTER TABLE ONLY public.swing_targets
+    ADD CONSTRAINT swing_targets_set_by_fkey FOREIGN KEY (set_by) REFERENCES public.accounts(id) ON DELETE SET NULL;
+
+ALTER TABLE ONLY public.swings
+    ADD CONSTRAINT swings_academy_id_golfer_id_fkey FOREIGN KEY (academy_id, golfer_id) REFERENCES public.golfers(academy_id, id) ON DELETE CASCADE;
+
+ALTER TABLE ONLY public.swings
+    ADD CONSTRAINT swings_academy_id_session_id_fkey FOREIGN KEY (academy_id, session_id) REFERENCES public.sessions(academy_id, id) ON DELETE SET NULL (session_id);
+
+ALTER TABLE ONLY public.swings
+    ADD CONSTRAINT swings_recorded_by_fkey FOREIGN KEY (recorded_by) REFERENCES public.accounts(id) ON DELETE SET NULL;
+
+ALTER TABLE ONLY public.swings
+    ADD CONSTRAINT swings_removed_by_fkey FOREIGN KEY (removed_by) REFERENCES public.accounts(id) ON DELETE SET NULL;
+
 ALTER TABLE ONLY public.transfers
     ADD CONSTRAINT transfers_academy_id_fkey FOREIGN KEY (academy_id) REFERENCES public.academies(academy_id) ON DELETE RESTRICT;
 
@@ -1247,6 +1390,8 @@ ALTER TABLE public.clinic_coaches ENABLE ROW LEVEL SECURITY;
 ALTER TABLE public.clinics ENABLE ROW LEVEL SECURITY;
 
 ALTER TABLE public.coaches ENABLE ROW LEVEL SECURITY;
+
+ALTER TABLE public.coaching_settings ENABLE ROW LEVEL SECURITY;
 
 ALTER TABLE public.consents ENABLE ROW LEVEL SECURITY;
 
@@ -1294,6 +1439,8 @@ CREATE POLICY own_academy ON public.clinics USING ((academy_id = (NULLIF(current
 
 CREATE POLICY own_academy ON public.coaches USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
 
+CREATE POLICY own_academy ON public.coaching_settings USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
+
 CREATE POLICY own_academy ON public.consents USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
 
 CREATE POLICY own_academy ON public.credit_changes USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
@@ -1334,6 +1481,10 @@ CREATE POLICY own_academy ON public.session_coaches USING ((academy_id = (NULLIF
 
 CREATE POLICY own_academy ON public.sessions USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
 
+CREATE POLICY own_academy ON public.swing_targets USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
+
+CREATE POLICY own_academy ON public.swings USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
+
 CREATE POLICY own_academy ON public.transfers USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
 
 CREATE POLICY own_academy ON public.venues USING ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid)) WITH CHECK ((academy_id = (NULLIF(current_setting('app.academy_id'::text, true), ''::text))::uuid));
@@ -1351,6 +1502,10 @@ ALTER TABLE public.session_areas ENABLE ROW LEVEL SECURITY;
 ALTER TABLE public.session_coaches ENABLE ROW LEVEL SECURITY;
 
 ALTER TABLE public.sessions ENABLE ROW LEVEL SECURITY;
+
+ALTER TABLE public.swing_targets ENABLE ROW LEVEL SECURITY;
+
+ALTER TABLE public.swings ENABLE ROW LEVEL SECURITY;
 
 ALTER TABLE public.transfers ENABLE ROW LEVEL SECURITY;
 
@@ -1406,6 +1561,8 @@ GRANT SELECT,INSERT,DELETE,UPDATE ON TABLE public.clinic_coaches TO marram_app;
 GRANT SELECT,INSERT,DELETE,UPDATE ON TABLE public.clinics TO marram_app;
 
 GRANT SELECT,INSERT,UPDATE ON TABLE public.coaches TO marram_app;
+
+GRANT SELECT,INSERT,UPDATE ON TABLE public.coaching_settings TO marram_app;
 
 GRANT SELECT,INSERT,UPDATE ON TABLE public.consents TO marram_app;
 
@@ -1509,6 +1666,14 @@ GRANT SELECT(id_hash) ON TABLE public.sign_in_sessions TO marram_dispatch;
 GRANT SELECT(expires_at) ON TABLE public.sign_in_sessions TO marram_dispatch;
 
 GRANT SELECT,INSERT,UPDATE ON TABLE public.silenced_addresses TO marram_app;
+
+GRANT SELECT,INSERT,UPDATE ON TABLE public.swing_targets TO marram_app;
+
+GRANT SELECT,INSERT ON TABLE public.swings TO marram_app;
+
+GRANT UPDATE(removed_at) ON TABLE public.swings TO marram_app;
+
+GRANT UPDATE(removed_by) ON TABLE public.swings TO marram_app;
 
 GRANT SELECT,INSERT,UPDATE ON TABLE public.venues TO marram_app;
 

@@ -9,6 +9,7 @@ const GO_WITH_THEIR_PARENT = [
   'clinic_coaches (clinic_id) → clinics',
   'clinics (academy_id) → academies',
   'coaches (academy_id) → academies',
+  'coaching_settings (academy_id) → academies',
   'consents (golfer_id) → golfers',
   'golfers (academy_id) → academies',
   'invitations (academy_id) → academies',
@@ -24,6 +25,8 @@ const GO_WITH_THEIR_PARENT = [
   'session_areas (session_id) → sessions',
   'session_coaches (session_id) → sessions',
   'sessions (clinic_id) → clinics',
+  'swing_targets (golfer_id) → golfers',
+  'swings (golfer_id) → golfers',
   'venues (academy_id) → academies',
   'waitlist_entries (account_id) → accounts',
   'waitlist_entries (clinic_id) → clinics',
@@ -34,6 +37,7 @@ const GO_WITH_THEIR_PARENT = [
 /** Rows that stay, and forget who or what it was. */
 const FORGET_THEIR_PARENT = [
   'coaches (account_id) → accounts',
+  'coaching_settings (changed_by) → accounts',
   'enrolments (taken_by) → accounts',
   'golfers (account_id) → accounts',
   'golfers (guardian_account_id) → accounts',
@@ -41,6 +45,10 @@ const FORGET_THEIR_PARENT = [
   'orders (account_id) → accounts',
   'payments (taken_by) → accounts',
   'sessions (register_closed_by) → accounts',
+  'swing_targets (set_by) → accounts',
+  'swings (recorded_by) → accounts',
+  'swings (removed_by) → accounts',
+  'swings (session_id) → sessions',
   'waitlist_entries (enrolment_id) → enrolments',
 ]
 
