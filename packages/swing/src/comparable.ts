@@ -20,6 +20,9 @@ export const WRIST_LIMITS = {
   ulnarDeg: { least: -RANGE_DEG.radial * ALLOWANCE, most: RANGE_DEG.ulnar * ALLOWANCE },
 } as const
 
+/** Angles come in tenths, whose differences are not exact: 4.4 − 1.4 is a little more than 3. */
+const EXACT_TO_DEG = 1e-9
+
 /** Whether two swings start alike, within the tolerance on each axis. */
 export function areComparable(given: {
   one: WristTrack
@@ -28,7 +31,7 @@ export function areComparable(given: {
 }): boolean {
   const { one, other, toleranceDeg } = given
   const differs = (axis: keyof WristAngles): boolean =>
-    Math.abs(one.address[axis] - other.address[axis]) > toleranceDeg
+    Math.abs(one.address[axis] - other.address[axis]) > toleranceDeg + EXACT_TO_DEG
   return !differs('flexionDeg') && !differs('ulnarDeg')
 }
 
@@ -57,7 +60,7 @@ export function matchUpOf(track: WristTrack, thresholds: MatchUpThresholds): Mat
   return {
     extensionOutDeg,
     radialBackDeg,
-    isExtensionOut: extensionOutDeg >= thresholds.extensionOutDeg,
-    isRadialBack: radialBackDeg >= thresholds.radialBackDeg,
+    isExtensionOut: extensionOutDeg >= thresholds.extensionOutDeg - EXACT_TO_DEG,
+    isRadialBack: radialBackDeg >= thresholds.radialBackDeg - EXACT_TO_DEG,
   }
 }
