@@ -9,6 +9,7 @@ const FEATURES_UPWARDS = [
   ['clinics'],
   ['enrolments'],
   ['register'],
+  ['coaching'],
   ['checkout'],
   ['messaging'],
   ['demo'],

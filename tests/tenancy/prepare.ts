@@ -1,5 +1,6 @@
 import type { Sent } from '@marram/contract'
 import { clinicFields, joinStaff, nextNumber } from '../support/builders'
+import { swingFields } from '../support/swings'
 import type { World } from '../support/world'
 import { dependant, type Season } from './season'
 
@@ -154,4 +155,13 @@ export async function closedRegister(season: Season): Promise<number> {
 function readRegister(season: Season) {
   const params = { academy: season.slug, sessionId: firstSession(season) }
   return season.owner.person.must('register.read', { params })
+}
+
+/** One that the coach recorded, to be taken out. */
+export async function swing(season: Season): Promise<string> {
+  const { id } = await season.coachPerson.person.must('swings.record', {
+    params: { academy: season.slug, golferId: season.golferId },
+    body: swingFields(),
+  })
+  return id
 }

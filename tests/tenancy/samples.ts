@@ -1,5 +1,6 @@
 import { ROUTES, type RouteKey, type Sent } from '@marram/contract'
 import { clinicFields, nextNumber } from '../support/builders'
+import { swingFields } from '../support/swings'
 import type { World } from '../support/world'
 import { dependant, type Season } from './season'
 import * as prepare from './prepare'
@@ -148,6 +149,26 @@ export const SAMPLES: { [K in TenantRoute]: Sample<K> } = {
     return { params: { sessionId }, body: { revision: await prepare.closedRegister(season) } }
   },
   'register.card': ({ clinic }) => ({ params: { clinicId: clinic.id } }),
+
+  'swings.record': ({ golferId }) => ({ params: { golferId }, body: swingFields() }),
+  'swings.of-golfer': ({ golferId }) => ({ params: { golferId } }),
+  'swings.read': ({ swingId }) => ({ params: { swingId } }),
+  'swings.remove': async (season) => ({ params: { swingId: await prepare.swing(season) } }),
+  'swings.compare': ({ swingId, laterSwingId }) => ({
+    params: { swingId },
+    query: { with: laterSwingId },
+  }),
+  'swings.mine': ({ golferId }) => ({ params: { golferId } }),
+  'swings.read-mine': ({ swingId }) => ({ params: { swingId } }),
+  'swings.compare-mine': ({ swingId }) => ({ params: { swingId }, query: { with: 'target' } }),
+  'targets.read': ({ golferId }) => ({ params: { golferId } }),
+  'targets.read-mine': ({ golferId }) => ({ params: { golferId } }),
+  'targets.set': ({ golferId }) => ({
+    params: { golferId },
+    body: { club: '7-iron', wrist: swingFields().wrist },
+  }),
+  'coaching-settings.read': nothing,
+  'coaching-settings.change': () => ({ body: { toleranceDeg: 2.5 } }),
 
   'ledger.card': year,
   'ledger.transfers': ({ clinic }) => ({

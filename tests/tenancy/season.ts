@@ -11,6 +11,7 @@ import {
   type OpenAcademy,
   type SignedUp,
 } from '../support/builders'
+import { swingFields } from '../support/swings'
 import type { World } from '../support/world'
 
 /** An academy with a season behind it: at least one row in every table of an academy. */
@@ -30,6 +31,9 @@ export interface Season extends OpenAcademy {
   /** Waits for the full clinic, and has given a place up. */
   waiting: SignedUp
   waitlistEntryId: string
+  /** Two of the golfer's own, recorded by their coach. */
+  swingId: string
+  laterSwingId: string
 }
 
 /** Opens an academy and sells its places; the season has not begun. */
@@ -86,7 +90,24 @@ export async function sellSeason(world: World): Promise<Season> {
     golfer,
     waiting,
     waitlistEntryId,
+    ...(await coachGolfer({ ...academy, coachPerson, golferId: enrolment.golfer.id })),
   }
+}
+
+/** Records two swings before the season, with what they are to come to; the owner sets how to read. */
+async function coachGolfer(
+  season: OpenAcademy & Pick<Season, 'coachPerson' | 'golferId'>,
+): Promise<Pick<Season, 'swingId' | 'laterSwingId'>> {
+  const { slug, clinic, coachPerson, golferId, owner } = season
+  const params = { academy: slug, golferId }
+  const sessionId = clinic.sessions[0]?.id ?? null
+  const body = { ...swingFields(), sessionId }
+  const { id: swingId } = await coachPerson.person.must('swings.record', { params, body })
+  const { id: laterSwingId } = await coachPerson.person.must('swings.record', { params, body })
+  const { wrist } = swingFields()
+  await coachPerson.person.must('targets.set', { params, body: { club: null, wrist } })
+  await owner.person.must('coaching-settings.change', { params, body: { toleranceDeg: 3 } })
+  return { swingId, laterSwingId }
 }
 
 /** Holds the first session, calls the second off, and looks at what is written of the junior. */

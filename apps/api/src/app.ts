@@ -11,6 +11,7 @@ import { readBooks } from './clinics/books'
 import { describePages } from './clinics/page-head'
 import { clinicHandlers } from './clinics/routes'
 import { coachHandlers } from './coaches/routes'
+import { coachingHandlers } from './coaching/routes'
 import { demoHandlers } from './demo/routes'
 import { enrolmentHandlers } from './enrolments/routes'
 import { golferHandlers } from './golfers/routes'
@@ -68,6 +69,7 @@ export function makeApp(services: Services, options: AppOptions): Express {
       ...clinicHandlers(services),
       ...enrolmentHandlers(services, { show: showEnrolments, readCredit: readCreditOfAccount }),
       ...registerHandlers(services),
+      ...coachingHandlers(services),
       ...checkoutHandlers(services, payments),
       ...ledgerHandlers(services, readBooks(services)),
       ...demoHandlers(services),

@@ -2,12 +2,15 @@ import { z } from 'zod'
 import { academyView } from './academies'
 import { sessionView } from './accounts'
 import { clinicView, pageClinic, pageClinicDetail, sessionBrief } from './clinics'
+import { coachingSettings } from './coaching'
+import { comparisonView } from './comparison'
 import { enrolmentView, giveUpQuote, placeView, waitlistView } from './enrolments'
 import { golferListItem, golferView, ownGolferView } from './golfers'
 import { problemSchema } from './problem-schema'
 import { registerRow, registerView } from './register'
 import { ROUTES, type Access, type RouteKey, type RouteSpec } from './routes'
 import { SCHEMAS, type RouteSchemas } from './schemas'
+import { swingView, targetView } from './swings'
 import { areaView, coachView, venueView } from './venues'
 
 type Json = Record<string, unknown>
@@ -18,6 +21,8 @@ const NAMED = {
   Area: areaView,
   Clinic: clinicView,
   Coach: coachView,
+  CoachingSettings: coachingSettings,
+  Comparison: comparisonView,
   Enrolment: enrolmentView,
   GiveUpQuote: giveUpQuote,
   Golfer: golferView,
@@ -30,6 +35,8 @@ const NAMED = {
   RegisterRow: registerRow,
   Session: sessionBrief,
   SignIn: sessionView,
+  Swing: swingView,
+  SwingTarget: targetView,
   Venue: venueView,
   WaitlistEntry: waitlistView,
 }

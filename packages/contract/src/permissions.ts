@@ -25,6 +25,7 @@ export const PERMISSIONS = {
   'places:change': { owner: 'all', desk: 'all' },
   'places:own': { owner: 'own', desk: 'own', coach: 'own', golfer: 'own', bookkeeper: 'own' },
   'register:take': { owner: 'all', desk: 'all', coach: 'own' },
+  'swings:record': { owner: 'all', coach: 'own' },
   'golfers:read': { owner: 'all', desk: 'all', coach: 'own' },
   'golfers:change': { owner: 'all', desk: 'all' },
   'minors:read': { owner: 'all', desk: 'all', coach: 'own' },

@@ -209,6 +209,60 @@ export const ROUTES = {
     access: 'places:read',
   },
 
+  'swings.record': {
+    method: 'POST',
+    path: `${TENANT}/golfers/:golferId/swings`,
+    access: 'swings:record',
+  },
+  'swings.of-golfer': {
+    method: 'GET',
+    path: `${TENANT}/golfers/:golferId/swings`,
+    access: 'swings:record',
+  },
+  'swings.read': { method: 'GET', path: `${TENANT}/swings/:swingId`, access: 'swings:record' },
+  'swings.remove': { method: 'DELETE', path: `${TENANT}/swings/:swingId`, access: 'swings:record' },
+  'swings.compare': {
+    method: 'GET',
+    path: `${TENANT}/swings/:swingId/comparison`,
+    access: 'swings:record',
+  },
+  'swings.mine': {
+    method: 'GET',
+    path: `${TENANT}/my/golfers/:golferId/swings`,
+    access: 'account',
+  },
+  'swings.read-mine': { method: 'GET', path: `${TENANT}/my/swings/:swingId`, access: 'account' },
+  'swings.compare-mine': {
+    method: 'GET',
+    path: `${TENANT}/my/swings/:swingId/comparison`,
+    access: 'account',
+  },
+  'targets.read': {
+    method: 'GET',
+    path: `${TENANT}/golfers/:golferId/swing-targets`,
+    access: 'swings:record',
+  },
+  'targets.read-mine': {
+    method: 'GET',
+    path: `${TENANT}/my/golfers/:golferId/swing-targets`,
+    access: 'account',
+  },
+  'targets.set': {
+    method: 'PUT',
+    path: `${TENANT}/golfers/:golferId/swing-targets`,
+    access: 'swings:record',
+  },
+  'coaching-settings.read': {
+    method: 'GET',
+    path: `${TENANT}/coaching-settings`,
+    access: 'swings:record',
+  },
+  'coaching-settings.change': {
+    method: 'PATCH',
+    path: `${TENANT}/coaching-settings`,
+    access: 'academy:change',
+  },
+
   'ledger.card': { method: 'GET', path: `${TENANT}/money/:year`, access: 'ledger:read' },
   'ledger.transfers': { method: 'GET', path: `${TENANT}/transfers`, access: 'ledger:read' },
   'ledger.export': { method: 'GET', path: `${TENANT}/entries.csv`, access: 'ledger:read' },

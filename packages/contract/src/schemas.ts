@@ -2,6 +2,7 @@ import type { z } from 'zod'
 import { academySchemas } from './academies'
 import { accountSchemas } from './accounts'
 import { clinicSchemas } from './clinics'
+import { coachingSchemas } from './coaching'
 import { checkoutSchemas, enrolmentSchemas } from './enrolments'
 import { golferSchemas } from './golfers'
 import { ledgerSchemas } from './ledger'
@@ -26,6 +27,7 @@ export const SCHEMAS = {
   ...enrolmentSchemas,
   ...checkoutSchemas,
   ...registerSchemas,
+  ...coachingSchemas,
   ...ledgerSchemas,
 } as const satisfies Record<RouteKey, RouteSchemas>
 

@@ -308,6 +308,7 @@ const idsOf = (places: readonly Place[]): string[] => places.map(({ id }) => id)
 export {
   findEnrolment,
   findPlace,
+  hasPlaceIn,
   listEnrolments,
   listEnrolmentsIn,
   listPlaceRows,

@@ -26,6 +26,15 @@ export async function findPlace(trx: AcademyTrx, id: string): Promise<Place | un
   return Place.query(trx).where({ id }).first()
 }
 
+/** Whether a golfer has a confirmed place in a session. */
+export async function hasPlaceIn(
+  trx: AcademyTrx,
+  { golferId, sessionId }: { golferId: string; sessionId: string },
+): Promise<boolean> {
+  const found = await Place.query(trx).where({ golferId, sessionId, state: 'confirmed' }).first()
+  return found !== undefined
+}
+
 export interface NewEnrolment {
   id: string
   clinicId: string

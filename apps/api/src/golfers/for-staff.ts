@@ -12,6 +12,7 @@ import type { Golfer } from './models'
 import {
   insertGolfer,
   insertLookUp,
+  isGolferOfCoach,
   listConsents,
   searchGolfers,
   updateGolfer,
@@ -136,9 +137,19 @@ export async function changeGolfer(
   })
 }
 
+/** Whether a golfer of this academy is within somebody's reach. */
+export async function isInReach(
+  trx: AcademyTrx,
+  { reach, golferId }: { reach: Pick<Reach, 'scope' | 'accountId'>; golferId: string },
+): Promise<boolean> {
+  const coach = await coachOfReach(trx, reach)
+  if (coach === 'nobody') return false
+  return coach.coachId ? isGolferOfCoach(trx, { golferId, coachId: coach.coachId }) : true
+}
+
 async function coachOfReach(
   trx: AcademyTrx,
-  { scope, accountId }: Reach,
+  { scope, accountId }: Pick<Reach, 'scope' | 'accountId'>,
 ): Promise<{ coachId?: string } | 'nobody'> {
   if (scope === 'all') return {}
   const coach = await findCoachOf(trx, accountId)

@@ -159,9 +159,16 @@ export function checkOwnGolfer<G extends Pick<Golfer, 'accountId' | 'guardianAcc
   golfer: G | null | undefined,
   accountId: string,
 ): G {
-  const isTheirs = golfer?.accountId === accountId || golfer?.guardianAccountId === accountId
-  if (!golfer || !isTheirs) throw notFound('golfer')
+  if (!golfer || !isOwnGolfer(golfer, accountId)) throw notFound('golfer')
   return golfer
+}
+
+/** Whether a golfer is the person themselves or a dependant of theirs. */
+export function isOwnGolfer(
+  golfer: Pick<Golfer, 'accountId' | 'guardianAccountId'>,
+  accountId: string,
+): boolean {
+  return golfer.accountId === accountId || golfer.guardianAccountId === accountId
 }
 
 function viewOwn(golfer: Golfer, today: string): OwnGolferView {

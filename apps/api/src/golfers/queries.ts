@@ -137,6 +137,19 @@ export async function searchGolfers(
   return query.castTo<GolferListRow[]>()
 }
 
+/** Whether a golfer has or had a place in one of this coach's sessions. */
+export async function isGolferOfCoach(
+  trx: AcademyTrx,
+  { golferId, coachId }: { golferId: string; coachId: string },
+): Promise<boolean> {
+  const found = await Golfer.query(trx)
+    .where('golfers.id', golferId)
+    .where(ofCoach(coachId))
+    .select('golfers.id')
+    .first()
+  return found !== undefined
+}
+
 /** True for golfers who have or had a place in one of this coach's sessions. */
 function ofCoach(coachId: string) {
   return raw(
