@@ -1,4 +1,15 @@
 import type { Answer, Sent } from '@marram/contract'
+import {
+  joinStaff,
+  openAcademy,
+  pay,
+  signUp,
+  takePlace,
+  type OpenAcademy,
+  type SignedUp,
+} from './builders'
+import type { Reply } from './person'
+import type { World } from './world'
 
 export type SwingView = Answer<'swings.read'>
 export type NewSwing = Sent<'swings.record', 'body'>
@@ -20,4 +31,72 @@ export function swingFields(change: Partial<NewSwing> = {}): NewSwing {
     ball: { start: 'pulled', curve: 'slice', height: 'high', contact: 'fat', distanceMetres: 112 },
     ...change,
   }
+}
+
+/** An academy whose coach has two golfers: one with a run, and a child with a drop-in. */
+export interface Bench {
+  academy: OpenAcademy
+  coach: SignedUp
+  golfer: SignedUp
+  golferId: string
+  guardian: SignedUp
+  childId: string
+  inAcademy: (more?: Record<string, string>) => Record<string, string>
+  /** Sends a swing, as the coach and of the golfer unless it is said otherwise. */
+  record: (
+    change?: Partial<NewSwing>,
+    given?: { by?: SignedUp; of?: string },
+  ) => Promise<Reply<SwingView>>
+  /** As `record`, for a swing that is taken. */
+  recorded: (
+    change?: Partial<NewSwing>,
+    given?: { by?: SignedUp; of?: string },
+  ) => Promise<SwingView>
+}
+
+export async function openBench(world: World): Promise<Bench> {
+  const academy = await openAcademy(world)
+  const coach = await joinStaff(world, academy, { role: 'coach', coachId: academy.coach.id })
+  const golfer = await signUp(world)
+  const held = await takePlace(golfer, academy, { clinic: academy.clinic })
+  const { id: golferId } = (await pay(world, golfer, { academy, enrolment: held })).golfer
+  const guardian = await signUp(world)
+  const childId = await bringChild(world, { academy, guardian })
+  const inAcademy: Bench['inAcademy'] = (more = {}) => ({ academy: academy.slug, ...more })
+  const record: Bench['record'] = (change = {}, { by = coach, of = golferId } = {}) =>
+    by.person.call('swings.record', {
+      params: inAcademy({ golferId: of }),
+      body: swingFields(change),
+    })
+  const recorded: Bench['recorded'] = async (...given) => {
+    const { status, text, answer } = await record(...given)
+    if (status !== 200) throw new Error(text)
+    return answer
+  }
+  return { academy, coach, golfer, golferId, guardian, childId, inAcademy, record, recorded }
+}
+
+/** A child with a place in the second session; resolves to the child's golfer. */
+async function bringChild(
+  world: World,
+  { academy, guardian }: { academy: OpenAcademy; guardian: SignedUp },
+): Promise<string> {
+  const dependant = {
+    name: 'Fionn Tarrant',
+    bornOn: '2020-05-02',
+    handicap: null,
+    emergencyContact: { name: 'Bríd Tarrant', phone: '+353 1 555 0100' },
+    hasConsent: true,
+  } as const
+  const enrolment = await guardian.person.must('enrolments.hold', {
+    params: { academy: academy.slug },
+    body: {
+      clinicId: academy.clinic.id,
+      sessionId: academy.clinic.sessions[1]!.id,
+      for: { kind: 'new', dependant },
+      hasAcceptedWaiver: true,
+    },
+  })
+  await pay(world, guardian, { academy, enrolment })
+  return enrolment.golfer.id
 }
