@@ -12,6 +12,7 @@ import type { Reply } from './person'
 import type { World } from './world'
 
 export type SwingView = Answer<'swings.read'>
+export type Comparison = Answer<'swings.compare'>
 export type NewSwing = Sent<'swings.record', 'body'>
 
 type Angles = NewSwing['wrist']['address']
@@ -52,6 +53,13 @@ export interface Bench {
     change?: Partial<NewSwing>,
     given?: { by?: SignedUp; of?: string },
   ) => Promise<SwingView>
+  /** Two that are taken, a minute apart; resolves to their ids. */
+  twoSwings: (
+    one: Partial<NewSwing>,
+    other: Partial<NewSwing>,
+  ) => Promise<[earlier: string, later: string]>
+  compare: (swingId: string, other: string) => Promise<Reply<Comparison>>
+  compared: (swingId: string, other: string) => Promise<Comparison>
 }
 
 export async function openBench(world: World): Promise<Bench> {
@@ -73,8 +81,34 @@ export async function openBench(world: World): Promise<Bench> {
     if (status !== 200) throw new Error(text)
     return answer
   }
-  return { academy, coach, golfer, golferId, guardian, childId, inAcademy, record, recorded }
+  const twoSwings: Bench['twoSwings'] = async (one, other) => {
+    const earlier = await recorded(one)
+    world.clock.moveBy(60_000)
+    return [earlier.id, (await recorded(other)).id]
+  }
+  const compare: Bench['compare'] = (swingId, other) =>
+    coach.person.call('swings.compare', {
+      params: inAcademy({ swingId }),
+      query: { with: other },
+    })
+  const compared: Bench['compared'] = async (...given) => {
+    const { status, text, answer } = await compare(...given)
+    if (status !== 200) throw new Error(text)
+    return answer
+  }
+  return {
+    ...{ academy, coach, golfer, golferId, guardian, childId, inAcademy },
+    ...{ record, recorded, twoSwings, compare, compared },
+  }
 }
+
+/** What became of each angle: where, by how much, and whether that is a change. */
+export const tableOf = ({ differences }: Comparison) =>
+  differences?.map(({ position, axis, differenceDeg, isChange }) => [
+    `${position} ${axis}`,
+    differenceDeg,
+    isChange,
+  ])
 
 /** A child with a place in the second session; resolves to the child's golfer. */
 async function bringChild(
@@ -99,4 +133,19 @@ async function bringChild(
   })
   await pay(world, guardian, { academy, enrolment })
   return enrolment.golfer.id
+}
+
+/**
+ * [P] The pair that coaches know, with a seven-iron and a sensor: 28 → 44 → 18 degrees of extension
+ * slices, 30 → 33 → 6 is straight, lower and longer.
+ */
+export const SLICE: NewSwing['wrist'] = {
+  address: wrist(28, 5),
+  top: wrist(44, -15),
+  impact: wrist(18, -5),
+}
+export const STRAIGHT: NewSwing['wrist'] = {
+  address: wrist(30, 5),
+  top: wrist(33, -15),
+  impact: wrist(6, 2),
 }
