@@ -89,7 +89,7 @@ const perWebFeature = FEATURES_UPWARDS.flatMap((names, level) =>
 export const boundaries = [
   rule(['packages/**/*.ts'], [pattern(['**/apps/**'], 'A package imports no app.')]),
   rule(
-    ['packages/{money,schedule}/src/**/*.ts'],
+    ['packages/{money,schedule,swing}/src/**/*.ts'],
     [pattern(['node:*', '**/apps/**'], 'This package is pure: no input, no output, no clock.')],
     ['**/*.test.ts'],
   ),
@@ -140,7 +140,7 @@ export const boundaries = [
     ],
   ),
   {
-    files: ['apps/api/src/**/*.ts', 'packages/{money,schedule}/src/**/*.ts'],
+    files: ['apps/api/src/**/*.ts', 'packages/{money,schedule,swing}/src/**/*.ts'],
     ignores: ['apps/api/src/platform/clock.ts', '**/*.test.ts'],
     rules: {
       'no-restricted-syntax': [

@@ -52,6 +52,9 @@ describe('a planted violation', () => {
   it.each([
     ['a lower feature knows a higher', 'venues/rules.ts', '../clinics/clinics', UPWARDS],
     ['accounts know academies', 'accounts/accounts.ts', '../academies/academies', UPWARDS],
+    ['the register knows the coaching', 'register/register.ts', '../coaching/coaching', UPWARDS],
+    ['coaching knows the checkout', 'coaching/compare.ts', '../checkout/orders', UPWARDS],
+    ['coaching touches the library', 'coaching/compare.ts', 'objection', DATABASE],
     ['checkout knows the mail', 'checkout/orders.ts', '../messaging/messaging', UPWARDS],
     ['a query knows a higher feature', 'clinics/queries.ts', '../checkout/queries', UPWARDS],
     ['… and from a folder inside', 'messaging/mail/places.ts', '../../demo/load', UPWARDS],
@@ -84,6 +87,7 @@ describe('a planted violation', () => {
 
   it.each([
     ['money reads a file', 'packages/money/src/tax.ts', 'node:fs', PURE],
+    ['the swing reads a file', 'packages/swing/src/wrist.ts', 'node:fs', PURE],
     [
       'the schedule knows an app',
       'packages/schedule/src/sun.ts',
