@@ -1,4 +1,7 @@
-import { jStat } from 'jstat'
+import jstat from 'jstat'
+
+// A script without named exports: Node gives it whole, as the default one.
+const { jStat } = jstat
 
 /**
  * Whether an angle changed, or only seemed to: the minimal detectable change of repeated
