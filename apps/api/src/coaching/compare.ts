@@ -34,24 +34,21 @@ interface Compared {
  * Compares a swing with another of the same golfer's, the earlier first, or with what the golfer
  * aims at: whether they compare at all, what changed, and what it does to the face and the ball.
  */
-export function compareSwing(
+export async function compareSwing(
   { db }: Services,
   wanted: { reach: SwingReach; swingId: string; query: Parsed<'swings.compare', 'query'> },
 ): Promise<Comparison> {
   const { reach, swingId, query } = wanted
-  return inAcademy(
-    db,
-    reach.academyId,
-    async (trx) => {
-      const { swing, golfer } = await findSwingInReach(trx, { reach, swingId })
-      const compared =
-        query.with === 'target'
-          ? await againstTarget(trx, { reach, swing, golfer })
-          : await againstSwing(trx, { reach, swing, golfer, otherId: query.with })
-      return viewComparison(compared, await settingsOf(trx))
-    },
-    { readOnly: true },
-  )
+  const read = async (trx: AcademyTrx): Promise<[Compared, Settings]> => {
+    const { swing, golfer } = await findSwingInReach(trx, { reach, swingId })
+    const compared =
+      query.with === 'target'
+        ? await againstTarget(trx, { reach, swing, golfer })
+        : await againstSwing(trx, { reach, swing, golfer, otherId: query.with })
+    return [compared, await settingsOf(trx)]
+  }
+  // What is worked out takes a while; no connection need wait for it.
+  return viewComparison(...(await inAcademy(db, reach.academyId, read, { readOnly: true })))
 }
 
 async function againstTarget(
