@@ -3,8 +3,6 @@ import { expect, it } from 'vitest'
 import { between, placeAt, shareAtNothing, shareAtTurn } from './between'
 import type { Moment } from './runge-kutta'
 
-const still = { vx: 0, vy: 0, vz: 0, spin: 0 }
-
 /** A moment of z = c0 + c1·t + … + c5·t⁵. */
 function momentOf(c: readonly number[], seconds: number): Moment {
   const sum = (share: (power: number) => number) =>
@@ -14,11 +12,8 @@ function momentOf(c: readonly number[], seconds: number): Moment {
     x: 0,
     y: 0,
     z: sum((power) => seconds ** power),
-    motion: { ...still, vz: sum((power) => (power < 1 ? 0 : power * seconds ** (power - 1))) },
-    rate: {
-      ...still,
-      vz: sum((power) => (power < 2 ? 0 : power * (power - 1) * seconds ** (power - 2))),
-    },
+    motion: [0, 0, sum((power) => (power < 1 ? 0 : power * seconds ** (power - 1))), 0],
+    rate: [0, 0, sum((power) => (power < 2 ? 0 : power * (power - 1) * seconds ** (power - 2))), 0],
   }
 }
 

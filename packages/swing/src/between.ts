@@ -1,7 +1,8 @@
 import type { Moment } from './runge-kutta'
 
 type Axis = 'x' | 'y' | 'z'
-const VELOCITY = { x: 'vx', y: 'vy', z: 'vz' } as const
+/** Where an axis stands in a motion. */
+const PART = { x: 0, y: 1, z: 2 } as const
 
 /**
  * One coordinate between two moments: the polynomial of degree 5 that has the place, the velocity
@@ -11,9 +12,9 @@ export type Between = readonly [number, number, number, number, number, number]
 
 export function between(from: Moment, to: Moment, axis: Axis): Between {
   const seconds = to.seconds - from.seconds
-  const rate = VELOCITY[axis]
-  const [v0, v1] = [from.motion[rate] * seconds, to.motion[rate] * seconds]
-  const [a0, a1] = [from.rate[rate] * seconds ** 2, to.rate[rate] * seconds ** 2]
+  const part = PART[axis]
+  const [v0, v1] = [from.motion[part] * seconds, to.motion[part] * seconds]
+  const [a0, a1] = [from.rate[part] * seconds ** 2, to.rate[part] * seconds ** 2]
   const way = to[axis] - from[axis]
   return [
     from[axis],

@@ -2,7 +2,7 @@ import type { Air } from './air'
 import type { BallModel } from './ball-models'
 import { BALL_KG, BALL_RADIUS_METRES, direction, type Launch } from './impact'
 import { between, placeAt, shareAtNothing, shareAtTurn, slopeAt, type Between } from './between'
-import { Stepper, stretchOf, type Moment, type Motion, type Rate } from './runge-kutta'
+import { beginning, stepFrom, stretchOf, type Moment, type Motion, type Rate } from './runge-kutta'
 import { scale, toDeg, toRad, type Vector } from './vectors'
 
 /** A ball from the face until it is down at the height that it left from. */
@@ -50,24 +50,23 @@ const LONGEST_SECONDS = 60
  * @throws RangeError for a launch that is not finite, or does not go up from the ground.
  */
 export function flightOf(launch: Launch, { air, ball, tolerance = 1e-3 }: FlightOptions): Flight {
-  const stepper = new Stepper(rateOf(launch, { air, ball }))
-  let moment = stepper.begin(motionOf(launch))
+  const rateOf = forcesOn(launch, { air, ball })
+  let moment = beginning(motionOf(launch), rateOf)
   let apexMetres = 0
   let seconds = FIRST_STEP_SECONDS
   const track = [pointOf(moment)]
   while (moment.seconds < LONGEST_SECONDS) {
-    const error = stepper.take(moment, seconds)
+    const { to, error } = stepFrom(moment, seconds, rateOf)
     if (error <= tolerance) {
-      const { next } = stepper
-      if (moment.motion.vz > 0 && next.motion.vz <= 0) {
-        const height = between(moment, next, 'z')
+      if (moment.motion[2] > 0 && to.motion[2] <= 0) {
+        const height = between(moment, to, 'z')
         apexMetres = placeAt(height, shareAtTurn(height))
       }
-      if (next.z <= 0) {
-        const { point, ...landing } = landingOf(moment, next, launch)
+      if (to.z <= 0) {
+        const { point, ...landing } = landingOf(moment, to, launch)
         return { ...landing, apexMetres, track: [...track, point] }
       }
-      moment = stepper.keep(moment)
+      moment = to
       track.push(pointOf(moment))
     }
     seconds *= stretchOf({ tolerance, error })
@@ -81,7 +80,7 @@ function motionOf({ speedMps, upDeg, startDeg, spinRpm, tiltDeg }: Launch): Moti
     throw new RangeError('a launch has a speed, and goes up from the ground')
   }
   const [vx, vy, vz] = scale(direction({ upDeg, rightDeg: startDeg }), speedMps)
-  return { vx, vy, vz, spin: (spinRpm * 2 * Math.PI) / 60 }
+  return [vx, vy, vz, (spinRpm * 2 * Math.PI) / 60]
 }
 
 /** The spin's axis: across the start, to the right, and tilted; so that backspin lifts. */
@@ -96,24 +95,27 @@ function axisOf({ startDeg, tiltDeg }: Launch): Vector {
  * Newton's law for the ball: gravity, drag ½ρV²A·CD against its way through the air, lift ½ρV²A·CL
  * along axis × way, and dω/dt = −½ρV²A·Cm·2r/(0.4·m·r²).
  */
-function rateOf(launch: Launch, { air, ball }: Pick<FlightOptions, 'air' | 'ball'>): Rate {
+function forcesOn(launch: Launch, { air, ball }: Pick<FlightOptions, 'air' | 'ball'>): Rate {
   const [ax, ay, az] = axisOf(launch)
   const { densityKgM3, windAlongMps, windRightMps } = air
   const pressing = (0.5 * densityKgM3 * AREA_M2) / BALL_KG
   const slowing =
     (0.5 * densityKgM3 * AREA_M2 * 2 * BALL_RADIUS_METRES) /
     (INERTIA_SHARE * BALL_KG * BALL_RADIUS_METRES ** 2)
-  return ({ vx, vy, vz, spin }, into) => {
-    const ux = vx - windAlongMps
-    const uy = vy + windRightMps
-    const speed = Math.sqrt(ux * ux + uy * uy + vz * vz)
-    const spinRatio = speed > 0 ? (spin * BALL_RADIUS_METRES) / speed : 0
+  return (motion) => {
+    const ux = motion[0] - windAlongMps
+    const uy = motion[1] + windRightMps
+    const uz = motion[2]
+    const speed = Math.sqrt(ux * ux + uy * uy + uz * uz)
+    const spinRatio = speed > 0 ? (motion[3] * BALL_RADIUS_METRES) / speed : 0
     const drag = pressing * ball.drag(speed, spinRatio) * speed
     const lift = pressing * ball.lift(speed, spinRatio) * speed
-    into.vx = lift * (ay * vz - az * uy) - drag * ux
-    into.vy = lift * (az * ux - ax * vz) - drag * uy
-    into.vz = lift * (ax * uy - ay * ux) - drag * vz - GRAVITY_MPS2
-    into.spin = -slowing * ball.moment(spinRatio) * speed * speed
+    return [
+      lift * (ay * uz - az * uy) - drag * ux,
+      lift * (az * ux - ax * uz) - drag * uy,
+      lift * (ax * uy - ay * ux) - drag * uz - GRAVITY_MPS2,
+      -slowing * ball.moment(spinRatio) * speed * speed,
+    ]
   }
 }
 
