@@ -60,7 +60,7 @@ export function launchOf(delivery: Delivery, { headKg, restitution }: ClubHead):
   return {
     speedMps: Math.hypot(x, y, z),
     upDeg: toDeg(Math.atan2(z, Math.hypot(x, y))),
-    startDeg: toDeg(Math.atan2(-y, x)),
+    startDeg: toDeg(Math.atan2(-y, x)) + 0,
     spinRpm: ((2.5 * alongFace) / BALL_RADIUS_METRES) * RPM_PER_RADIAN,
     tiltDeg: sin > 0 ? toDeg(Math.asin(-axis[2] / sin)) : 0,
     spinLoftDeg: toDeg(Math.atan2(sin, cos)),
