@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { signInWithProvider } from '../../apps/api/src/accounts/accounts'
-import { clinicFields, openAcademy } from '../support/builders'
+import { clinicFields, openAcademy, signUp } from '../support/builders'
 import { actMeanwhile } from '../support/meanwhile'
 import { useWorld } from '../support/use-world'
 import { fillClinic, join } from './waitlist/queue'
@@ -52,5 +52,20 @@ describe('two at once', () => {
       code: 'invalid-fields',
       fields: { capacity: '2 places are taken already.' },
     })
+  })
+
+  it('take a place and change the dates: the place is refused in words', async () => {
+    const { slug, clinic } = await openAcademy(world)
+    const golfer = await signUp(world)
+    const { problem } = await actMeanwhile(
+      world,
+      (trx) => trx('sessions').where({ clinicId: clinic.id }).delete(),
+      () =>
+        golfer.person.call('enrolments.hold', {
+          params: { academy: slug },
+          body: { clinicId: clinic.id, for: { kind: 'me' }, hasAcceptedWaiver: true },
+        }),
+    )
+    expect(problem).toMatchObject({ code: 'not-on-sale' })
   })
 })

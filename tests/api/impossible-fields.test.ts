@@ -30,6 +30,14 @@ it('refuses a child who is still to be born', async () => {
   await guardian.person.must('golfers.add-dependant', { params, body: today })
 })
 
+it('refuses a golfer at the desk who is still to be born', async () => {
+  const { person } = academy.owner
+  const born = (bornOn: string) =>
+    person.call('golfers.enter', { params, body: { name: 'Oona Tarrant', bornOn } })
+  expect((await born('2031-03-04')).problem?.fields).toHaveProperty('bornOn')
+  expect((await born('2031-03-03')).status).toBe(200)
+})
+
 it('answers a file that is not there as one that is not there, and keeps no refusal', async () => {
   const missing = await fetch(`${world.url}/api/nothing`)
   expect(missing.status).toBe(404)

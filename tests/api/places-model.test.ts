@@ -93,6 +93,18 @@ it.each([
   ])
 })
 
+/** The second payment is heard of by a process whose clock is behind. */
+it('gives back what paid for a place, not what came a second time and has gone back', async () => {
+  await run([
+    places.hold({ who: 0, at: 0 }),
+    money.openPage({ pick: 0, isForgotten: true }),
+    money.payNow({ pick: 0 }),
+    money.passTime({ minutes: -1 }),
+    money.payPage({ pick: 0, card: money.GOOD_CARD, delivery: 'now' }),
+    places.giveUp({ pick: 0, isByStaff: false }),
+  ])
+})
+
 async function makeStage(): Promise<Stage> {
   const owner = await signUp(world, { name: 'Owner Halloran' })
   const golfers = []

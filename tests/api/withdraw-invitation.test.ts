@@ -1,5 +1,6 @@
 import { beforeAll, expect, it } from 'vitest'
 import { openAcademy, secretMailedTo, signUp, type OpenAcademy } from '../support/builders'
+import { actMeanwhile } from '../support/meanwhile'
 import { useWorld } from '../support/use-world'
 
 const world = await useWorld()
@@ -56,4 +57,18 @@ it('finds none to withdraw twice, or once it was taken up', async () => {
   expect((await owner().must('staff.list', inHere())).staff.map(({ email }) => email)).toContain(
     account.email,
   )
+})
+
+it('lets nobody in who presses while it is being withdrawn', async () => {
+  const { account, person } = await signUp(world)
+  const { id } = await invite(account.email)
+  await world.drain()
+  const token = secretMailedTo(world, account.email, 'invitation')
+  const justBefore = new Date(world.clock.now().getTime() - 1)
+  const { problem } = await actMeanwhile(
+    world,
+    (trx) => trx('invitations').where({ id }).update({ expiresAt: justBefore }),
+    () => person.call('invitations.accept', { body: { token } }),
+  )
+  expect(problem?.code).toBe('link-not-valid')
 })

@@ -102,7 +102,7 @@ export async function endInvitation(
   return changed === 1
 }
 
-/** Uses an invitation up; false when somebody already has. */
+/** Uses an invitation up; false when somebody already has, or it was withdrawn meanwhile. */
 export async function acceptInvitation(
   trx: AcademyTrx,
   { id, now }: { id: string; now: Date },
@@ -111,5 +111,6 @@ export async function acceptInvitation(
     .patch({ acceptedAt: now })
     .where({ id })
     .whereNull('acceptedAt')
+    .where('expiresAt', '>', now)
   return changed === 1
 }

@@ -95,7 +95,7 @@ export function providerRoutes(services: Services, authenticator: passport.Authe
   router.get('/auth/google/callback', (request, response, next) => {
     const returnTo = checkedReturnPath(request.session.returnTo)
     const done = (error: unknown, person?: { accountId: string } | false) => {
-      if (error && !(error instanceof Problem)) return next(error)
+      if (error && !(error instanceof Problem) && !isOfProvider(error)) return next(error)
       if (error || !person) {
         const reason = error instanceof Problem ? 'unconfirmed' : 'refused'
         return response.redirect(`/sign-in?google=${reason}&to=${encodeURIComponent(returnTo)}`)
@@ -107,3 +107,9 @@ export function providerRoutes(services: Services, authenticator: passport.Authe
   })
   return router
 }
+
+/** What the strategy throws where the provider would not, or nobody began here. */
+const PROVIDER_ERRORS = ['AuthorizationError', 'InternalOAuthError', 'TokenError']
+
+const isOfProvider = (error: unknown): boolean =>
+  error instanceof Error && PROVIDER_ERRORS.includes(error.name)

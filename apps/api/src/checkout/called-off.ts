@@ -212,7 +212,7 @@ export interface MoneySource {
 export async function sourceOf(trx: AcademyTrx, enrolmentId: string): Promise<MoneySource> {
   const order = (await lockLiveOrder(trx, enrolmentId)) ?? null
   const owedMinor = order?.method === 'desk' ? await readOwedAtDesk(trx, order.id) : 0
-  const payments = order ? await listPaymentsOf(trx, [order.id]) : []
+  const payments = order ? await listPaymentsOf(trx, order.id) : []
   const card = payments.find(({ method }) => method === 'card')
   if (card) return { order, paymentId: card.id, from: 'provider-clearing', owedMinor }
   const [cash] = payments

@@ -74,7 +74,7 @@ async function reckon(trx: AcademyTrx, given: GivingUp, now: Date): Promise<Reck
       state === 'confirmed' && sessionState === 'planned' && startsAt > now,
   )
   if (ahead.length === 0) {
-    throw new Problem('already-decided', 'Every session of this has begun.')
+    throw new Problem('already-decided', 'Every session of this has begun, or was called off.')
   }
   let bestBasisPoints = 0
   const places = ahead.map((place) => {

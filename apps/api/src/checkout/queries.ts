@@ -37,13 +37,13 @@ export async function insertPayment(trx: AcademyTrx, row: Partial<Payment>): Pro
   return (await Payment.query(trx).where({ id: row.id }).resultSize()) === 1
 }
 
-export async function listPaymentsOf(
-  trx: AcademyTrx,
-  orderIds: readonly string[],
-): Promise<Payment[]> {
+/** The payments that an order stands on; one that found its place gone, or paid, goes back whole. */
+export async function listPaymentsOf(trx: AcademyTrx, orderId: string): Promise<Payment[]> {
+  const givenBack = Refund.query(trx).select('sourceId').where({ reason: 'late-payment' })
   return Payment.query(trx)
-    .whereIn('orderId', [...orderIds])
-    .orderBy('takenAt')
+    .where({ orderId })
+    .whereNotIn('id', givenBack)
+    .orderBy(['takenAt', 'id'])
 }
 
 export async function findPayment(trx: AcademyTrx, id: string): Promise<Payment | undefined> {

@@ -12,7 +12,8 @@ import { isFull } from './rules'
  * Takes places for a golfer: the enrolment and its places first, the seats last before commit, all
  * or nothing. What costs nothing is confirmed at once; the rest is held until `heldUntil`.
  * Resolves to what `meanwhile` makes of the enrolment's id: it asks what does not hang on the seats,
- * and goes out before them. Throws `session-full` and `already-has-place`.
+ * and goes out before them. Throws `session-full`, `already-has-place`, and `not-on-sale` when its
+ * dates are changed in between.
  */
 export async function takePlaces<T>(
   services: Services,
@@ -51,7 +52,7 @@ export async function takePlaces<T>(
   const sessionIds = taken.map((session) => session.id)
   const event = { academyId: academy.academyId, enrolmentId: id }
   const [, , answer, seats] = await together(
-    sayDouble(insertEnrolment(trx, enrolment, places)),
+    sayWhatCame(insertEnrolment(trx, enrolment, places)),
     isFree ? services.outbox.emit(trx, 'enrolment.confirmed', event) : Promise.resolve(),
     given.meanwhile(id),
     takeSeats(trx, { sessionIds, as: state }),
@@ -69,14 +70,18 @@ const sessionFull = () =>
   new Problem('session-full', 'The last place has just gone. You can join the waitlist.')
 
 const UNIQUE_VIOLATION = '23505'
+const FOREIGN_KEY_VIOLATION = '23503'
 
-async function sayDouble<T>(writing: Promise<T>): Promise<T> {
+async function sayWhatCame<T>(writing: Promise<T>): Promise<T> {
   try {
     return await writing
   } catch (error) {
     const { code, constraint } = refusalOf(error)
     if (code === UNIQUE_VIOLATION && constraint === 'places_one_while_active') {
       throw new Problem('already-has-place', 'This golfer has a place there already.')
+    }
+    if (code === FOREIGN_KEY_VIOLATION) {
+      throw new Problem('not-on-sale', 'The dates have just been changed. Please choose again.')
     }
     throw error
   }

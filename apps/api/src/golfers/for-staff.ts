@@ -7,6 +7,7 @@ import { invariant } from '../platform/invariant'
 import { localDayOf } from '../platform/local-day'
 import type { Services } from '../platform/services'
 import { inAcademy, type AcademyTrx } from '../platform/tenancy/transaction'
+import { refuseBornLater } from './golfers'
 import { datedHandicap } from './handicap'
 import type { Golfer } from './models'
 import {
@@ -102,6 +103,7 @@ export async function enterGolfer(
   return inAcademy(db, academyId, async (trx) => {
     const now = clock.now()
     const id = newId(now)
+    await refuseBornLater(trx, { bornOn: wanted.bornOn, now })
     await insertGolfer(trx, {
       id,
       name: wanted.name,

@@ -88,8 +88,8 @@ export async function addDependant(
   await lockGuardian(trx, guardianId)
   const had = await findDependant(trx, { guardianAccountId: guardianId, name, bornOn })
   if (had) return had
-  const { safeguarding, zone } = await readAcademy(trx)
-  if (bornOn > localDayOf(now, zone)) throw bornLater()
+  const { safeguarding } = await readAcademy(trx)
+  await refuseBornLater(trx, { bornOn, now })
   const id = newId(now)
   await insertGolfer(trx, {
     id,
@@ -113,11 +113,16 @@ export async function addDependant(
   return golfer
 }
 
-const bornLater = () => {
+/** Nobody was born on a day that is still to come. Throws `invalid-fields`. */
+export async function refuseBornLater(
+  trx: AcademyTrx,
+  { bornOn, now }: { bornOn: string | null | undefined; now: Date },
+): Promise<void> {
+  if (!bornOn || bornOn <= localDayOf(now, (await readAcademy(trx)).zone)) return
   const sentence = 'This day is still to come.'
   // The same fields stand alone in one form and inside another.
   const fields = { bornOn: sentence, 'for.dependant.bornOn': sentence }
-  return new Problem('invalid-fields', sentence, fields)
+  throw new Problem('invalid-fields', sentence, fields)
 }
 
 export async function recordConsent(

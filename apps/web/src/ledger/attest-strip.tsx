@@ -49,7 +49,7 @@ export function AttestStrip(props: Openable & { card: MoneyCard; format: Format 
       <div>
         <dt>Still to be earned</dt>
         <dd>{format.money(card.toEarnMinor)}</dd>
-        <dd>net, for sessions not yet held</dd>
+        <dd>net, for sessions not yet held, of any year</dd>
       </div>
     </dl>
   )
