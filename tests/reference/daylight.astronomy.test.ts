@@ -3,7 +3,7 @@ import { getTimes } from 'suncalc'
 import { describe, expect, it } from 'vitest'
 import { sunTimes } from '@marram/schedule'
 
-/** Two libraries that know nothing of each other, over places and dates; 60 s as in REFERENCES §5. */
+/** Two libraries that know nothing of each other, over places and dates; to within 60 s. */
 const TOLERANCE_SECONDS = 60
 const HALF_DAY = 43_200_000
 const STEP_DAYS = process.env['MARRAM_DEEP'] === '1' ? 1 : 9
