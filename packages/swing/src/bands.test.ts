@@ -63,9 +63,9 @@ describe('twelve degrees of extension less at impact', () => {
       )
     const before = fly({ openDeg: 4, loftDeg: IRON.loftDeg })
     const after = fly(pairAt(0).leanHeld)
-    expect(before.curveMetres.from).toBeGreaterThan(after.curveMetres.to)
+    expect(before.curveMetres.least).toBeGreaterThan(after.curveMetres.most)
     expect(isSettled(before.curveMetres, after.curveMetres)).toBe(true)
-    expect(before.apexMetres.to).toBeGreaterThan(after.apexMetres.from)
+    expect(before.apexMetres.most).toBeGreaterThan(after.apexMetres.least)
   })
 })
 
@@ -77,8 +77,8 @@ it('has a band over the ball models, and over every case that it is given', () =
     [launchOf(delivery, club), launchOf({ ...delivery, faceDeg: 3 }, club)],
     still,
   )
-  expect(one.carryMetres.from).toBeLessThan(one.carryMetres.to)
-  expect(two.curveMetres.to).toBeGreaterThan(one.curveMetres.to)
-  expect(two.startDeg).toEqual({ from: 0, to: expect.closeTo(2.5, 0) as number })
+  expect(one.carryMetres.least).toBeLessThan(one.carryMetres.most)
+  expect(two.curveMetres.most).toBeGreaterThan(one.curveMetres.most)
+  expect(two.startDeg).toEqual({ least: 0, most: expect.closeTo(2.5, 0) as number })
   expect(() => flightBand([], still)).toThrow(RangeError)
 })

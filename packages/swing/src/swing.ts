@@ -1,6 +1,6 @@
 export { airDensityKgM3, standardCelsius, type Air } from './air'
 export { BALL_MODELS, FITTED_BALL, TUNNEL_BALL, type BallModel } from './ball-models'
-export { bandOf, flightBand, isSettled, type Band, type FlightBand } from './bands'
+export { flightBand, isSettled, mirrored, type Band, type FlightBand } from './bands'
 export {
   USUAL_ERROR_DEG,
   changeOf,

@@ -1,7 +1,14 @@
-import { CLUBS, WRIST_LIMITS, faceAfter, type ClubName, type WristAngles } from '@marram/swing'
+import {
+  CLUBS,
+  WRIST_LIMITS,
+  faceAfter,
+  type ClubName,
+  type FlightBand,
+  type WristAngles,
+} from '@marram/swing'
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { workOut, type FlightBand, type Side } from './worked-out'
+import { workOut, type Side } from './worked-out'
 
 const toRad = (deg: number) => (deg * Math.PI) / 180
 /** A lead wrist as coaches say it: degrees of extension, and towards the little finger. */

@@ -1,17 +1,16 @@
 import {
-  BALL_MODELS,
   CLUBS,
   USUAL_GRIP,
   airDensityKgM3,
   faceAfter,
-  flightOf,
+  flightBand,
   launchOf,
+  mirrored,
   type Air,
   type ClubName,
   type Face,
   type FaceBand,
-  type Flight,
-  type Launch,
+  type FlightBand,
   type WristAngles,
 } from '@marram/swing'
 import { USUAL_DELIVERY, type UsualDelivery } from './defaults'
@@ -21,24 +20,6 @@ export interface Side {
   impact: WristAngles
   delivery: { [Part in 'faceDeg' | keyof UsualDelivery]: number | null }
 }
-
-export interface Range {
-  least: number
-  most: number
-}
-
-const FIGURES = [
-  'startDeg',
-  'curveMetres',
-  'sideMetres',
-  'carryMetres',
-  'apexMetres',
-  'seconds',
-  'landingDeg',
-] as const
-type Figures = Record<(typeof FIGURES)[number], number>
-
-export type FlightBand = Record<keyof Figures, Range> & { rises: 'always' | 'sometimes' | 'never' }
 
 export interface WorkedOut {
   anchoredTo: 'from' | 'to' | 'square'
@@ -66,7 +47,7 @@ export function workOut({ hand, ...pair }: Pair & { hand: Hand }): WorkedOut {
   const { anchoredTo, ...face } = facesOf(pair)
   const { from, to, club } = pair
   const fly = (side: Side, other: Side, faces: FaceBand) =>
-    flightBand(faces, {
+    flightFrom(faces, {
       club,
       hand,
       faceDeg: side.delivery.faceDeg,
@@ -121,7 +102,7 @@ const STILL_AIR: Air = {
   windRightMps: 0,
 }
 
-function flightBand(
+function flightFrom(
   faces: FaceBand,
   given: UsualDelivery & { club: ClubName; hand: Hand; faceDeg: number | null },
 ): FlightBand {
@@ -130,49 +111,7 @@ function flightBand(
     // What was measured of this face outranks what the other's would make of it.
     launchOf({ ...delivery, faceDeg: faceDeg ?? openDeg, loftDeg }, CLUBS[club]),
   )
-  const flown = launches.flatMap((launch) => BALL_MODELS.map((ball) => fly(launch, ball)))
-  const seen = hand === 'left' ? flown.map(mirrored) : flown
-  const risen = launches.filter(doesRise).length
-  const rises = risen === launches.length ? 'always' : risen > 0 ? 'sometimes' : 'never'
-  return { ...rangesOf(seen), rises }
-}
-
-const doesRise = ({ upDeg, speedMps }: Launch): boolean => speedMps > 0 && upDeg > 0 && upDeg < 90
-
-/** A ball that does not rise carries nothing, and starts where the face sends it. */
-function fly(launch: Launch, ball: (typeof BALL_MODELS)[number]): Figures {
-  const { startDeg } = launch
-  if (!doesRise(launch)) return { ...ALONG_THE_GROUND, startDeg }
-  return { ...flightOf(launch, { air: STILL_AIR, ball }), startDeg }
-}
-
-const ALONG_THE_GROUND: Omit<Flight, 'track' | 'landingSpeedMps'> = {
-  curveMetres: 0,
-  sideMetres: 0,
-  carryMetres: 0,
-  apexMetres: 0,
-  seconds: 0,
-  landingDeg: 0,
-}
-
-/** A left-hander's ball is a right-hander's in the mirror. This is the one place that turns it. */
-function mirrored(figures: Figures): Figures {
-  return {
-    ...figures,
-    startDeg: -figures.startDeg,
-    curveMetres: -figures.curveMetres,
-    sideMetres: -figures.sideMetres,
-  }
-}
-
-function rangesOf(flown: readonly Figures[]): Record<keyof Figures, Range> {
-  const rangeOf = (figure: keyof Figures): Range => {
-    const values = flown.map((figures) => figures[figure])
-    return { least: Math.min(...values), most: Math.max(...values) }
-  }
-  // Each figure is there once, which an object made of pairs no longer tells.
-  return Object.fromEntries(FIGURES.map((figure) => [figure, rangeOf(figure)])) as Record<
-    keyof Figures,
-    Range
-  >
+  const flight = flightBand(launches, STILL_AIR)
+  // The one place where a left-hander's ball is turned.
+  return hand === 'left' ? mirrored(flight) : flight
 }
